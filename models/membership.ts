@@ -1,0 +1,21 @@
+import { DataTypes, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+
+/** What a person is in a team. */
+export class Membership extends Model<InferAttributes<Membership>, InferCreationAttributes<Membership>> {
+  declare team_id: Buffer;
+  declare user_id: Buffer;
+  declare role: string;
+}
+
+/** Puts the model of `memberships` on a connection. */
+export function defineMembership(sequelize: Sequelize): typeof Membership {
+  class Bound extends Membership {}
+  return Bound.init(
+    {
+      team_id: { type: 'BINARY(16)', primaryKey: true },
+      user_id: { type: 'BINARY(16)', primaryKey: true },
+      role: { type: DataTypes.STRING(32), allowNull: false },
+    },
+    { sequelize, modelName: 'Membership', tableName: 'memberships', timestamps: false },
+  );
+}
