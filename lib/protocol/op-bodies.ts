@@ -1,23 +1,7 @@
 import { z } from 'zod';
 import { CELL_STATES } from '@/lib/comb/states';
-import { isUuidText } from '@/lib/kit/uuid';
-import { MAX_NAME, MAX_TEXT } from './limits';
+import { idText as id, nameText as name, placeValue as place, wordsText as words } from './member-types';
 import type { OpKind } from './op';
-
-/** Text of at most `max` code points. */
-function text(max: number) {
-  return z.string().refine((value) => [...value].length <= max, { message: 'too-long' });
-}
-
-const id = z.string().refine(isUuidText, { message: 'id' });
-const words = text(MAX_TEXT);
-const name = text(MAX_NAME);
-
-const place = z.strictObject({
-  lat: z.number().min(-90).max(90),
-  lon: z.number().min(-180).max(180),
-  accuracyM: z.number().min(0).max(100_000).nullish(),
-});
 
 /** What a nest, visit or reading field may be set to; `null` clears it. */
 const fieldValue = z.union([z.null(), z.boolean(), z.number(), words, place]);

@@ -23,6 +23,11 @@ export function publicUrl(): string {
   return (process.env.NEXTAUTH_URL ?? `http://127.0.0.1:${port()}`).replace(/\/$/, '');
 }
 
+/** Does our own reverse proxy stand in front (`TRUST_PROXY=1`), so that the address it reports can be believed? */
+export function behindProxy(): boolean {
+  return process.env.TRUST_PROXY === '1';
+}
+
 /** Is the demo season wanted? */
 export function demoWanted(): boolean {
   return (process.env.DEMO ?? '1') === '1';

@@ -1,0 +1,31 @@
+'use client';
+
+import type { ReactElement } from 'react';
+import { useSession } from '@/lib/offline/hooks/use-session';
+import { FieldScreen } from './field-screen';
+import { SignedOut } from './frame/signed-out';
+import { Fetching } from './parts/fetching';
+import { PersonProvider } from './parts/person-context';
+import { InnerLinks } from './routing/inner-links';
+import { useFieldPath } from './routing/use-field-path';
+
+/** The whole field app in one static page: who works here, then the screen the path names. Opens without network. */
+export function FieldApp(): ReactElement {
+  const path = useFieldPath();
+  const { view } = useSession();
+  if (path === null || view.kind === 'loading') {
+    return (
+      <div className="min-h-dvh bg-paper text-field text-ink">
+        <Fetching what="Undereave" />
+      </div>
+    );
+  }
+  if (view.kind === 'signed-out') return <SignedOut reachable={view.reachable} />;
+  return (
+    <PersonProvider person={view.person}>
+      <InnerLinks>
+        <FieldScreen path={path} />
+      </InnerLinks>
+    </PersonProvider>
+  );
+}

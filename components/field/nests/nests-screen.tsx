@@ -1,0 +1,98 @@
+'use client';
+
+import { type ReactElement, useState } from 'react';
+import { EmptyState } from '@/components/ui/empty-state';
+import { Field } from '@/components/ui/field';
+import { Input } from '@/components/ui/input';
+import { LinkButton } from '@/components/ui/link-button';
+import { FieldFrame } from '@/components/field/frame/field-frame';
+import { Fetching } from '@/components/field/parts/fetching';
+import { Part } from '@/components/field/parts/part';
+import { usePerson } from '@/components/field/parts/person-context';
+import { Screen } from '@/components/field/parts/screen';
+import { fieldHref } from '@/components/field/routing/field-route';
+import { useToday } from '@/components/field/words/use-today';
+import { useNests } from '@/lib/offline/hooks/use-nests';
+import type { NestSummary } from '@/lib/offline/nest-view';
+import { NestCard } from './nest-card';
+import { findNests, splitByDay } from './nest-lists';
+
+/** From this many nests on, a search saves scrolling. */
+const SEARCH_FROM = 7;
+
+function Cards({ nests, today }: { nests: readonly NestSummary[]; today: string }): ReactElement {
+  return (
+    <ul className="grid grid-cols-1 gap-gap md:grid-cols-2 xl:grid-cols-3">
+      {nests.map((nest) => (
+        <NestCard key={nest.id} nest={nest} today={today} />
+      ))}
+    </ul>
+  );
+}
+
+function NestSearch({ words, onChange }: { words: string; onChange: (words: string) => void }): ReactElement {
+  return (
+    <Field id="find-nest" label="Find a nest" hint="By code or name.">
+      {(control) => (
+        <Input
+          {...control}
+          type="search"
+          value={words}
+          onChange={(event) => onChange(event.target.value)}
+          className="min-h-field max-w-[40rem] border-3 text-field"
+        />
+      )}
+    </Field>
+  );
+}
+
+/** All nests in two groups, with a search when they are many. */
+function NestGroups({ nests }: { nests: readonly NestSummary[] }): ReactElement {
+  const today = useToday(usePerson().zone);
+  const [words, setWords] = useState('');
+  const { today: now, others } = splitByDay(findNests(nests, words), today);
+  return (
+    <>
+      {nests.length >= SEARCH_FROM && <NestSearch words={words} onChange={setWords} />}
+      {now.length > 0 && (
+        <Part title="Today">
+          <Cards nests={now} today={today} />
+        </Part>
+      )}
+      {others.length > 0 && (
+        <Part title={now.length > 0 ? 'Other nests on this phone' : 'Nests on this phone'}>
+          <Cards nests={others} today={today} />
+        </Part>
+      )}
+      {now.length + others.length === 0 && <p role="status">No nest has these words in its code or name.</p>}
+    </>
+  );
+}
+
+function Home({ nests }: { nests: readonly NestSummary[] }): ReactElement {
+  return (
+    <Screen title="Today’s nests" wide>
+      <LinkButton tone="main" size="field" href={fieldHref({ kind: 'new-nest' })} className="w-full text-xl md:max-w-[40rem]">
+        Start a nest
+      </LinkButton>
+      {nests.length === 0 ? (
+        <EmptyState title="No nest on this phone yet">
+          <p>Start one at the nest, with or without signal. Nests of your team come here when there is signal.</p>
+        </EmptyState>
+      ) : (
+        <NestGroups nests={nests} />
+      )}
+      <nav aria-label="More">
+        <LinkButton size="field" href={fieldHref({ kind: 'settings' })}>
+          Settings
+        </LinkButton>
+      </nav>
+    </Screen>
+  );
+}
+
+/** The first screen: the nests of the day, and the large key that starts another. */
+export function NestsScreen(): ReactElement {
+  const nests = useNests();
+  return <FieldFrame help="nests">{nests ? <Home nests={nests} /> : <Fetching what="Nests" />}</FieldFrame>;
+}

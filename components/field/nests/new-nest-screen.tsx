@@ -1,0 +1,87 @@
+'use client';
+
+import { type FormEvent, type ReactElement, useState } from 'react';
+import { Button } from '@/components/ui/button';
+import { Field } from '@/components/ui/field';
+import { Input } from '@/components/ui/input';
+import { FieldFrame } from '@/components/field/frame/field-frame';
+import { NotSavedNotice } from '@/components/field/parts/not-saved-notice';
+import { Screen } from '@/components/field/parts/screen';
+import { fieldHref } from '@/components/field/routing/field-route';
+import { goInstead } from '@/components/field/routing/use-field-path';
+import { keepStorage } from '@/components/field/settings/storage-space';
+import { useCommands } from '@/lib/offline/hooks/use-commands';
+import type { Place } from '@/lib/offline/nest-view';
+import { PlaceField } from './place-field';
+
+const WIDE_INPUT = 'min-h-field border-3 text-field';
+
+interface NestForm {
+  code: string;
+  name: string;
+  taxon: string;
+  place: Place | null;
+}
+
+const BLANK: NestForm = { code: '', name: '', taxon: '', place: null };
+
+/** Text as it is stored: without space at the ends, null when there is none. */
+const textOrNull = (text: string): string | null => text.trim() || null;
+
+/** Keeps the new nest and shows it. `failed` turns true when the phone could not. */
+function useNewNest(form: NestForm) {
+  const commands = useCommands();
+  const [state, setState] = useState<'ready' | 'no-code' | 'saving' | 'failed'>('ready');
+  const start = async (event: FormEvent): Promise<void> => {
+    event.preventDefault();
+    const code = form.code.trim();
+    if (code === '') return setState('no-code');
+    if (!commands || state === 'saving') return;
+    setState('saving');
+    try {
+      const id = await commands.openNest({ code, name: textOrNull(form.name), taxon: textOrNull(form.taxon), place: form.place });
+      void keepStorage();
+      goInstead(fieldHref({ kind: 'nest', id }));
+    } catch {
+      setState('failed');
+    }
+  };
+  return { state, start };
+}
+
+/** Starts a nest: a code is enough, the rest can wait. */
+export function NewNestScreen(): ReactElement {
+  const [form, setForm] = useState(BLANK);
+  const { state, start } = useNewNest(form);
+  const put = (part: Partial<NestForm>): void => setForm({ ...form, ...part });
+  return (
+    <FieldFrame back={{ href: fieldHref({ kind: 'nests' }), to: 'the nests' }} help="nests">
+      <Screen title="Start a nest">
+        <form onSubmit={(event) => void start(event)} noValidate className="flex flex-col gap-6">
+          <Field
+            id="nest-code"
+            label="Code"
+            hint="As on the label, such as N12."
+            required
+            error={state === 'no-code' ? 'A nest needs a code. Any short one will do.' : null}
+          >
+            {(control) => (
+              <Input {...control} value={form.code} onChange={(e) => put({ code: e.target.value })} maxLength={40} autoCapitalize="characters" autoComplete="off" className={WIDE_INPUT} />
+            )}
+          </Field>
+          <Field id="nest-name" label="Where it hangs" hint="Such as Bandstand roof. Can wait.">
+            {(control) => <Input {...control} value={form.name} onChange={(e) => put({ name: e.target.value })} maxLength={200} autoComplete="off" className={WIDE_INPUT} />}
+          </Field>
+          <Field id="nest-taxon" label="Taxon" hint="Scientific name, if you are sure of it. Can wait.">
+            {(control) => <Input {...control} value={form.taxon} onChange={(e) => put({ taxon: e.target.value })} maxLength={200} autoComplete="off" className={WIDE_INPUT} />}
+          </Field>
+          <PlaceField place={form.place} onChange={(place) => put({ place })} />
+          {state === 'failed' && <NotSavedNotice what="the nest" />}
+          <Button type="submit" tone="main" size="field" className="text-xl">
+            {state === 'saving' ? 'Saving …' : 'Start the nest'}
+          </Button>
+        </form>
+      </Screen>
+    </FieldFrame>
+  );
+}

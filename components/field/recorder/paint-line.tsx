@@ -1,0 +1,31 @@
+'use client';
+
+import type { ReactElement } from 'react';
+import { CellGlyph } from '@/components/comb/cell-glyph';
+import { STATE_WORDS } from '@/lib/comb/states';
+import type { Desk, Mode } from './desk';
+
+interface PaintLineProps {
+  desk: Desk;
+  mode: Extract<Mode, { kind: 'paint' }>;
+}
+
+/** Stands where the current cell is named in the walk: nobody can miss that taps paint now. */
+export function PaintLine({ desk, mode }: PaintLineProps): ReactElement {
+  return (
+    <div className="flex min-h-16 items-center gap-3 rounded-xl bg-main px-4 py-2 text-main-on">
+      <CellGlyph state={mode.state} size={44} />
+      <p className="min-w-0 flex-1 leading-tight">
+        <span className="block text-2xl font-bold">Paint: {STATE_WORDS[mode.state]}</span>
+        Tap the cells. Keys change the state.
+      </p>
+      <button
+        type="button"
+        onClick={() => desk.setMode({ kind: 'walk' })}
+        className="min-h-field shrink-0 touch-manipulation rounded-lg border-3 border-main-on px-3 font-bold"
+      >
+        Stop painting
+      </button>
+    </div>
+  );
+}

@@ -1,0 +1,65 @@
+'use client';
+
+import { type ReactElement, useEffect, useEffectEvent, useState } from 'react';
+import { FieldFrame } from '@/components/field/frame/field-frame';
+import type { PressState } from '@/components/field/frame/corner-status';
+import { fieldHref } from '@/components/field/routing/field-route';
+import type { Recorder, RecorderView } from '@/lib/offline/recorder-view';
+import { countedOf } from './counted-query';
+import { FinishSummary } from './finish-summary';
+import { type NestLabel, useNestLabel } from './nest-label';
+import { RecorderDesk } from './recorder-desk';
+import { useDesk } from './use-desk';
+import { useWakeLock } from './use-wake-lock';
+
+/** What the corner must say about presses the queue does not know of yet. */
+function pressState({ unsaved, pending }: Pick<RecorderView, 'unsaved' | 'pending'>): PressState {
+  if (unsaved.length > 0) return 'not-saved';
+  return pending > 0 ? 'saving' : null;
+}
+
+/** Takes over, once, the number of cells counted when the reading was started. */
+function useCounted(recorder: Recorder): void {
+  const take = useEffectEvent(() => {
+    const counted = countedOf(window.location.search);
+    if (counted === null) return;
+    if (recorder.view.expectedTotal === null) recorder.expect(counted);
+    window.history.replaceState(null, '', window.location.pathname);
+  });
+  useEffect(() => take(), []);
+}
+
+function HeaderTitle({ label }: { label: NestLabel }): ReactElement {
+  return (
+    <p className="min-w-0">
+      <span className="block truncate font-bold">{label.code}</span>
+      {label.name && <span className="block truncate">{label.name}</span>}
+    </p>
+  );
+}
+
+/** Reading a comb, from the first cell to handing in. */
+export function RecorderScreen({ recorder }: { recorder: Recorder }): ReactElement {
+  const { view } = recorder;
+  const desk = useDesk(recorder);
+  const { label, reader } = useNestLabel(view.nest);
+  const [finishing, setFinishing] = useState(false);
+  useWakeLock();
+  useCounted(recorder);
+  return (
+    <FieldFrame
+      back={{ href: fieldHref({ kind: 'visit', id: view.visit }), to: 'the visit' }}
+      title={<HeaderTitle label={label} />}
+      help="recorder"
+      reading
+      press={pressState(view)}
+    >
+      {reader}
+      {finishing ? (
+        <FinishSummary desk={desk} label={label} onBack={() => setFinishing(false)} />
+      ) : (
+        <RecorderDesk desk={desk} title={label.title} onFinish={() => setFinishing(true)} />
+      )}
+    </FieldFrame>
+  );
+}

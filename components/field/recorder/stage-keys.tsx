@@ -1,0 +1,74 @@
+'use client';
+
+import type { ReactElement } from 'react';
+import { CellGlyph } from '@/components/comb/cell-glyph';
+import { type CellState, EVERYDAY_STATES, FURTHER_STATES } from '@/lib/comb/states';
+
+/** The word on a key; short, because the six everyday keys are read hundreds of times a day. */
+const KEY_WORDS: Readonly<Record<CellState, string>> = {
+  unread: 'Unread',
+  empty: 'Empty',
+  egg: 'Egg',
+  small: 'Small',
+  medium: 'Medium',
+  large: 'Large',
+  capped: 'Capped',
+  opened: 'Opened',
+  dead: 'Dead',
+  parasitised: 'Parasitised',
+  webbed: 'Webbed',
+  damaged: 'Damaged',
+};
+
+interface StageKeyProps {
+  state: CellState;
+  /** The state of the current cell, or the one being painted with. */
+  chosen: boolean;
+  onPress: (state: CellState) => void;
+}
+
+/** One key: the cell as it is drawn on the comb, over its word in black on white. Acts on release inside it. */
+function StageKey({ state, chosen, onPress }: StageKeyProps): ReactElement {
+  return (
+    <button
+      type="button"
+      aria-pressed={chosen}
+      onClick={() => onPress(state)}
+      className="flex h-[clamp(5.625rem,12dvh,7.5rem)] min-w-0 touch-manipulation flex-col overflow-hidden rounded-xl border-3 border-ink bg-paper font-bold select-none active:border-main active:bg-main-wash aria-pressed:outline-4 aria-pressed:-outline-offset-1 aria-pressed:outline-main"
+    >
+      <span className={`comb-cell cell-${state} flex w-full flex-1 items-center justify-center bg-[var(--cell)]`}>
+        <CellGlyph state={state} size={48} />
+      </span>
+      <span className="w-full border-t-3 border-ink py-0.5 text-xl leading-tight">{KEY_WORDS[state]}</span>
+    </button>
+  );
+}
+
+interface StageKeysProps {
+  chosen: CellState | null;
+  onPress: (state: CellState) => void;
+}
+
+/** The six everyday states. */
+export function EverydayKeys(props: StageKeysProps): ReactElement {
+  return <Keys states={EVERYDAY_STATES} {...props} />;
+}
+
+/** The states that are seldom seen. */
+export function FurtherKeys(props: StageKeysProps): ReactElement {
+  return (
+    <div className="grid grid-cols-2 gap-gap sm:grid-cols-3">
+      <Keys states={FURTHER_STATES} {...props} />
+    </div>
+  );
+}
+
+function Keys({ states, chosen, onPress }: StageKeysProps & { states: readonly CellState[] }): ReactElement {
+  return (
+    <>
+      {states.map((state) => (
+        <StageKey key={state} state={state} chosen={state === chosen} onPress={onPress} />
+      ))}
+    </>
+  );
+}

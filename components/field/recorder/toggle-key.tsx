@@ -1,0 +1,26 @@
+'use client';
+
+import type { ReactElement, ReactNode } from 'react';
+
+interface ToggleKeyProps {
+  pressed: boolean;
+  onPress: () => void;
+  /** A small sign before the word. */
+  sign?: ReactNode;
+  children: string;
+}
+
+/** A mark that is on or off: dashed and white, or solid and black with a tick. */
+export function ToggleKey({ pressed, onPress, sign, children }: ToggleKeyProps): ReactElement {
+  return (
+    <button
+      type="button"
+      aria-pressed={pressed}
+      onClick={onPress}
+      className="flex min-h-16 min-w-0 touch-manipulation items-center justify-center gap-1 rounded-xl border-3 border-dashed border-ink bg-paper px-1 font-bold select-none active:bg-main-wash aria-pressed:border-solid aria-pressed:bg-ink aria-pressed:text-paper"
+    >
+      {pressed ? <span aria-hidden="true">✓</span> : sign}
+      {children}
+    </button>
+  );
+}

@@ -1,0 +1,66 @@
+'use client';
+
+import type { ReactElement } from 'react';
+import { DescriptionList } from '@/components/ui/description-list';
+import { FieldFrame } from '@/components/field/frame/field-frame';
+import { Part } from '@/components/field/parts/part';
+import { usePerson } from '@/components/field/parts/person-context';
+import { Screen } from '@/components/field/parts/screen';
+import { canKeepAwake } from '@/components/field/recorder/use-wake-lock';
+import { fieldHref } from '@/components/field/routing/field-route';
+import { useSession } from '@/lib/offline/hooks/use-session';
+import type { Person, SessionView } from '@/lib/offline/session-view';
+import { SignOutPart } from './sign-out-part';
+import { StoragePart } from './storage-part';
+
+const ROLE_WORDS: Readonly<Record<Person['role'], string>> = {
+  technician: 'technician',
+  reviewer: 'reviewer',
+  biologist: 'lead biologist',
+  coordinator: 'coordinator',
+  researcher: 'researcher',
+};
+
+/** Whether the office knows this phone. */
+function phoneWords(view: SessionView): string {
+  const enrolled = 'enrolled' in view && view.enrolled;
+  return enrolled ? 'Known to the office.' : 'Not known to the office yet. That happens by itself with signal.';
+}
+
+function WhoPart({ person, view }: { person: Person; view: SessionView }): ReactElement {
+  return (
+    <Part title="Who and where">
+      <DescriptionList
+        items={[
+          { term: 'Signed in as', children: <strong>{person.displayName}</strong> },
+          { term: 'Role', children: ROLE_WORDS[person.role] },
+          { term: 'Team', children: person.teamName },
+          { term: 'Dates and times in', children: person.zone },
+          { term: 'This phone', children: phoneWords(view) },
+        ]}
+      />
+    </Part>
+  );
+}
+
+/** Who works on this phone, what it keeps, how it behaves while reading, and the way out. */
+export function SettingsScreen(): ReactElement {
+  const person = usePerson();
+  const { view } = useSession();
+  return (
+    <FieldFrame back={{ href: fieldHref({ kind: 'nests' }), to: 'the nests' }} help="settings">
+      <Screen title="Settings">
+        <WhoPart person={person} view={view} />
+        <StoragePart cleared={'storageCleared' in view && view.storageCleared} />
+        <Part title="Screen">
+          <p>
+            {canKeepAwake()
+              ? 'The screen stays awake while you read a comb.'
+              : 'This browser cannot keep the screen awake. Set the phone’s own sleep time to 10 minutes or more.'}
+          </p>
+        </Part>
+        <SignOutPart />
+      </Screen>
+    </FieldFrame>
+  );
+}

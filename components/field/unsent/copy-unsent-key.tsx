@@ -1,0 +1,35 @@
+'use client';
+
+import { type ReactElement, useState } from 'react';
+import { Button } from '@/components/ui/button';
+import { saveFile } from '@/components/field/parts/save-file';
+import { usePerson } from '@/components/field/parts/person-context';
+import { useToday } from '@/components/field/words/use-today';
+import { useOutbox } from '@/lib/offline/hooks/use-outbox';
+
+/** Makes a file of everything that is not at the office, to hand over by cable or message. Nothing is removed. */
+export function CopyUnsentKey(): ReactElement {
+  const outbox = useOutbox();
+  const today = useToday(usePerson().zone);
+  const [state, setState] = useState<'ready' | 'made' | 'failed'>('ready');
+  const copy = async (): Promise<void> => {
+    if (!outbox) return;
+    try {
+      saveFile(await outbox.exportUnsent(), `undereave-unsent-${today}.json`);
+      setState('made');
+    } catch {
+      setState('failed');
+    }
+  };
+  return (
+    <div className="flex flex-col gap-1">
+      <Button size="field" onClick={() => void copy()}>
+        Copy of everything unsent
+      </Button>
+      <p role="status">
+        {state === 'made' && 'The copy is among this phone’s downloads. Nothing was removed here.'}
+        {state === 'failed' && 'No copy could be made. Try again.'}
+      </p>
+    </div>
+  );
+}

@@ -1,0 +1,17 @@
+/** What a role is called. */
+export const ROLE_WORDS = {
+  technician: 'technician',
+  reviewer: 'reviewer',
+  biologist: 'lead biologist',
+  coordinator: 'coordinator',
+  researcher: 'researcher',
+} as const;
+
+/** One of the five roles. */
+export type RoleName = keyof typeof ROLE_WORDS;
+
+/** What a role that came as plain text is called; the text itself when it is none of ours. */
+export function roleWords(role: string): string {
+  const words: Readonly<Record<string, string>> = ROLE_WORDS;
+  return words[role] ?? role;
+}

@@ -1,0 +1,79 @@
+'use client';
+
+import { type FormEvent, type ReactElement, useState } from 'react';
+import { Button } from '@/components/ui/button';
+import { Field } from '@/components/ui/field';
+import { Input } from '@/components/ui/input';
+import { Notice } from '@/components/ui/notice';
+import { DemoSignIns, type DemoSignIn } from './demo-sign-ins';
+import { requestSignIn, type SignInResult } from './sign-in-request';
+import { signInTrouble } from './sign-in-words';
+
+interface SignInFormProps {
+  /** A path of this site to open afterwards. */
+  next: string;
+  demo: readonly DemoSignIn[];
+}
+
+/** E-mail and password; afterwards a full document load, so that the phone app starts under its own worker. */
+export function SignInForm({ next, demo }: SignInFormProps): ReactElement {
+  const [email, setEmail] = useState('');
+  const [password, setPassword] = useState('');
+  const [isSending, setSending] = useState(false);
+  const [result, setResult] = useState<SignInResult | null>(null);
+  const submit = async (event: FormEvent): Promise<void> => {
+    event.preventDefault();
+    setSending(true);
+    setResult(null);
+    const outcome = await requestSignIn({ email: email.trim(), password }, fetch);
+    if (outcome.kind === 'in') return window.location.assign(next);
+    setResult(outcome);
+    setSending(false);
+  };
+  const take = (person: DemoSignIn): void => {
+    setEmail(person.email);
+    setPassword(person.password);
+  };
+  const trouble = signInTrouble(result);
+  return (
+    <>
+      <form onSubmit={(event) => void submit(event)} className="flex flex-col gap-4" aria-label="Sign in">
+        {trouble && (
+          <Notice tone="stop" live="assertive">
+            <p>{trouble}</p>
+          </Notice>
+        )}
+        <Field id="email" label="E-mail" required>
+          {(control) => (
+            <Input
+              {...control}
+              type="email"
+              autoComplete="username"
+              maxLength={320}
+              className="min-h-12"
+              value={email}
+              onChange={(event) => setEmail(event.target.value)}
+            />
+          )}
+        </Field>
+        <Field id="password" label="Password" required>
+          {(control) => (
+            <Input
+              {...control}
+              type="password"
+              autoComplete="current-password"
+              maxLength={1024}
+              className="min-h-12"
+              value={password}
+              onChange={(event) => setPassword(event.target.value)}
+            />
+          )}
+        </Field>
+        <Button type="submit" tone="main" className="min-h-12" disabled={isSending}>
+          {isSending ? 'Signing in …' : 'Sign in'}
+        </Button>
+      </form>
+      <DemoSignIns people={demo} onTake={take} />
+    </>
+  );
+}

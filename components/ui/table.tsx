@@ -1,0 +1,40 @@
+import type { ComponentPropsWithoutRef, ReactElement, ReactNode } from 'react';
+
+interface TableProps {
+  /** What the table holds; read out, and shown when `captionShown`. */
+  caption: string;
+  captionShown?: boolean;
+  className?: string;
+  children: ReactNode;
+}
+
+/** A dense table that scrolls sideways inside itself when a narrow page can't hold it. */
+export function Table({ caption, captionShown = false, className = '', children }: TableProps): ReactElement {
+  return (
+    <div className="overflow-x-auto">
+      <table className={`w-full border-collapse text-left ${className}`}>
+        <caption className={captionShown ? 'pb-2 text-left text-quiet' : 'sr-only'}>{caption}</caption>
+        {children}
+      </table>
+    </div>
+  );
+}
+
+/** A column's heading. */
+export function HeadCell({ className = '', ...rest }: ComponentPropsWithoutRef<'th'>): ReactElement {
+  return <th scope="col" className={`border-b-2 border-ink px-2 py-1.5 align-bottom font-bold first:pl-0 ${className}`} {...rest} />;
+}
+
+/** A cell of the body; `number` sets figures right-aligned in the mono face. */
+export function BodyCell({ number = false, className = '', ...rest }: BodyCellProps): ReactElement {
+  return (
+    <td
+      className={`border-b border-rule px-2 py-1.5 align-top first:pl-0 ${number ? 'text-right font-mono' : ''} ${className}`}
+      {...rest}
+    />
+  );
+}
+
+interface BodyCellProps extends ComponentPropsWithoutRef<'td'> {
+  number?: boolean;
+}

@@ -1,0 +1,76 @@
+import { DEFAULT_DURATIONS, type DurationRow } from './durations';
+import type { Trust } from './trust';
+
+/** One number of the model, with how far it can be trusted and where it comes from. */
+export interface Setting {
+  value: number;
+  trust: Trust;
+  source: string;
+}
+
+/** What each number is, in which unit, and the values it may take. */
+interface SettingRule {
+  label: string;
+  unit: string;
+  min: number;
+  max: number;
+}
+
+/** Every number the estimate uses, by name. Variation below 0.05 is refused: it would need thousands of phases. */
+export const SETTING_RULES = {
+  instar5Share: { label: 'share of the larval time spent as instar 5', unit: '', min: 0.05, max: 0.9 },
+  cvEgg: { label: 'individual variation of the egg stage', unit: 'CV', min: 0.05, max: 1 },
+  cvInstar: { label: 'individual variation of each larval instar', unit: 'CV', min: 0.05, max: 1 },
+  cvCapped: { label: 'individual variation of the capped stage', unit: 'CV', min: 0.05, max: 1 },
+  nestFactorCv: { label: 'variation shared by a whole nest', unit: 'CV', min: 0, max: 1 },
+  lossEgg: { label: 'loss of eggs', unit: 'per day', min: 0, max: 1 },
+  lossLarva: { label: 'loss of larvae', unit: 'per day', min: 0, max: 1 },
+  lossCapped: { label: 'loss of capped brood', unit: 'per day', min: 0, max: 1 },
+  foundingLead: { label: 'from founding to the first egg', unit: 'days', min: 0, max: 30 },
+  priorSpan: { label: 'how long before a reading an egg may have been laid', unit: 'days', min: 30, max: 365 },
+  forecastSpan: { label: 'how far emergence is forecast', unit: 'days', min: 1, max: 60 },
+  amberWindow: { label: 'season gate turns amber before first emergence', unit: 'days', min: 0, max: 60 },
+  redWindow: { label: 'season gate turns red before first emergence', unit: 'days', min: 0, max: 60 },
+  guardWindow: { label: 'capped nests this close to first emergence are guarded', unit: 'days', min: 0, max: 60 },
+  relayWindow: { label: 'capped to egg within this time is asked about', unit: 'days', min: 0, max: 60 },
+} as const satisfies Record<string, SettingRule>;
+
+/** The name of one number of the model. */
+export type SettingName = keyof typeof SETTING_RULES;
+
+/** One version of all numbers behind an estimate. */
+export interface BroodSettings {
+  /** Names this version in every answer made with it. */
+  version: string;
+  values: Readonly<Record<SettingName, Setting>>;
+  durations: readonly DurationRow[];
+}
+
+const assumed = (value: number, source: string): Setting => ({ value, trust: 'assumption', source });
+
+const LOSS_SOURCE = 'no published daily loss by stage; order egg > larva > capped only';
+const SPREAD_SOURCE = 'no published standard deviation for a temperate species';
+const GATE_SOURCE = 'programme default; owned by the lead biologist';
+
+/** The settings a new team starts with. */
+export const DEFAULT_SETTINGS: BroodSettings = {
+  version: '2026.1',
+  values: {
+    instar5Share: assumed(1 / 3, 'no published duration of any instar; instars 1-4 share the rest equally'),
+    cvEgg: assumed(0.16, SPREAD_SOURCE),
+    cvInstar: assumed(0.42, `${SPREAD_SOURCE}; five instars make 0.192 for the whole larva`),
+    cvCapped: assumed(0.16, SPREAD_SOURCE),
+    nestFactorCv: assumed(0.2, 'covers unknown temperature, food and species'),
+    lossEgg: assumed(0.01, LOSS_SOURCE),
+    lossLarva: assumed(0.005, LOSS_SOURCE),
+    lossCapped: assumed(0.002, LOSS_SOURCE),
+    foundingLead: assumed(1, 'an egg is laid as soon as a cell is begun (P. metricus); the stalk takes about a day'),
+    priorSpan: assumed(120, 'longest time an egg is searched for before the first visit'),
+    forecastSpan: assumed(60, GATE_SOURCE),
+    amberWindow: assumed(7, GATE_SOURCE),
+    redWindow: assumed(0, GATE_SOURCE),
+    guardWindow: assumed(3, GATE_SOURCE),
+    relayWindow: assumed(7, GATE_SOURCE),
+  },
+  durations: DEFAULT_DURATIONS,
+};

@@ -1,0 +1,62 @@
+import 'server-only';
+import { cellKey } from '@/lib/comb/axial';
+import type { TeamContext } from '@/lib/server/auth/team-context';
+import { toBinary, toBinaryOrNull } from '@/lib/server/db/uuid-binary';
+import { newId } from '@/lib/server/db/new-id';
+import { HttpProblem } from '@/lib/server/http/problem';
+import { idKey } from '@/lib/server/queries/id-key';
+import { liveUpTo, markHistories } from '@/lib/server/queries/mark-history';
+import { settlementsOf } from '@/lib/server/queries/reading-cells';
+import type { ReadingRow } from '@/lib/server/queries/reading-rows';
+import { auditDecision } from './audit-decision';
+import { type FinalVersion, ensureFinal, finalVersion, isClosed, updateFinal, versionOf } from './final-reading';
+import { type LabWork, labWork } from './lab-work';
+import type { SettleInput } from './settle-input';
+
+export { SETTLE_INPUT } from './settle-input';
+
+/** The mark that stands in each cell of the reading a final one was made from, by cell key. */
+async function marksBehind({ scope, source }: LabWork, final: ReadingRow): Promise<Map<string, string>> {
+  const history = (await markHistories(scope, [source.id])).get(idKey(source.id));
+  const live = history ? liveUpTo(history, final.base_seq) : [];
+  return new Map(live.map((mark) => [cellKey(mark), mark.opId]));
+}
+
+async function writeSettlements(work: LabWork, final: ReadingRow, decided: { cells: SettleInput['cells']; at: Date }) {
+  const { scope } = work;
+  const behind = await marksBehind(work, final);
+  const last = (await settlementsOf(scope, [final.id])).at(-1)?.position ?? 0;
+  await scope.db.models.Settlement.bulkCreate(
+    decided.cells.map((cell, index) => ({
+      ...cell,
+      team_id: scope.team,
+      id: toBinary(newId()),
+      reading_id: final.id,
+      version: versionOf(final),
+      position: last + 1 + index,
+      mark_op_id: toBinaryOrNull(behind.get(cellKey(cell))),
+      actor_id: scope.user,
+      created_at: decided.at,
+    })),
+    { transaction: scope.transaction },
+  );
+}
+
+/**
+ * Puts a reviewer's decisions over a reading. The observer's marks stay as they are; the first decision makes the
+ * final reading.
+ *
+ * @param input `id` of the reading or of its final one, and the cells with reasons.
+ * @param nowMs epoch milliseconds.
+ * @throws HttpProblem `not-found`, `blind`, or `locked` while the final reading is locked.
+ */
+export async function settleReading(ctx: TeamContext, input: SettleInput & { id: string }, nowMs: number): Promise<FinalVersion> {
+  return labWork(ctx, input.id, async (work) => {
+    if (isClosed(work)) throw new HttpProblem('locked');
+    const final = await ensureFinal(work, nowMs);
+    await writeSettlements(work, final, { cells: input.cells, at: new Date(nowMs) });
+    await updateFinal(work, final, { opened_by: work.scope.user });
+    await auditDecision(ctx, work, { action: 'reading.settle', final, detail: { cells: input.cells }, nowMs });
+    return finalVersion(final);
+  });
+}

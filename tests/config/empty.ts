@@ -1,0 +1,2 @@
+/** Stands in for marker modules, such as `server-only`, outside Next. */
+export {};
