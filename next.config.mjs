@@ -9,7 +9,8 @@ const EVERYWHERE = [
   { key: 'Strict-Transport-Security', value: 'max-age=31536000; includeSubDomains' },
   {
     key: 'Permissions-Policy',
-    value: 'camera=(self), geolocation=(self), screen-wake-lock=(self), microphone=(), payment=(), usb=(), browsing-topics=()',
+    value:
+      'camera=(self), geolocation=(self), screen-wake-lock=(self), microphone=(), payment=(), usb=(), browsing-topics=()',
   },
 ];
 
@@ -25,7 +26,11 @@ const config = {
   // No page shows pictures through the optimiser, so its route stays shut.
   images: { unoptimized: true },
   // The phone app is one static page; its inner paths are the client's.
-  rewrites: async () => ({ beforeFiles: [{ source: '/field/:path+', destination: '/field' }], afterFiles: [], fallback: [] }),
+  rewrites: async () => ({
+    beforeFiles: [{ source: '/field/:path+', destination: '/field' }],
+    afterFiles: [],
+    fallback: [],
+  }),
   headers: async () => [
     { source: '/:path*', headers: EVERYWHERE },
     { source: '/api/:path*', headers: [{ key: 'Content-Security-Policy', value: NO_CONTENT }] },

@@ -21,7 +21,11 @@ export default function manifest(): MetadataRoute.Manifest {
     ],
     shortcuts: [
       { name: 'Nests', url: '/field', icons: [{ src: '/icons/shortcut-96.png', sizes: '96x96', type: 'image/png' }] },
-      { name: 'Not sent yet', url: '/field/unsent', icons: [{ src: '/icons/shortcut-96.png', sizes: '96x96', type: 'image/png' }] },
+      {
+        name: 'Not sent yet',
+        url: '/field/unsent',
+        icons: [{ src: '/icons/shortcut-96.png', sizes: '96x96', type: 'image/png' }],
+      },
     ],
   };
 }

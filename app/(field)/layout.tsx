@@ -1,16 +1,12 @@
-import type { Metadata, Viewport } from 'next';
+import type { Metadata } from 'next';
 import type { ReactNode } from 'react';
 
-export const metadata: Metadata = { title: 'Undereave', description: 'Paper-wasp nests read cell by cell, with or without signal.' };
-
-export const viewport: Viewport = {
-  width: 'device-width',
-  initialScale: 1,
-  viewportFit: 'cover',
-  themeColor: '#ffffff',
+export const metadata: Metadata = {
+  title: { absolute: 'Undereave' },
+  description: 'Paper-wasp nests read cell by cell, with or without signal.',
 };
 
-/** The field side has a frame of its own, drawn on the phone; nothing of the lab side is loaded. */
+/** The field side draws its own frame on the phone; nothing of the lab side comes with it. */
 export default function FieldLayout({ children }: { children: ReactNode }): ReactNode {
   return children;
 }

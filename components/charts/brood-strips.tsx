@@ -1,6 +1,6 @@
 import type { ReactElement, ReactNode } from 'react';
 import { dateWords } from '@/components/ui/date-words';
-import { dayScale, type DayScale, percentOf } from './day-scale';
+import { dayScale, type DayScale, isOn, percentOf } from './day-scale';
 import { TimeAxis, TimeGrid } from './time-axis';
 
 /** A likeliest day and the range around it, all `YYYY-MM-DD`. */
@@ -41,7 +41,15 @@ interface SpanProps {
 function Bar({ scale, from, to, fill }: SpanProps & { fill: string }): ReactElement {
   const [x, end] = [percentOf(scale, from), percentOf(scale, to)];
   return (
-    <rect x={`${x}%`} width={`${Math.max(0, end - x)}%`} y="7" height="12" fill={fill} stroke="var(--ink)" strokeWidth="1" />
+    <rect
+      x={`${x}%`}
+      width={`${Math.max(0, end - x)}%`}
+      y="7"
+      height="12"
+      fill={fill}
+      stroke="var(--ink)"
+      strokeWidth="1"
+    />
   );
 }
 
@@ -70,6 +78,11 @@ function Strip({ strip: { laid, capped, emerges }, scale }: { strip: BroodStrip;
   );
 }
 
+/** The day the estimate speaks for, across a strip. */
+function AsOfLine({ x }: { x: string }): ReactElement {
+  return <line x1={x} x2={x} y1="0" y2={ROW_HEIGHT} stroke="var(--ink)" strokeWidth="1.5" strokeDasharray="3 2" />;
+}
+
 interface BroodStripsProps {
   strips: readonly BroodStrip[];
   /** The day the estimate speaks for, drawn as an upright line. */
@@ -78,14 +91,17 @@ interface BroodStripsProps {
 
 /** When each cell's brood was laid, is capped and emerges, oldest first. The same dates stand in the table below it. */
 export function BroodStrips({ strips, asOf }: BroodStripsProps): ReactElement | null {
-  const scale = dayScale([...datesOf(strips), asOf]);
+  const scale = dayScale(datesOf(strips));
   if (!scale) return null;
-  const now = `${percentOf(scale, asOf)}%`;
+  const now = isOn(scale, asOf) ? `${percentOf(scale, asOf)}%` : null;
   return (
-    <div role="img" aria-label={`Brood strips of ${strips.length} groups of cells; the table below holds the same dates.`}>
+    <div
+      role="img"
+      aria-label={`Brood strips of ${strips.length} groups of cells; the table below holds the same dates.`}
+    >
       <div className="brood-row">
         <span />
-        <TimeAxis scale={scale} inYear={asOf} />
+        <TimeAxis scale={scale} />
       </div>
       {strips.map((strip) => (
         <div key={strip.key} className="brood-row keep-together">
@@ -93,18 +109,28 @@ export function BroodStrips({ strips, asOf }: BroodStripsProps): ReactElement | 
           <svg width="100%" height={ROW_HEIGHT} className="block">
             <TimeGrid scale={scale} height={ROW_HEIGHT} />
             <Strip strip={strip} scale={scale} />
-            <line x1={now} x2={now} y1="0" y2={ROW_HEIGHT} stroke="var(--ink)" strokeWidth="1.5" strokeDasharray="3 2" />
+            <line
+              x1={now}
+              x2={now}
+              y1="0"
+              y2={ROW_HEIGHT}
+              stroke="var(--ink)"
+              strokeWidth="1.5"
+              strokeDasharray="3 2"
+            />
           </svg>
         </div>
       ))}
-      <div className="brood-row">
-        <span />
-        <svg width="100%" height="18" className="block overflow-visible">
-          <text x={now} y="13" textAnchor="middle" fontSize="13" fill="var(--ink)">
-            {dateWords(asOf)}
-          </text>
-        </svg>
-      </div>
+      {now && (
+        <div className="brood-row">
+          <span />
+          <svg width="100%" height="18" className="block overflow-visible">
+            <text x={now} y="13" textAnchor="middle" fontSize="13" fill="var(--ink)">
+              {dateWords(asOf)}
+            </text>
+          </svg>
+        </div>
+      )}
     </div>
   );
 }
@@ -126,8 +152,8 @@ export function BroodStripsKey(): ReactElement {
         capped
       </li>
       <li>
-        lower line: range of the laying date; upper line: range of the day the adult comes out (8 times in 10). Dashed: the day
-        this speaks for.
+        lower line: range of the laying date; upper line: range of the day the adult comes out (8 times in 10). Dashed:
+        the day this speaks for.
       </li>
     </ul>
   );

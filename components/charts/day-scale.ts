@@ -26,6 +26,11 @@ export function percentOf({ from, days }: DayScale, date: string): number {
   return Math.round((daysBetween(from, date) / days) * 10_000) / 100;
 }
 
+/** Does a date lie on a scale? */
+export function isOn({ from, to }: DayScale, date: string): boolean {
+  return from <= date && date <= to;
+}
+
 const STEPS = [1, 2, 7, 14, 21, 28, 56, 84] as const;
 
 /**

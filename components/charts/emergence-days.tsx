@@ -13,24 +13,28 @@ interface DayBarProps {
   top: number;
 }
 
-/** One day: a bar to the expected number, a line over its range. */
+const rounded = (percent: number): string => `${Math.round(percent * 100) / 100}%`;
+
+/** One day: a bar to the expected number, before a band over its range. */
 function DayBar({ day: { date, expected, lo80, hi80 }, scale, top }: DayBarProps): ReactElement {
   const width = 100 / scale.days;
   const middle = percentOf(scale, date);
   const y = (value: number): number => HEIGHT - (HEIGHT * value) / top;
-  const x = `${middle}%`;
+  const [left, right] = [rounded(middle - width / 2), rounded(middle + width / 2)];
   return (
     <g>
+      <rect x={left} width={rounded(width)} y={y(hi80)} height={y(lo80) - y(hi80)} fill="var(--main-wash)" />
+      <line x1={left} x2={right} y1={y(hi80)} y2={y(hi80)} stroke="var(--main)" strokeWidth="2.5" />
       <rect
-        x={`${Math.round((middle - width * 0.35) * 100) / 100}%`}
-        width={`${Math.round(width * 70) / 100}%`}
+        x={rounded(middle - width * 0.3)}
+        width={rounded(width * 0.6)}
         y={y(expected)}
         height={HEIGHT - y(expected)}
         fill="var(--stage-capped)"
         stroke="var(--ink)"
         strokeWidth="0.5"
       />
-      <line x1={x} x2={x} y1={y(lo80)} y2={y(hi80)} stroke="var(--main)" strokeWidth="1.5" />
+      {lo80 > 0 && <line x1={left} x2={right} y1={y(lo80)} y2={y(lo80)} stroke="var(--main)" strokeWidth="2.5" />}
     </g>
   );
 }
@@ -70,7 +74,7 @@ export function EmergenceDays({ days }: { days: readonly EmergenceDay[] }): Reac
         ))}
       </svg>
       <span />
-      <TimeAxis scale={scale} inYear={scale.from} />
+      <TimeAxis scale={scale} />
     </div>
   );
 }

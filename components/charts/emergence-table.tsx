@@ -11,7 +11,7 @@ interface EmergenceTableProps {
 /** Adults expected per day in numbers: the same days as the chart. */
 export function EmergenceTable({ days, inYear }: EmergenceTableProps): ReactElement {
   return (
-    <Table caption="Adults expected per day; each range holds 8 times in 10" className="text-sm sm:max-w-md">
+    <Table scrolls caption="Adults expected per day; each range holds 8 times in 10" className="text-sm sm:max-w-md">
       <thead>
         <tr>
           <HeadCell>Day</HeadCell>

@@ -1,19 +1,14 @@
 import type { ReactElement } from 'react';
-import { dateWords } from '@/components/ui/date-words';
+import { axisWords } from '@/components/ui/date-words';
 import { type DayScale, dayTicks, percentOf } from './day-scale';
 
-interface TimeAxisProps {
-  scale: DayScale;
-  inYear: string;
-}
-
 /** Dates along the top of a chart. Words keep their size on any width because places are given in percent. */
-export function TimeAxis({ scale, inYear }: TimeAxisProps): ReactElement {
+export function TimeAxis({ scale }: { scale: DayScale }): ReactElement {
   return (
     <svg width="100%" height="20" aria-hidden="true" className="block overflow-visible">
       {dayTicks(scale, 4).map((tick) => (
         <text key={tick} x={`${percentOf(scale, tick)}%`} y="14" textAnchor="middle" fontSize="13" fill="var(--ink)">
-          {dateWords(tick, inYear)}
+          {axisWords(tick)}
         </text>
       ))}
     </svg>

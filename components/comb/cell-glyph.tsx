@@ -11,7 +11,13 @@ interface CellGlyphProps {
 /** One state as a small hexagon, for keys, tables and legends. The word beside it carries the meaning. */
 export function CellGlyph({ state, size = 28 }: CellGlyphProps): ReactElement {
   return (
-    <svg className={`comb-cell cell-${state} inline-block shrink-0`} width={size} height={size} viewBox="0 0 48 48" aria-hidden="true">
+    <svg
+      className={`comb-cell cell-${state} inline-block shrink-0`}
+      width={size}
+      height={size}
+      viewBox="0 0 48 48"
+      aria-hidden="true"
+    >
       <use href={`#${STATE_SYMBOLS[state]}`} />
     </svg>
   );
@@ -34,7 +40,13 @@ const MARK_VIEW: Readonly<Record<keyof typeof MARK_SYMBOLS, string>> = {
 /** One of the small marks alone, cropped to its corner. */
 export function MarkGlyph({ mark, size = 24 }: MarkGlyphProps): ReactElement {
   return (
-    <svg className="comb-mark inline-block shrink-0" width={size} height={size} viewBox={MARK_VIEW[mark]} aria-hidden="true">
+    <svg
+      className="comb-mark inline-block shrink-0"
+      width={size}
+      height={size}
+      viewBox={MARK_VIEW[mark]}
+      aria-hidden="true"
+    >
       <use href={`#${MARK_SYMBOLS[mark]}`} width="48" height="48" />
     </svg>
   );

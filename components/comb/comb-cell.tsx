@@ -18,12 +18,21 @@ interface CombCellProps {
   seat?: CellSeat;
 }
 
-const MARKS = ['nectar', 'unsure', 'noted', 'reused', 'scrap', 'changed'] as const satisfies readonly (keyof typeof MARK_SYMBOLS)[];
+const MARKS = [
+  'nectar',
+  'unsure',
+  'noted',
+  'reused',
+  'scrap',
+  'changed',
+] as const satisfies readonly (keyof typeof MARK_SYMBOLS)[];
 
 /** Which of a cell's marks to draw: the lower right corner has room for one, so the reviewer's change wins there. */
 function shownMarks(cell: CombCellView): (keyof typeof MARK_SYMBOLS)[] {
   const corner = (['changed', 'reused', 'scrap'] as const).find((mark) => cell[mark] === true);
-  return MARKS.filter((mark) => cell[mark] === true && (mark === corner || !['changed', 'reused', 'scrap'].includes(mark)));
+  return MARKS.filter(
+    (mark) => cell[mark] === true && (mark === corner || !['changed', 'reused', 'scrap'].includes(mark)),
+  );
 }
 
 function CellDrawing({ cell, marks, mirrored, seat }: CombCellProps): ReactElement {
@@ -36,9 +45,17 @@ function CellDrawing({ cell, marks, mirrored, seat }: CombCellProps): ReactEleme
     tabIndex: seat.tabbable ? 0 : -1,
   };
   return (
-    <g className={`comb-cell cell-${cell.state}`} data-cell={cellKey(cell)} data-pending={cell.pending || undefined} {...grid}>
+    <g
+      className={`comb-cell cell-${cell.state}`}
+      data-cell={cellKey(cell)}
+      data-pending={cell.pending || undefined}
+      {...grid}
+    >
       <use href={`#${STATE_SYMBOLS[cell.state]}`} {...box} />
-      {marks && shownMarks(cell).map((mark) => <use key={mark} className="comb-mark" href={`#${MARK_SYMBOLS[mark]}`} {...box} />)}
+      {marks &&
+        shownMarks(cell).map((mark) => (
+          <use key={mark} className="comb-mark" href={`#${MARK_SYMBOLS[mark]}`} {...box} />
+        ))}
     </g>
   );
 }

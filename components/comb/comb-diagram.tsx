@@ -10,9 +10,11 @@ import { isStepKey, stepFrom } from './comb-steps';
 import {
   boxAround,
   boxOfWindow,
+  cellsAcross,
   type CombCellView,
   type CombWindow,
   hasPedicel,
+  naturalLook,
   PITCH,
   type PlaceKind,
   rowsOf,
@@ -61,7 +63,11 @@ function addressOf(element: Element): Axial {
 type Handlers = Pick<CombDiagramProps, 'onCellPress' | 'onCellReach'>;
 
 /** One set of handlers for the whole grid, so that a comb of 500 cells carries none of its own. */
-function useGridHandlers(places: readonly Axial[], moveTo: (place: Axial) => void, { onCellPress, onCellReach }: Handlers) {
+function useGridHandlers(
+  places: readonly Axial[],
+  moveTo: (place: Axial) => void,
+  { onCellPress, onCellReach }: Handlers,
+) {
   const grid = useRef<SVGSVGElement>(null);
   const press = (element: Element): void => {
     moveTo(addressOf(element));
@@ -95,7 +101,11 @@ function layoutOf(places: readonly Axial[], { viewWindow, mirrored, cellSize = 4
   const box = viewWindow ? boxOfWindow(viewWindow, mirrored) : boxAround(places, mirrored);
   const scale = cellSize / PITCH;
   const natural = { width: Math.round(box.width * scale), height: Math.round(box.height * scale) };
-  return { viewBox: `${box.x} ${box.y} ${box.width} ${box.height}`, size: sizing === 'fill' ? {} : natural };
+  return {
+    viewBox: `${box.x} ${box.y} ${box.width} ${box.height}`,
+    size: sizing === 'fill' ? {} : natural,
+    across: cellsAcross(box),
+  };
 }
 
 /**
@@ -103,11 +113,20 @@ function layoutOf(places: readonly Axial[], { viewWindow, mirrored, cellSize = 4
  * of the walk, Enter and Space press. One Tab stop for the whole comb; every cell has a spoken name.
  */
 export function CombDiagram(props: CombDiagramProps): ReactElement {
-  const { cells, label, ghosts = [], current = null, differs, mirrored = false, cellSize = 44, sizing = 'natural' } = props;
+  const {
+    cells,
+    label,
+    ghosts = [],
+    current = null,
+    differs,
+    mirrored = false,
+    cellSize = 44,
+    sizing = 'natural',
+  } = props;
   const places: Axial[] = [...cells, ...ghosts];
   const { place: stop, moveTo } = useRovingCell(places, current);
   const { grid, onClick, onKeyDown } = useGridHandlers(places, moveTo, props);
-  const { viewBox, size } = layoutOf(places, props);
+  const { viewBox, size, across } = layoutOf(places, props);
   const [stopKey, currentKey] = [stop && cellKey(stop), current && cellKey(current)];
   const seatOf = (key: string) => ({ tabbable: key === stopKey, picked: key === currentKey });
   const known = new Map(cells.map((cell) => [cellKey(cell), cell]));
@@ -117,7 +136,7 @@ export function CombDiagram(props: CombDiagramProps): ReactElement {
         ref={grid}
         role="grid"
         aria-label={label}
-        className={`comb-grid mx-auto block ${sizing === 'fill' ? 'h-full w-full' : 'h-auto max-w-full'}`}
+        className={`comb-grid mx-auto block ${sizing === 'fill' ? 'h-full w-full' : naturalLook(across)}`}
         viewBox={viewBox}
         onClick={onClick}
         onKeyDown={onKeyDown}
@@ -129,14 +148,26 @@ export function CombDiagram(props: CombDiagramProps): ReactElement {
               const key = cellKey(place);
               const [cell, seat] = [known.get(key), seatOf(key)];
               return cell ? (
-                <CombCell key={key} cell={cell} marks={cellSize >= SMALLEST_MARKED_CELL} mirrored={mirrored} seat={seat} />
+                <CombCell
+                  key={key}
+                  cell={cell}
+                  marks={cellSize >= SMALLEST_MARKED_CELL}
+                  mirrored={mirrored}
+                  seat={seat}
+                />
               ) : (
                 <CombGhost key={key} place={place} mirrored={mirrored} seat={seat} />
               );
             })}
           </g>
         ))}
-        <CombOverlay current={current} focused={stop} differs={differs} pedicel={hasPedicel(cells)} mirrored={mirrored} />
+        <CombOverlay
+          current={current}
+          focused={stop}
+          differs={differs}
+          pedicel={hasPedicel(cells)}
+          mirrored={mirrored}
+        />
       </svg>
     </CombFrame>
   );

@@ -14,7 +14,13 @@ interface OutlineProps {
 function Outline({ place, className, grow = 1, mirrored }: OutlineProps): ReactElement {
   const { x, y } = placeOf(place, mirrored);
   const half = (SYMBOL_BOX / 2) * grow;
-  return <polygon className={className} points={CELL_POINTS} transform={`translate(${x - half} ${y - half}) scale(${grow})`} />;
+  return (
+    <polygon
+      className={className}
+      points={CELL_POINTS}
+      transform={`translate(${x - half} ${y - half}) scale(${grow})`}
+    />
+  );
 }
 
 interface CombOverlayProps {

@@ -3,7 +3,7 @@ import type { Axial } from '@/lib/comb/axial';
 import { CombCell } from './comb-cell';
 import { CombFrame } from './comb-frame';
 import { CombOverlay } from './comb-overlay';
-import { boxAround, type CombCellView, hasPedicel, PITCH, rowsOf, SMALLEST_MARKED_CELL } from './comb-view';
+import { boxAround, cellsAcross, type CombCellView, hasPedicel, naturalLook, PITCH, rowsOf, SMALLEST_MARKED_CELL } from './comb-view';
 
 interface CombPictureProps {
   cells: readonly CombCellView[];
@@ -23,14 +23,19 @@ export function CombPicture({ cells, label, cellSize = 40, differs }: CombPictur
       <svg
         role="img"
         aria-label={label}
-        className="mx-auto block h-auto max-w-full"
+        className={`mx-auto block ${naturalLook(cellsAcross(box))}`}
         width={Math.round(box.width * scale)}
         height={Math.round(box.height * scale)}
         viewBox={`${box.x} ${box.y} ${box.width} ${box.height}`}
       >
         {rowsOf(cells).map((row) =>
           row.map((cell) => (
-            <CombCell key={`${cell.q},${cell.r}`} cell={cell} marks={cellSize >= SMALLEST_MARKED_CELL} mirrored={false} />
+            <CombCell
+              key={`${cell.q},${cell.r}`}
+              cell={cell}
+              marks={cellSize >= SMALLEST_MARKED_CELL}
+              mirrored={false}
+            />
           )),
         )}
         <CombOverlay differs={differs} pedicel={hasPedicel(cells)} mirrored={false} />

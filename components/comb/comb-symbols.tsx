@@ -128,8 +128,24 @@ function MarkSymbols(): ReactElement {
         <path d="M28.6 38l4.6-7.6L37.8 38z" {...halo} strokeWidth="2.4" />
       </Symbol>
       <Symbol id="mk-note" wall={false}>
-        <rect x="10.6" y="30.4" width="7.4" height="7.4" fill="var(--halo,#fff)" stroke="var(--halo,#fff)" strokeWidth="4.6" />
-        <rect x="10.6" y="30.4" width="7.4" height="7.4" fill="var(--halo,#fff)" stroke="currentColor" strokeWidth="1.9" />
+        <rect
+          x="10.6"
+          y="30.4"
+          width="7.4"
+          height="7.4"
+          fill="var(--halo,#fff)"
+          stroke="var(--halo,#fff)"
+          strokeWidth="4.6"
+        />
+        <rect
+          x="10.6"
+          y="30.4"
+          width="7.4"
+          height="7.4"
+          fill="var(--halo,#fff)"
+          stroke="currentColor"
+          strokeWidth="1.9"
+        />
       </Symbol>
       <Symbol id="mk-reused" wall={false}>
         <path d="M28.5 37a5 5 0 1 0 1-6.6" fill="none" stroke="var(--halo,#fff)" strokeWidth="5" />

@@ -96,6 +96,17 @@ export function cellsAcross(box: Box): number {
   return (box.width - 2 * MARGIN) / PITCH;
 }
 
+/** Cells that the narrowest phone can still show at a readable size. */
+const ACROSS_A_PHONE = 16;
+
+/**
+ * The classes of a comb at its natural size: a narrow one shrinks with the page; a wide one keeps its size and is
+ * scrolled in its own box, because its cells would become too small to tell apart.
+ */
+export function naturalLook(across: number): string {
+  return across <= ACROSS_A_PHONE ? 'h-auto max-w-full' : 'max-w-none';
+}
+
 const MARK_WORDS = [
   ['nectar', 'nectar'],
   ['unsure', 'unsure'],
@@ -163,9 +174,7 @@ export function tallyWords(tally: Tally): string[] {
 export function rowsOf<T extends Axial>(places: readonly T[]): T[][] {
   const rows = new Map<number, T[]>();
   for (const place of places) rows.set(place.r, [...(rows.get(place.r) ?? []), place]);
-  return [...rows.entries()]
-    .sort(([a], [b]) => a - b)
-    .map(([, row]) => row.sort((a, b) => a.q - b.q));
+  return [...rows.entries()].sort(([a], [b]) => a - b).map(([, row]) => row.sort((a, b) => a.q - b.q));
 }
 
 /** Is the pedicel cell, (0, 0), among these? */

@@ -4,8 +4,10 @@ import type { ReactElement } from 'react';
 import { useSession } from '@/lib/offline/hooks/use-session';
 import { FieldScreen } from './field-screen';
 import { SignedOut } from './frame/signed-out';
+import { UpdateNotice } from './frame/update-notice';
 import { Fetching } from './parts/fetching';
 import { PersonProvider } from './parts/person-context';
+import { parseFieldPath } from './routing/field-route';
 import { InnerLinks } from './routing/inner-links';
 import { useFieldPath } from './routing/use-field-path';
 
@@ -24,6 +26,7 @@ export function FieldApp(): ReactElement {
   return (
     <PersonProvider person={view.person}>
       <InnerLinks>
+        <UpdateNotice reading={parseFieldPath(path).kind === 'reading'} />
         <FieldScreen path={path} />
       </InnerLinks>
     </PersonProvider>

@@ -10,7 +10,9 @@ interface AssumptionsListProps {
 
 function widths(what: string, value: DateRange | null, year: string): string[] {
   if (!value) return [];
-  return [`${what}: 5 times in 10 between ${spanWords(value.p50, year)}; 95 times in 100 between ${spanWords(value.p95, year)}.`];
+  return [
+    `${what}: 5 times in 10 between ${spanWords(value.p50, year)}; 95 times in 100 between ${spanWords(value.p95, year)}.`,
+  ];
 }
 
 /** What the dates rest on: durations and their trust, the model, every assumption, and narrower and wider ranges. */

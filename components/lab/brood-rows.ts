@@ -32,5 +32,7 @@ export function broodRows(estimates: readonly CellEstimate[]): BroodRow[] {
     rows.set(key, row);
   }
   for (const row of rows.values()) row.cells.sort((a, b) => a - b);
-  return [...rows.values()].sort((a, b) => (a.laid.median < b.laid.median ? -1 : a.laid.median > b.laid.median ? 1 : 0));
+  return [...rows.values()].sort((a, b) =>
+    a.laid.median < b.laid.median ? -1 : a.laid.median > b.laid.median ? 1 : 0,
+  );
 }

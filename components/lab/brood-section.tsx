@@ -7,13 +7,13 @@ import { runWords } from '@/components/ui/date-words';
 import { Disclosure } from '@/components/ui/disclosure';
 import { Section } from '@/components/ui/section';
 import type { BroodEstimate } from '@/lib/brood/answer';
-import { localDate } from '@/lib/kit/local-date';
 import { type BroodRow, broodRows } from './brood-rows';
 import { BroodTable } from './brood-table';
 
 interface BroodSectionProps {
   estimate: BroodEstimate;
-  year: string;
+  /** The local day the estimate speaks for. */
+  asOf: string;
 }
 
 /** The cells of a strip: their symbol and numbers. */
@@ -40,10 +40,9 @@ function stripOf(row: BroodRow): BroodStrip {
 }
 
 /** The brood of a nest, cell by cell and day by day, each chart with its dates in words one tap away. */
-export function BroodSection({ estimate, year }: BroodSectionProps): ReactElement {
+export function BroodSection({ estimate, asOf }: BroodSectionProps): ReactElement {
   const rows = broodRows(estimate.cells);
   const days = busyDays(estimate.nest.emergencePerDay);
-  const asOf = localDate(Date.parse(estimate.asOf), estimate.zone);
   return (
     <>
       <Section id="brood" title="Brood, oldest first" className="mt-8">
@@ -54,7 +53,7 @@ export function BroodSection({ estimate, year }: BroodSectionProps): ReactElemen
             <BroodStrips strips={rows.map(stripOf)} asOf={asOf} />
             <BroodStripsKey />
             <Disclosure summary="The same dates as a table" className="mt-2">
-              <BroodTable rows={rows} inYear={year} />
+              <BroodTable rows={rows} inYear={asOf} />
             </Disclosure>
           </>
         )}
@@ -62,9 +61,11 @@ export function BroodSection({ estimate, year }: BroodSectionProps): ReactElemen
       {days.length > 0 && (
         <Section id="per-day" title="Adults expected per day" className="mt-8">
           <EmergenceDays days={days} />
-          <p className="mt-2 text-quiet">{emergenceWords(days)} The blue line over each day is its range, 8 times in 10.</p>
+          <p className="mt-2 text-quiet">
+            {emergenceWords(days)} The band around each day’s bar is its range, 8 times in 10.
+          </p>
           <Disclosure summary="The same numbers as a table" className="mt-2">
-            <EmergenceTable days={days} inYear={year} />
+            <EmergenceTable days={days} inYear={asOf} />
           </Disclosure>
         </Section>
       )}

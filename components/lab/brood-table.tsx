@@ -13,7 +13,7 @@ interface BroodTableProps {
 /** The brood chart in words: the same strips, every date with its range. */
 export function BroodTable({ rows, inYear }: BroodTableProps): ReactElement {
   return (
-    <Table caption="Brood dates, oldest first; each range holds 8 times in 10" className="text-sm">
+    <Table scrolls caption="Brood dates, oldest first; each range holds 8 times in 10" className="text-sm">
       <thead>
         <tr>
           <HeadCell>Cells</HeadCell>
@@ -31,8 +31,12 @@ export function BroodTable({ rows, inYear }: BroodTableProps): ReactElement {
             <BodyCell>
               <DateRangeWords median={laid.median} ends={laid.p80} inYear={inYear} />
             </BodyCell>
-            <BodyCell>{capped ? <DateRangeWords median={capped.median} ends={capped.p80} inYear={inYear} /> : 'not known'}</BodyCell>
-            <BodyCell>{emerges ? <DateRangeWords median={emerges.median} ends={emerges.p80} inYear={inYear} /> : 'not known'}</BodyCell>
+            <BodyCell>
+              {capped ? <DateRangeWords median={capped.median} ends={capped.p80} inYear={inYear} /> : 'not known'}
+            </BodyCell>
+            <BodyCell>
+              {emerges ? <DateRangeWords median={emerges.median} ends={emerges.p80} inYear={inYear} /> : 'not known'}
+            </BodyCell>
           </tr>
         ))}
       </tbody>

@@ -3,6 +3,7 @@
 import { type ReactElement, useState } from 'react';
 import { CombDiagram } from '@/components/comb/comb-diagram';
 import { cellName, type CombCellView } from '@/components/comb/comb-view';
+import { sentence } from '@/components/ui/sentence';
 import { type Axial, cellKey } from '@/lib/comb/axial';
 import type { CellLines } from './cell-lines';
 
@@ -11,27 +12,33 @@ interface CombInspectorProps {
   label: string;
   cellSize: number;
   lines: CellLines;
-}
-
-/** The name of a cell as a sentence's start: `Cell 13, ring 2, medium larva`. */
-function heading(cell: CombCellView): string {
-  const name = cellName(cell);
-  return name.charAt(0).toUpperCase() + name.slice(1);
+  /** What a press on a cell tells: `its dates`. */
+  tells: string;
 }
 
 /** The comb of a reading: press a cell, or reach it with the arrow keys, to read its dates and note. */
-export function CombInspector({ cells, label, cellSize, lines }: CombInspectorProps): ReactElement {
+export function CombInspector({ cells, label, cellSize, lines, tells }: CombInspectorProps): ReactElement {
   const [picked, setPicked] = useState<Axial | null>(null);
   const cell = picked && cells.find((candidate) => cellKey(candidate) === cellKey(picked));
   return (
     <div>
-      <div className="overflow-x-auto">
-        <CombDiagram cells={cells} label={label} cellSize={cellSize} current={picked} onCellPress={setPicked} onCellReach={setPicked} />
+      <div className="overflow-x-auto print:overflow-visible">
+        <CombDiagram
+          cells={cells}
+          label={label}
+          cellSize={cellSize}
+          current={picked}
+          onCellPress={setPicked}
+          onCellReach={setPicked}
+        />
       </div>
-      <div aria-live="polite" className="print-hidden mt-2 min-h-24 border-l-[6px] border-main bg-main-wash px-3 py-2 text-[0.9375rem]">
+      <div
+        aria-live="polite"
+        className="print-hidden mt-2 min-h-24 border-l-[6px] border-main bg-main-wash px-3 py-2 text-[0.9375rem]"
+      >
         {cell ? (
           <>
-            <p className="font-bold">{heading(cell)}</p>
+            <p className="font-bold">{sentence(cellName(cell))}</p>
             {(lines[cellKey(cell)] ?? []).map((line) => (
               <p key={line} className="[overflow-wrap:anywhere]">
                 {line}
@@ -39,7 +46,7 @@ export function CombInspector({ cells, label, cellSize, lines }: CombInspectorPr
             ))}
           </>
         ) : (
-          <p className="text-quiet">Press a cell, or walk the comb with the arrow keys, to read its dates.</p>
+          <p className="text-quiet">Press a cell, or walk the comb with the arrow keys, to read {tells}.</p>
         )}
       </div>
     </div>

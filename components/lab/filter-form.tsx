@@ -44,7 +44,11 @@ export function FilterForm({ path, query, taxa, first, act, children }: FilterFo
       <Button type="submit" tone="main">
         {act}
       </Button>
-      {isNarrowed && <LinkButton href={path} tone="quiet">Show all</LinkButton>}
+      {isNarrowed && (
+        <LinkButton href={path} tone="quiet">
+          Show all
+        </LinkButton>
+      )}
     </form>
   );
 }

@@ -96,6 +96,15 @@ export interface ReadingView {
   lockedVersion: number | null;
 }
 
+/** The opening of a new version of a locked reading. */
+export interface AmendmentView {
+  /** The version it opened. */
+  version: number;
+  reason: string;
+  actor: string;
+  at: string;
+}
+
 /** What the lab decided about a reading. */
 export interface ReviewView {
   /** The final reading; null before the first decision. */
@@ -110,4 +119,5 @@ export interface ReviewView {
     stale: boolean;
   } | null;
   settlements: readonly SettlementView[];
+  amendments: readonly AmendmentView[];
 }

@@ -58,16 +58,25 @@ function degrees(value: number, [positive, negative]: readonly [string, string],
   return `${Math.abs(value).toFixed(digits)}° ${value < 0 ? negative : positive}`;
 }
 
+/** A point in words: `43.59800° N, 77.60500° W`; a rounded one as the grid square it lies in. */
+export function pointWords({ lat, lon }: PlaceView, rounded: boolean): string {
+  const digits = rounded ? 2 : 5;
+  const point = `${degrees(lat, ['N', 'S'], digits)}, ${degrees(lon, ['E', 'W'], digits)}`;
+  return rounded ? `${point}: the grid square of about 1 km it lies in` : point;
+}
+
 /**
- * A place in words: exact with its accuracy, or as a grid square when it was rounded for the reader.
+ * Where a nest hung, in words: exact with its accuracy, or as a grid square when it was rounded for the reader.
  *
  * @param rounded true when the reader is shown the grid square only.
  */
-export function placeWords({ lat, lon, accuracyM }: PlaceView, rounded: boolean): string {
-  const digits = rounded ? 2 : 5;
-  const point = `${degrees(lat, ['N', 'S'], digits)}, ${degrees(lon, ['E', 'W'], digits)}`;
-  if (rounded) return `${point}: the grid square of about 1 km this nest was in`;
-  return typeof accuracyM === 'number' ? `${point}, within ${countWords(Math.round(accuracyM), 'metre')}` : `${point}, accuracy not recorded`;
+export function placeWords(place: PlaceView, rounded: boolean): string {
+  const point = pointWords(place, rounded);
+  if (rounded) return point;
+  const { accuracyM } = place;
+  return typeof accuracyM === 'number'
+    ? `${point}, within ${countWords(Math.round(accuracyM), 'metre')}`
+    : `${point}, accuracy not recorded`;
 }
 
 /** A nest in one line for titles of pages: `N12 Bandstand roof`. */

@@ -38,7 +38,9 @@ function NestCells({ nest, zone, year }: { nest: NestRow; zone: string; year: st
       <BodyCell>
         <Link href={`/nests/${nest.id}`} className="group inline-flex min-h-6 flex-wrap items-baseline gap-x-2 gap-y-1">
           <NestCode>{nest.code}</NestCode>
-          <span className="underline decoration-edge underline-offset-4 group-hover:decoration-ink">{nest.name ?? 'no name'}</span>
+          <span className="underline decoration-edge underline-offset-4 group-hover:decoration-ink">
+            {nest.name ?? 'no name'}
+          </span>
         </Link>
         <p className="mt-1 text-sm md:hidden">
           <TaxonName>{nest.taxon}</TaxonName>
@@ -54,7 +56,9 @@ function NestCells({ nest, zone, year }: { nest: NestRow; zone: string; year: st
       <BodyCell number className="hidden sm:table-cell">
         {nest.visits}
       </BodyCell>
-      <BodyCell className="whitespace-nowrap">{nest.lastVisitAt ? dayWords(nest.lastVisitAt, zone, year) : 'none yet'}</BodyCell>
+      <BodyCell className="whitespace-nowrap">
+        {nest.lastVisitAt ? dayWords(nest.lastVisitAt, zone, year) : 'none yet'}
+      </BodyCell>
       <BodyCell number>{nest.cells ?? <span className="text-quiet">none</span>}</BodyCell>
       <BodyCell className="hidden whitespace-nowrap sm:table-cell">
         <StateWord state={nest.state} />

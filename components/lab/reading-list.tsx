@@ -2,6 +2,7 @@ import Link from 'next/link';
 import type { ReactElement } from 'react';
 import { TallyLine } from '@/components/comb/tally-line';
 import { momentWords } from '@/components/ui/date-words';
+import { sentence } from '@/components/ui/sentence';
 import type { ReadingRow, VisitRow } from './lab-shapes';
 import { kindWords, purposeWords, readingStanding } from './lab-words';
 
@@ -16,7 +17,12 @@ interface ReadingListProps {
   settles: boolean;
 }
 
-function ReadingItem({ nest, reading, shown, settles }: { reading: ReadingRow } & Omit<ReadingListProps, 'visits' | 'zone' | 'year'>): ReactElement {
+function ReadingItem({
+  nest,
+  reading,
+  shown,
+  settles,
+}: { reading: ReadingRow } & Omit<ReadingListProps, 'visits' | 'zone' | 'year'>): ReactElement {
   const isShown = reading.id === shown;
   return (
     <li className={`border-l-[6px] py-1.5 pl-3 ${isShown ? 'border-main bg-main-wash' : 'border-rule'}`}>
@@ -27,7 +33,7 @@ function ReadingItem({ nest, reading, shown, settles }: { reading: ReadingRow } 
           aria-current={isShown ? 'true' : undefined}
           className="inline-flex min-h-6 items-center font-bold underline decoration-edge underline-offset-4 hover:decoration-ink"
         >
-          {kindWords(reading.kind)} by {reading.observer}
+          {sentence(kindWords(reading.kind))} by {reading.observer}
         </Link>
         <span className="text-quiet">{readingStanding(reading)}</span>
         <Link

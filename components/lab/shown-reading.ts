@@ -15,7 +15,8 @@ export function readingsOf(nest: NestView): PlacedReading[] {
     .filter(({ reading }) => reading.tally !== null)
     .sort(
       (a, b) =>
-        Date.parse(b.visit.startedAt) - Date.parse(a.visit.startedAt) || BEST_FIRST.indexOf(a.reading.kind) - BEST_FIRST.indexOf(b.reading.kind),
+        Date.parse(b.visit.startedAt) - Date.parse(a.visit.startedAt) ||
+        BEST_FIRST.indexOf(a.reading.kind) - BEST_FIRST.indexOf(b.reading.kind),
     );
 }
 

@@ -1,7 +1,14 @@
 import type { ReactElement } from 'react';
 import { isNestState, NEST_STATE_WORDS, type NestState } from './lab-words';
 
-const FILLED: Readonly<Record<NestState, number>> = { new: 0, reading: 0.3, submitted: 0.55, settled: 0.8, locked: 1, archived: 0 };
+const FILLED: Readonly<Record<NestState, number>> = {
+  new: 0,
+  reading: 0.3,
+  submitted: 0.55,
+  settled: 0.8,
+  locked: 1,
+  archived: 0,
+};
 
 /** How far a nest is, in words, with a small cell that fills as the work gets on. */
 export function StateWord({ state }: { state: string }): ReactElement {

@@ -36,7 +36,10 @@ export function LabHeader({ person }: { person: SignedInPerson }): ReactElement 
             </NavLink>
           ))}
           {role !== 'researcher' && (
-            <a href="/field" className="inline-flex min-h-9 items-center border-y-[3px] border-transparent hover:border-b-edge">
+            <a
+              href="/field"
+              className="inline-flex min-h-9 items-center border-y-[3px] border-transparent hover:border-b-edge"
+            >
               Phone app
             </a>
           )}

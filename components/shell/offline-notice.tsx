@@ -11,8 +11,11 @@ export function OfflineNotice(): ReactElement | null {
   return (
     <Notice tone="warn" live="polite" title="No network" className="print-hidden mb-5">
       <p>
-        What is on this page may be old, and nothing can be stored from it. <a href="/field" className="underline">The phone app</a> works
-        without a network.
+        What is on this page may be old, and nothing can be stored from it.{' '}
+        <a href="/field" className="underline">
+          The phone app
+        </a>{' '}
+        works without a network.
       </p>
     </Notice>
   );

@@ -15,3 +15,8 @@ export function roleWords(role: string): string {
   const words: Readonly<Record<string, string>> = ROLE_WORDS;
   return words[role] ?? role;
 }
+
+/** Does this role settle, lock and amend readings? The office decides; pages only spare others the keys. */
+export function settles(role: RoleName): boolean {
+  return role === 'reviewer' || role === 'biologist';
+}

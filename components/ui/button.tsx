@@ -7,6 +7,12 @@ interface ButtonProps extends ComponentPropsWithRef<'button'> {
 }
 
 /** A button that names its act. Does not submit a form unless told to. */
-export function Button({ tone = 'plain', size = 'lab', type = 'button', className, ...rest }: ButtonProps): ReactElement {
+export function Button({
+  tone = 'plain',
+  size = 'lab',
+  type = 'button',
+  className,
+  ...rest
+}: ButtonProps): ReactElement {
   return <button type={type} className={buttonLook(tone, size, className)} {...rest} />;
 }

@@ -40,6 +40,12 @@ export function fullDateWords(date: string): string {
   return dateWords(date, '');
 }
 
+/** `2026-06-23` → `23 Jun`, for the axis of a chart. */
+export function axisWords(date: string): string {
+  const { day, month } = dayParts(date);
+  return `${day} ${month.slice(0, 3)}`;
+}
+
 /** Both ends of a range, what they share said once: `18 and 29 June`, `29 April and 13 May`. */
 export function spanWords([from, to]: readonly [string, string], inYear: YearShown = from): string {
   const [a, b] = [dayParts(from), dayParts(to)];
@@ -67,7 +73,11 @@ export function rangeWords(median: string, ends: readonly [string, string], inYe
   const within = ends[0] === ends[1];
   return {
     day: dateWords(median, year),
-    range: within ? (ends[0] === median ? 'within the day' : `on ${dateWords(ends[0], year)}`) : `between ${spanWords(ends, year)}`,
+    range: within
+      ? ends[0] === median
+        ? 'within the day'
+        : `on ${dateWords(ends[0], year)}`
+      : `between ${spanWords(ends, year)}`,
   };
 }
 
@@ -100,5 +110,7 @@ export function runWords(numbers: readonly number[]): string {
     if (last && n === last[1] + 1) last[1] = n;
     else runs.push([n, n]);
   }
-  return runs.map(([from, to]) => (from === to ? `${from}` : to === from + 1 ? `${from}, ${to}` : `${from}–${to}`)).join(', ');
+  return runs
+    .map(([from, to]) => (from === to ? `${from}` : to === from + 1 ? `${from}, ${to}` : `${from}–${to}`))
+    .join(', ');
 }

@@ -33,7 +33,12 @@ export function Field({ id, label, hint, error, required, className = '', childr
           {hint}
         </p>
       )}
-      {children({ id, 'aria-describedby': describedBy || undefined, 'aria-invalid': error ? true : undefined, required })}
+      {children({
+        id,
+        'aria-describedby': describedBy || undefined,
+        'aria-invalid': error ? true : undefined,
+        required,
+      })}
       {error && (
         <p id={`${id}-error`} className="font-bold text-stop">
           {error}

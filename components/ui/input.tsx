@@ -1,7 +1,7 @@
 import type { ComponentPropsWithRef, ReactElement } from 'react';
 
 const LOOK =
-  'w-full rounded border-2 border-edge bg-paper px-3 py-1.5 text-ink placeholder:text-quiet ' +
+  'w-full rounded border-2 border-edge bg-paper px-3 py-1 text-ink placeholder:text-quiet ' +
   'hover:border-ink aria-invalid:border-stop disabled:bg-wash disabled:text-quiet';
 
 /** A one-line text, date or search control; give it the attributes of its `Field`. */

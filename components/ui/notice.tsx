@@ -30,7 +30,7 @@ export function Notice({ tone = 'info', title, live, className = '', children }:
   return (
     <div
       role={live === 'assertive' ? 'alert' : live === 'polite' ? 'status' : undefined}
-      className={`keep-together flex gap-3 rounded border-l-[6px] px-4 py-3 ${LOOKS[tone]} ${className}`}
+      className={`keep-together flex gap-3 rounded-r border-l-[6px] px-4 py-3 ${LOOKS[tone]} ${className}`}
     >
       <span aria-hidden="true" className={`font-mono text-lg leading-6 font-bold ${look}`}>
         {sign}

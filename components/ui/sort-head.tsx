@@ -20,7 +20,11 @@ interface SortHeadProps {
 export function SortHead({ state, href, className, children }: SortHeadProps): ReactElement {
   return (
     <HeadCell aria-sort={ARIA_SORT[state]} className={className}>
-      <Link href={href} scroll={false} className="inline-flex min-h-6 items-center gap-1 whitespace-nowrap hover:underline">
+      <Link
+        href={href}
+        scroll={false}
+        className="inline-flex min-h-6 items-center gap-1 whitespace-nowrap hover:underline"
+      >
         {children}
         <span aria-hidden="true" className="w-3 text-xs">
           {SIGNS[state]}

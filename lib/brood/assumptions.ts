@@ -27,7 +27,9 @@ function durationText({ row, match }: DurationChoice): string {
 function totalText({ row }: DurationChoice): string[] {
   const sum = row.egg + row.larva + row.capped;
   if (row.publishedTotal === undefined || Math.abs(sum - row.publishedTotal) < 0.05) return [];
-  return [`The stages add up to ${days(sum)} days, while the same source prints ${days(row.publishedTotal)} for the whole.`];
+  return [
+    `The stages add up to ${days(sum)} days, while the same source prints ${days(row.publishedTotal)} for the whole.`,
+  ];
 }
 
 function spreadText({ values }: BroodSettings): string {
@@ -59,7 +61,9 @@ export function assumptionTexts(input: AssumptionInput): string[] {
     'No temperature record is used: days are calendar days.',
     lossText(settings),
     `The nest's own dates are those of its most advanced brood; founding is ${days(foundingLead.value)} day(s) before the first egg.`,
-    ...(isFoundingBound ? ['The oldest cell was already opened, so she founded the nest on the dates shown or earlier.'] : []),
+    ...(isFoundingBound
+      ? ['The oldest cell was already opened, so she founded the nest on the dates shown or earlier.']
+      : []),
     ...(unsureCells > 0 ? [`Marked unsure: ${unsureCells} cell(s). They are dated as written.`] : []),
   ];
 }

@@ -16,7 +16,11 @@ export interface BroodDates {
 
 /** Averages how a brood ends over the nest factor. */
 function mixedLosses({ losses }: ClassLaw, nodes: readonly FactorNode[]): LossByStage {
-  const mix = (stage: keyof LossByStage) => mixNodes(nodes, losses.map((byStage) => byStage[stage]));
+  const mix = (stage: keyof LossByStage) =>
+    mixNodes(
+      nodes,
+      losses.map((byStage) => byStage[stage]),
+    );
   return { egg: mix('egg'), larva: mix('larva'), capped: mix('capped') };
 }
 
@@ -57,5 +61,14 @@ export function cellEstimate(view: CellView, datesOf: (brood: BroodSighting) => 
     return { q, r, state, generation, laid, capped, emerges, lost: { probability: lossTotal(losses) } };
   }
   const ofGone = gone ? (datesOf(gone)?.losses ?? null) : null;
-  return { q, r, state, generation, laid: null, capped: null, emerges: null, lost: { probability: lostWithout(view, ofGone) } };
+  return {
+    q,
+    r,
+    state,
+    generation,
+    laid: null,
+    capped: null,
+    emerges: null,
+    lost: { probability: lostWithout(view, ofGone) },
+  };
 }

@@ -42,9 +42,15 @@ function backFromCapped({ to, days, later }: Change, model: NestModel): Finding 
     };
   }
   if (to && to.key !== 'egg' && days < meanDays(model, 0, to.first - 1) * FASTEST) {
-    return { code: 'step-back', text: 'Capped before, a larva now: too soon for a new one. One of the two looks slipped.' };
+    return {
+      code: 'step-back',
+      text: 'Capped before, a larva now: too soon for a new one. One of the two looks slipped.',
+    };
   }
-  return { code: 'capped-gone', text: 'The cap is gone and no opened cell was seen: an adult came out, or the brood was lost.' };
+  return {
+    code: 'capped-gone',
+    text: 'The cap is gone and no opened cell was seen: an adult came out, or the brood was lost.',
+  };
 }
 
 function tooFast(text: string): Finding {
@@ -71,7 +77,10 @@ function judge(change: Change, model: NestModel): Finding | null {
   }
   if (!to) return null;
   if (isRestart(from, to)) {
-    return { code: 'relaid', text: 'A larva before, an egg now: the larva was lost and she laid again. Dates are for the new egg.' };
+    return {
+      code: 'relaid',
+      text: 'A larva before, an egg now: the larva was lost and she laid again. Dates are for the new egg.',
+    };
   }
   return onward({ ...change, to }, model);
 }

@@ -43,7 +43,8 @@ const PUPA = STAGES.length - 1;
 function passages(chain: PhaseChain, group: StageGroup): Float64Array[] {
   const weights = equilibriumWeights(chain, phasesOf(chain, group));
   const firstPupal = chain.starts[PUPA] ?? 0;
-  const capping = group.first === PUPA ? passageSince(chain, firstPupal, weights) : passageTo(chain, weights, firstPupal);
+  const capping =
+    group.first === PUPA ? passageSince(chain, firstPupal, weights) : passageTo(chain, weights, firstPupal);
   return [passageSince(chain, 0, weights), capping, passageTo(chain, weights, chain.rates.length)];
 }
 
@@ -53,7 +54,11 @@ function passages(chain: PhaseChain, group: StageGroup): Float64Array[] {
  */
 export function classLaws(model: NestModel, groups: readonly StageGroup[]): Map<string, ClassLaw> {
   const { chain, nodes, settings } = model;
-  const laws = dayLaws(chain.clock, nodes, groups.flatMap((group) => passages(chain, group)));
+  const laws = dayLaws(
+    chain.clock,
+    nodes,
+    groups.flatMap((group) => passages(chain, group)),
+  );
   const byKey = new Map<string, ClassLaw>();
   groups.forEach((group, i) => {
     const [sinceLaid, capping, untilOut] = laws.slice(3 * i, 3 * i + 3);

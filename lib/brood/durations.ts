@@ -60,7 +60,9 @@ function nameParts(taxon: string): { genus: string; species: string } {
   const words = taxon.trim().toLowerCase().split(/\s+/);
   const [first = '', second = ''] = words;
   if (first === 'polistes' || first === 'p.') return { genus: 'polistes', species: second };
-  return words.length > 1 && second !== 'group' ? { genus: first, species: second } : { genus: 'polistes', species: first };
+  return words.length > 1 && second !== 'group'
+    ? { genus: first, species: second }
+    : { genus: 'polistes', species: first };
 }
 
 /**

@@ -47,10 +47,13 @@ function addCells(counts: number[], chance: number, cells: number): number[] {
 
 /** Distribution of the number of adults within a span, for one value of the nest factor. */
 function countsAt(broods: readonly BroodCount[], node: number, span: { from: number; to: number }): number[] {
-  return broods.reduce<number[]>((counts, brood) => {
-    const chance = chanceOut(brood, node, span);
-    return chance < NEGLIGIBLE ? counts : addCells(counts, chance, brood.cells);
-  }, [1]);
+  return broods.reduce<number[]>(
+    (counts, brood) => {
+      const chance = chanceOut(brood, node, span);
+      return chance < NEGLIGIBLE ? counts : addCells(counts, chance, brood.cells);
+    },
+    [1],
+  );
 }
 
 /** The smallest count that is reached with probability `p`. */
@@ -64,7 +67,11 @@ function countQuantile(counts: readonly number[], p: number): number {
 }
 
 /** Mixes the counts over the nest factor: given the factor, cells are independent of each other. */
-function mixedCounts(broods: readonly BroodCount[], nodes: readonly FactorNode[], span: { from: number; to: number }): number[] {
+function mixedCounts(
+  broods: readonly BroodCount[],
+  nodes: readonly FactorNode[],
+  span: { from: number; to: number },
+): number[] {
   const mixed: number[] = [];
   nodes.forEach(({ weight }, node) => {
     countsAt(broods, node, span).forEach((mass, n) => {
@@ -78,7 +85,10 @@ function mixedCounts(broods: readonly BroodCount[], nodes: readonly FactorNode[]
  * Adults to expect on each local day from `asOf` on, with an 80 % band from the exact distribution of the count
  * (cells independent given the nest factor, then mixed over it).
  */
-export function emergenceForecast(broods: readonly BroodCount[], { nodes, asOf, zone, days }: ForecastFrame): EmergenceDay[] {
+export function emergenceForecast(
+  broods: readonly BroodCount[],
+  { nodes, asOf, zone, days }: ForecastFrame,
+): EmergenceDay[] {
   const first = localDate(asOf, zone);
   const dates = Array.from({ length: days + 1 }, (_, i) => addDays(first, i));
   const bounds = dates.map((date) => startOfLocalDay(date, zone));

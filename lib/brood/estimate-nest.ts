@@ -39,7 +39,11 @@ function sharedDates(laws: ReadonlyMap<string, ClassLaw>, { nodes }: NestModel, 
 }
 
 /** How much the readings narrow the laying date of the most advanced brood, against a flat prior. */
-function informationOf(views: readonly CellView[], laws: ReadonlyMap<string, ClassLaw>, { chain, nodes, settings }: NestModel) {
+function informationOf(
+  views: readonly CellView[],
+  laws: ReadonlyMap<string, ClassLaw>,
+  { chain, nodes, settings }: NestModel,
+) {
   const priorSd = settings.values.priorSpan.value / Math.sqrt(12);
   const best = mostAdvanced(countBroods(views, laws));
   if (!best) return { priorSd, posteriorSd: priorSd };
@@ -50,15 +54,24 @@ function informationOf(views: readonly CellView[], laws: ReadonlyMap<string, Cla
 function inputFlags({ match }: DurationChoice, hasTemperature: boolean): BroodFlag[] {
   const flags: BroodFlag[] = [];
   if (match === 'other-genus') {
-    flags.push({ code: 'other-genus', text: 'These durations are for Polistes; for another genus the dates are a guess.' });
+    flags.push({
+      code: 'other-genus',
+      text: 'These durations are for Polistes; for another genus the dates are a guess.',
+    });
   }
   if (hasTemperature) {
-    flags.push({ code: 'temperature-unused', text: 'There is a temperature record; this model version does not use it yet.' });
+    flags.push({
+      code: 'temperature-unused',
+      text: 'There is a temperature record; this model version does not use it yet.',
+    });
   }
   return flags;
 }
 
-function digestOf(input: BroodInput, used: { readings: readonly BroodReading[]; settings: BroodSettings; choice: DurationChoice }): string {
+function digestOf(
+  input: BroodInput,
+  used: { readings: readonly BroodReading[]; settings: BroodSettings; choice: DurationChoice },
+): string {
   const text = inputText({
     model: BROOD_MODEL,
     settings: used.settings,
@@ -80,7 +93,12 @@ function frontMatter(input: BroodInput, readings: readonly BroodReading[], { row
     zone: input.zone,
     model: { ...BROOD_MODEL },
     durations: { taxon, egg, larva, capped, referenceC, trust, source },
-    temperature: { kind: 'none' as const, from: null, to: null, note: 'No temperature record is used: days are calendar days.' },
+    temperature: {
+      kind: 'none' as const,
+      from: null,
+      to: null,
+      note: 'No temperature record is used: days are calendar days.',
+    },
     readings: readings.map(({ id }) => id),
   };
 }

@@ -43,7 +43,8 @@ export function readText(value: unknown, field: string): string {
 
 /** Reads a finite number within bounds. @throws FieldError */
 export function readNumber(value: unknown, field: string, bounds: { min?: number; max?: number } = {}): number {
-  if (typeof value !== 'number' || !Number.isFinite(value)) throw new FieldError(field, `must be a number, is ${kindOf(value)}`);
+  if (typeof value !== 'number' || !Number.isFinite(value))
+    throw new FieldError(field, `must be a number, is ${kindOf(value)}`);
   const { min = -Infinity, max = Infinity } = bounds;
   if (value < min || value > max) throw new FieldError(field, `must be between ${min} and ${max}, is ${value}`);
   return value;

@@ -10,12 +10,12 @@ export interface LossByStage {
   capped: number;
 }
 
-/** The daily loss of each phase of the chain. */
-function phaseHazards(chain: PhaseChain, { values }: BroodSettings): number[] {
+/** What is lost in each phase of the chain: an egg, a larva or capped brood. */
+function phaseFates(chain: PhaseChain): (keyof LossByStage)[] {
   const larvae = phasesOf(chain, { first: 1, last: 5 });
   return Array.from(chain.rates, (_, i) => {
-    if (i < larvae.from) return values.lossEgg.value;
-    return i < larvae.to ? values.lossLarva.value : values.lossCapped.value;
+    if (i < larvae.from) return 'egg';
+    return i < larvae.to ? 'larva' : 'capped';
   });
 }
 
@@ -27,19 +27,24 @@ function phaseHazards(chain: PhaseChain, { values }: BroodSettings): number[] {
  */
 export function lossesByNode(
   chain: PhaseChain,
-  settings: BroodSettings,
+  { values }: BroodSettings,
   seen: { group: StageGroup; nodes: readonly FactorNode[] },
 ): LossByStage[] {
-  const hazards = phaseHazards(chain, settings);
-  const larvae = phasesOf(chain, { first: 1, last: 5 });
+  const hazards: LossByStage = {
+    egg: values.lossEgg.value,
+    larva: values.lossLarva.value,
+    capped: values.lossCapped.value,
+  };
+  const fates = phaseFates(chain);
   const start = equilibriumWeights(chain, phasesOf(chain, seen.group));
   return seen.nodes.map(({ rate }) => {
     const losses = { egg: 0, larva: 0, capped: 0 };
     let alive = 0;
     chain.rates.forEach((development, i) => {
       alive += start[i] ?? 0;
-      const lost = (alive * (hazards[i] ?? 0)) / (development * rate + (hazards[i] ?? 0));
-      losses[i < larvae.from ? 'egg' : i < larvae.to ? 'larva' : 'capped'] += lost;
+      const fate = fates[i] ?? 'capped';
+      const lost = (alive * hazards[fate]) / (development * rate + hazards[fate]);
+      losses[fate] += lost;
       alive -= lost;
     });
     return losses;

@@ -46,7 +46,16 @@ export function mostAdvanced(broods: readonly BroodCount[]): { brood: BroodSight
 
 function expectedLosses(broods: readonly BroodCount[], { nodes }: NestModel): NestEstimate['expectedLosses'] {
   const total = (stage: 'egg' | 'larva' | 'capped') =>
-    broods.reduce((sum, { law, cells }) => sum + cells * mixNodes(nodes, law.losses.map((byStage) => byStage[stage])), 0);
+    broods.reduce(
+      (sum, { law, cells }) =>
+        sum +
+        cells *
+          mixNodes(
+            nodes,
+            law.losses.map((byStage) => byStage[stage]),
+          ),
+      0,
+    );
   return { egg: total('egg'), larva: total('larva'), capped: total('capped') };
 }
 

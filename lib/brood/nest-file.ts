@@ -11,7 +11,8 @@ function readMark(value: unknown, field: string): BroodMark {
   const mark = readObject(value, field);
   const q = readWhole(mark.q, `${field}.q`);
   const r = readWhole(mark.r, `${field}.r`);
-  if (!isAddress(q, r)) throw new FieldError(field, `cell ${q},${r} lies further than ${MAX_ADDRESS} from the pedicel cell`);
+  if (!isAddress(q, r))
+    throw new FieldError(field, `cell ${q},${r} lies further than ${MAX_ADDRESS} from the pedicel cell`);
   if (!isCellState(mark.state)) throw new FieldError(`${field}.state`, `must be one of ${CELL_STATES.join(', ')}`);
   const instar = mark.instar ?? null;
   return {

@@ -25,7 +25,10 @@ export function readInstant(value: unknown, field: string, zone: string): number
   const date = INSTANT.exec(text)?.[1];
   const ms = Date.parse(text);
   if (date === undefined || !isDate(date) || Number.isNaN(ms)) {
-    throw new FieldError(field, `"${text}" is neither a date nor a time with an offset such as 2026-06-16T05:35:00-04:00`);
+    throw new FieldError(
+      field,
+      `"${text}" is neither a date nor a time with an offset such as 2026-06-16T05:35:00-04:00`,
+    );
   }
   return ms;
 }

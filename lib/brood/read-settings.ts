@@ -23,7 +23,8 @@ function readRow(value: unknown, field: string): DurationRow {
     egg: readNumber(row.egg, `${field}.egg`, DAYS),
     larva: readNumber(row.larva, `${field}.larva`, DAYS),
     capped: readNumber(row.capped, `${field}.capped`, DAYS),
-    referenceC: row.referenceC === undefined ? 25 : readNumber(row.referenceC, `${field}.referenceC`, { min: 0, max: 50 }),
+    referenceC:
+      row.referenceC === undefined ? 25 : readNumber(row.referenceC, `${field}.referenceC`, { min: 0, max: 50 }),
     trust: readTrust(row.trust, `${field}.trust`),
     source: readSource(row.source, `${field}.source`),
   };
@@ -59,7 +60,10 @@ export function readSettings(value: unknown, field: string): BroodSettings {
   }
   const rows = given.durations === undefined ? [] : readList(given.durations, `${field}.durations`, readRow);
   return {
-    version: given.version === undefined ? `${DEFAULT_SETTINGS.version}, changed` : readText(given.version, `${field}.version`),
+    version:
+      given.version === undefined
+        ? `${DEFAULT_SETTINGS.version}, changed`
+        : readText(given.version, `${field}.version`),
     values,
     durations: [...rows, ...DEFAULT_SETTINGS.durations],
   };

@@ -19,7 +19,9 @@ function fail(...lines) {
 function checkNode() {
   const [major = 0, minor = 0] = process.versions.node.split('.').map(Number);
   if (major > OLDEST_NODE[0] || (major === OLDEST_NODE[0] && minor >= OLDEST_NODE[1])) return;
-  fail(`Node ${process.versions.node} is too old: version ${OLDEST_NODE.join('.')} or newer is needed (https://nodejs.org).`);
+  fail(
+    `Node ${process.versions.node} is too old: version ${OLDEST_NODE.join('.')} or newer is needed (https://nodejs.org).`,
+  );
 }
 
 /** Runs `npm ci` with its own output shown. @returns {Promise<number>} its exit code */

@@ -1,10 +1,12 @@
 import { createHash } from 'node:crypto';
 import { readFileSync } from 'node:fs';
+import { answerHistories } from '@/lib/brood/answer-histories';
 import { estimateNest } from '@/lib/brood/estimate-nest';
+import { parseHistoriesFile } from '@/lib/brood/histories-file';
 import { parseNestFile } from '@/lib/brood/nest-file';
 import { type Result, err, ok } from '@/lib/kit/result';
 
-const USAGE = 'usage: npm run --silent brood -- --nest FILE.json';
+const USAGE = 'usage: npm run --silent brood -- --nest FILE.json | --histories FILE.json';
 
 /** The exit code of a file or a command line that cannot be read. */
 const EXIT_MALFORMED = 2;
@@ -18,7 +20,15 @@ function nestAnswer(text: string): Result<unknown, string> {
   return input.ok ? ok(estimateNest({ ...input.value, digest: sha256 })) : input;
 }
 
-const DOORS: Readonly<Record<string, (text: string) => Result<unknown, string>>> = { '--nest': nestAnswer };
+function historiesAnswer(text: string): Result<unknown, string> {
+  const file = parseHistoriesFile(text);
+  return file.ok ? ok(answerHistories(file.value)) : file;
+}
+
+const DOORS: Readonly<Record<string, (text: string) => Result<unknown, string>>> = {
+  '--nest': nestAnswer,
+  '--histories': historiesAnswer,
+};
 
 function readInput(path: string): Result<string, string> {
   try {

@@ -12,7 +12,11 @@ const CODE_FOLDERS = ['app', 'components', 'lib', 'models', 'migrations', 'worke
 
 /** Everything `npm run check` does, in this order. The route types must exist before the compiler runs. */
 export const CHECK_STEPS: readonly CheckStep[] = [
-  { name: 'format', script: 'prettier/bin/prettier.cjs', args: ['--check', '--log-level=warn', '.', '!tests/fixtures/**'] },
+  {
+    name: 'format',
+    script: 'prettier/bin/prettier.cjs',
+    args: ['--check', '--log-level=warn', '.', '!tests/fixtures/**'],
+  },
   { name: 'lint', script: 'eslint/bin/eslint.js', args: ['--config', ESLINT_CONFIG, '--max-warnings=0', '.'] },
   {
     name: 'boundaries',

@@ -39,14 +39,15 @@ function signalGroup(child: ChildProcess, signal: NodeJS.Signals): void {
   }
 }
 
-/** Ends a child politely first, then with force. Resolves when it is gone. */
+/** Ends a child politely first, then with force, and whatever it left running. Resolves when it is gone. */
 export async function endChild(child: ChildProcess): Promise<void> {
   for (const { signal, graceMs } of ESCALATION) {
-    if (hasEnded(child)) return;
+    if (hasEnded(child)) break;
     const ended = new Promise<void>((resolve) => child.once('close', () => resolve()));
     signalGroup(child, signal);
     await Promise.race([ended, sleep(graceMs, undefined, { ref: false })]);
   }
+  signalGroup(child, 'SIGKILL');
 }
 
 /** Is the process gone? */
@@ -61,9 +62,19 @@ function destination(output: ChildOptions['output']): 'inherit' | 'pipe' | numbe
 }
 
 /** Starts a child. With `output: 'keep'` somebody must read its pipes, as `runChild` does. */
-export function startChild({ command, args, env, output, ownGroup = true }: Omit<ChildOptions, 'signal'>): ChildProcess {
+export function startChild({
+  command,
+  args,
+  env,
+  output,
+  ownGroup = true,
+}: Omit<ChildOptions, 'signal'>): ChildProcess {
   const to = destination(output);
-  const child = spawn(command, args, { env: { ...process.env, ...env }, stdio: ['ignore', to, to], detached: ownGroup });
+  const child = spawn(command, args, {
+    env: { ...process.env, ...env },
+    stdio: ['ignore', to, to],
+    detached: ownGroup,
+  });
   if (typeof to === 'number') closeSync(to);
   return child;
 }

@@ -22,7 +22,13 @@ export async function requireChromium({ progress, signal }: CommandContext): Pro
   if (!existsSync('/usr/bin/apt-get')) throw new CommandError(`${missing}\nInstall it and set CHROMIUM to its path.`);
   if (process.getuid?.() !== 0) throw new CommandError(`${missing}\nRun this once as root:\n  ${BY_HAND}`);
   const { code, output } = await progress.step('installing Chromium from Debian (about 90 MB)', () =>
-    runChild({ command: 'sh', args: ['-c', BY_HAND], env: { DEBIAN_FRONTEND: 'noninteractive' }, output: 'keep', signal }),
+    runChild({
+      command: 'sh',
+      args: ['-c', BY_HAND],
+      env: { DEBIAN_FRONTEND: 'noninteractive' },
+      output: 'keep',
+      signal,
+    }),
   );
   if (code === 0 && findChromium()) return;
   const lastLines = output.trimEnd().split('\n').slice(-5).join('\n');

@@ -15,7 +15,8 @@ export function packagesOutdated(root) {
   const present = JSON.parse(readFileSync(record, 'utf8')).packages;
   for (const [path, entry] of Object.entries(wanted)) {
     if (path === '' || entry.optional || entry.devOptional || entry.peer) continue;
-    if (present[path]?.version !== entry.version) return `${path.replace('node_modules/', '')} should be ${entry.version}`;
+    if (present[path]?.version !== entry.version)
+      return `${path.replace('node_modules/', '')} should be ${entry.version}`;
   }
   return null;
 }

@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
@@ -14,14 +14,36 @@ export function lockPath(folder, what) {
   return join(tmpdir(), `undereave-${createHash('sha256').update(folder).digest('hex').slice(0, 16)}-${what}.lock`);
 }
 
+/**
+ * Names one life of a process: its id and, where the system tells, when it began, because ids are used again.
+ * A process that has ended but that nobody has collected yet counts as gone.
+ *
+ * @param {number} pid
+ * @returns {string | null} null when there is no such process
+ */
+export function processMark(pid) {
+  try {
+    if (existsSync('/proc/self/stat')) {
+      const fields = readFileSync(`/proc/${pid}/stat`, 'utf8')
+        .replace(/^.*\) /s, '')
+        .split(' ');
+      return /[ZX]/.test(fields[0]) ? null : `${pid} ${fields[19]}`;
+    }
+    process.kill(pid, 0);
+    return String(pid);
+  } catch (error) {
+    return error.code === 'EPERM' ? String(pid) : null;
+  }
+}
+
 /** The living process that holds the lock, or null. @param {string} path */
 export function lockHolder(path) {
   try {
-    const pid = Number(readFileSync(path, 'utf8'));
-    process.kill(pid, 0);
-    return pid;
-  } catch (error) {
-    return error.code === 'EPERM' ? 0 : null;
+    const mark = readFileSync(path, 'utf8');
+    const pid = Number(mark.split(' ')[0]);
+    return processMark(pid) === mark ? pid : null;
+  } catch {
+    return null;
   }
 }
 
@@ -34,7 +56,7 @@ export function lockHolder(path) {
 export function tryLock(path) {
   for (let attempt = 0; attempt < 2; attempt++) {
     try {
-      writeFileSync(path, String(process.pid), { flag: 'wx' });
+      writeFileSync(path, processMark(process.pid) ?? '', { flag: 'wx' });
       return true;
     } catch (error) {
       if (error.code !== 'EEXIST') throw error;

@@ -52,7 +52,11 @@ function plan(parts: Set<TestPart>, context: CommandContext): (() => Promise<Cou
   if (chosen('build', 'api', 'e2e').length > 0) runs.push(preparation(() => buildApplication(context)));
   if (chosen('db', 'api', 'e2e').length > 0) runs.push(preparation(() => startDatabaseServer(context)));
   if (stored.length > 0) runs.push(() => runVitest(stored, context));
-  if (parts.has('e2e')) runs.push(preparation(() => requireChromium(context)), () => runPlaywright(context));
+  if (parts.has('e2e'))
+    runs.push(
+      preparation(() => requireChromium(context)),
+      () => runPlaywright(context),
+    );
   return runs;
 }
 

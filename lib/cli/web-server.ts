@@ -29,7 +29,9 @@ function portInUse(port: number): Promise<boolean> {
 /** @throws CommandError when something already listens on the port. */
 export async function requireFreePort(port: number): Promise<void> {
   if (!(await portInUse(port))) return;
-  throw new CommandError(`Port ${port} is taken by another program. Stop it, or choose another port with PORT=${port + 1}.`);
+  throw new CommandError(
+    `Port ${port} is taken by another program. Stop it, or choose another port with PORT=${port + 1}.`,
+  );
 }
 
 /**
@@ -66,7 +68,8 @@ export async function waitUntilHealthy(server: ChildProcess, port: number, signa
   while (!(await isHealthy(port))) {
     if (signal?.aborted) return;
     if (hasEnded(server)) throw new CommandError('The server ended while starting; its message is above.');
-    if (performance.now() > deadline) throw new CommandError(`No healthy answer from http://${HOST}:${port}/api/health for 60 s.`);
+    if (performance.now() > deadline)
+      throw new CommandError(`No healthy answer from http://${HOST}:${port}/api/health for 60 s.`);
     await sleep(100);
   }
 }

@@ -16,7 +16,9 @@ export function contentPolicy({ nonce, scriptHashes, development }: PolicySource
   const scripts = [
     "'self'",
     ...(nonce === null ? [] : [`'nonce-${nonce}'`]),
-    ...(development ? ["'unsafe-eval'", ...(nonce === null ? ["'unsafe-inline'"] : [])] : scriptHashes.map((hash) => `'${hash}'`)),
+    ...(development
+      ? ["'unsafe-eval'", ...(nonce === null ? ["'unsafe-inline'"] : [])]
+      : scriptHashes.map((hash) => `'${hash}'`)),
   ];
   return [
     "default-src 'self'",
@@ -38,5 +40,7 @@ const HASH = /^sha256-[A-Za-z0-9+/]{43}=$/;
 
 /** The script hashes in a list that was read from a file; anything else in it is left out. */
 export function scriptHashes(list: unknown): string[] {
-  return Array.isArray(list) ? list.filter((entry): entry is string => typeof entry === 'string' && HASH.test(entry)) : [];
+  return Array.isArray(list)
+    ? list.filter((entry): entry is string => typeof entry === 'string' && HASH.test(entry))
+    : [];
 }

@@ -1,6 +1,6 @@
 import type { PhoneClock } from './phone-clock';
 import type { Store } from './store';
-import type { Timers } from './timers';
+import { type Timers, sleep } from './timers';
 
 /** Which tab drains now, and until when others leave it alone. */
 export interface Lease {
@@ -65,7 +65,7 @@ async function release({ store, holder }: LeasePorts): Promise<void> {
 /** Renews until stopped; returns early when another tab has taken over or the storage fails. */
 async function heartbeat(ports: LeasePorts, stop: AbortSignal): Promise<void> {
   for (;;) {
-    await ports.timers.sleep(HEARTBEAT_MS, stop);
+    await sleep(ports.timers, HEARTBEAT_MS, stop);
     if (stop.aborted || !(await renew(ports))) return;
   }
 }
@@ -88,7 +88,7 @@ export async function withLease<T>(ports: LeasePorts, work: (lease: HeldLease) =
     try {
       return await work({ lost: () => lost });
     } finally {
-      stop.abort();
+      stop.abort('done');
       await beating;
       await release(ports).catch(() => undefined);
     }

@@ -1,7 +1,7 @@
 import type { Random } from '@/lib/kit/random';
 import type { Drain } from './drain';
 import type { DrainEnd } from './drain-ports';
-import type { Timers } from './timers';
+import { type Timers, sleep } from './timers';
 
 /** Something that may mean the network is back. */
 export type WakeReason = 'online' | 'visible' | 'manual' | 'signed-in';
@@ -47,9 +47,9 @@ export function backoffMs(failures: number, random: Random): number {
 function waker(timers: Timers) {
   let current = new AbortController();
   return {
-    wake: () => current.abort(),
+    wake: () => current.abort('wake'),
     isAwake: () => current.signal.aborted,
-    sleep: (ms: number) => timers.sleep(ms, current.signal),
+    sleep: (ms: number) => sleep(timers, ms, current.signal),
     rearm: () => {
       current = new AbortController();
     },

@@ -1,7 +1,7 @@
 /** The only way the core waits. */
 export interface Timers {
-  /** Resolves after `ms`, or at once when `wake` fires. Never rejects. */
-  sleep(ms: number, wake?: AbortSignal): Promise<void>;
+  /** Calls `fire` after `ms`, unless the returned function was called before. */
+  after(ms: number, fire: () => void): () => void;
 }
 
 /** Thrown by `within` when the time is over. */
@@ -9,20 +9,27 @@ export class TimedOut extends Error {
   override name = 'TimedOut';
 }
 
+/** Resolves after `ms`, or at once when `wake` fires. Never rejects. */
+export function sleep(timers: Timers, ms: number, wake?: AbortSignal): Promise<void> {
+  if (wake?.aborted) return Promise.resolve();
+  return new Promise((resolve) => {
+    const end = () => {
+      cancel();
+      wake?.removeEventListener('abort', end);
+      resolve();
+    };
+    const cancel = timers.after(ms, end);
+    wake?.addEventListener('abort', end);
+  });
+}
+
 /**
  * The promise's outcome, or `TimedOut` after `ms`. The work itself goes on and may still succeed later:
  * the caller must be able to do it twice.
  */
-export async function within<T>(timers: Timers, ms: number, work: Promise<T>): Promise<T> {
-  const over = new AbortController();
-  const alarm = timers.sleep(ms, over.signal).then(() => {
-    throw new TimedOut(`no answer within ${ms} ms`);
+export function within<T>(timers: Timers, ms: number, work: Promise<T>): Promise<T> {
+  return new Promise((resolve, reject) => {
+    const cancel = timers.after(ms, () => reject(new TimedOut(`no answer within ${ms} ms`)));
+    work.then(resolve, reject).finally(cancel);
   });
-  // The alarm also fires when the work is done and it is woken; nobody listens then.
-  alarm.catch(() => undefined);
-  try {
-    return await Promise.race([work, alarm]);
-  } finally {
-    over.abort();
-  }
 }

@@ -8,22 +8,24 @@ export function checkDeps(opId: string, deps: readonly unknown[]): OpCode | null
   return deps.every((dep) => isUuidText(dep) && dep !== opId) ? null : 'deps';
 }
 
+/** Does an operation wait for itself, directly or through others, so that it could never be applied? */
+function waitsForItself(opId: string, waitsFor: ReadonlyMap<string, readonly string[]>): boolean {
+  const seen = new Set<string>();
+  const ahead = [...(waitsFor.get(opId) ?? [])];
+  for (let next = ahead.pop(); next !== undefined; next = ahead.pop()) {
+    if (next === opId) return true;
+    if (seen.has(next)) continue;
+    seen.add(next);
+    ahead.push(...(waitsFor.get(next) ?? []));
+  }
+  return false;
+}
+
 /**
- * The operations that wait for themselves, directly or through others, and so could never be applied.
+ * Those of the given operations that wait for themselves.
  *
  * @param waitsFor what each operation waits for, those already parked on the server included.
  */
-export function opsInCycles(waitsFor: ReadonlyMap<string, readonly string[]>): Set<string> {
-  const caught = new Set<string>();
-  for (const start of waitsFor.keys()) {
-    const seen = new Set<string>();
-    const ahead = [...(waitsFor.get(start) ?? [])];
-    for (let next = ahead.pop(); next !== undefined; next = ahead.pop()) {
-      if (next === start) caught.add(start);
-      if (seen.has(next)) continue;
-      seen.add(next);
-      ahead.push(...(waitsFor.get(next) ?? []));
-    }
-  }
-  return caught;
+export function opsInCycles(opIds: readonly string[], waitsFor: ReadonlyMap<string, readonly string[]>): Set<string> {
+  return new Set(opIds.filter((opId) => waitsForItself(opId, waitsFor)));
 }

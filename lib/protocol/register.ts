@@ -1,6 +1,5 @@
 import { compareHlc } from '@/lib/kit/hlc';
 import type { Json } from './canonical-json';
-import type { EntityRef } from './entity-of';
 
 /** One setting of a register: a field or note of an entity, with its history. */
 export interface RegisterSet {
@@ -9,11 +8,6 @@ export interface RegisterSet {
   /** The settings this one was made from; it takes their place. */
   bases: readonly string[];
   value: Json;
-}
-
-/** Names a register within a team. */
-export function registerKey(kind: 'field.set' | 'note.set', entity: EntityRef, field: string): string {
-  return kind === 'note.set' ? `note ${entity.type} ${entity.id}` : `field ${entity.type} ${entity.id} ${field}`;
 }
 
 /** `base` of a body as a list of operation ids. */

@@ -39,7 +39,8 @@ function packageRule({ folder, packages, instead }) {
 function reachRule(folder) {
   return {
     name: `reach of ${folder}`,
-    comment: 'Somewhere along this way a file that runs on phones imports one that belongs to the server: cut it there.',
+    comment:
+      'Somewhere along this way a file that runs on phones imports one that belongs to the server: cut it there.',
     severity: 'error',
     from: { path: anyOf([folder]) },
     to: { path: anyOf(['lib/server', 'models']), reachable: true },
@@ -61,7 +62,8 @@ const config = {
     },
     {
       name: 'cycle',
-      comment: 'Files that import each other in a ring can only be understood together: move what both need to a third.',
+      comment:
+        'Files that import each other in a ring can only be understood together: move what both need to a third.',
       severity: 'error',
       from: {},
       to: { circular: true },
@@ -86,7 +88,10 @@ const config = {
     exclude: { path: String.raw`^(\.next|\.data|public)` },
     tsPreCompilationDeps: true,
     tsConfig: { fileName: 'tsconfig.json' },
-    enhancedResolveOptions: { exportsFields: ['exports'], conditionNames: ['import', 'require', 'node', 'default', 'types'] },
+    enhancedResolveOptions: {
+      exportsFields: ['exports'],
+      conditionNames: ['import', 'require', 'node', 'default', 'types'],
+    },
   },
 };
 

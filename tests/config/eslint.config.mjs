@@ -7,17 +7,26 @@ const ARGUMENT = 'Take a clock, random source or id as an argument; lib/kit has 
 
 /** Where the running program meets chance and time. */
 const EDGE_SYNTAX = [
-  { selector: "CallExpression[callee.object.name='Date'][callee.property.name='now']", message: `No Date.now here. ${ARGUMENT}` },
+  {
+    selector: "CallExpression[callee.object.name='Date'][callee.property.name='now']",
+    message: `No Date.now here. ${ARGUMENT}`,
+  },
   { selector: "NewExpression[callee.name='Date'][arguments.length=0]", message: `No new Date() here. ${ARGUMENT}` },
-  { selector: "CallExpression[callee.object.name='Math'][callee.property.name='random']", message: `No Math.random here. ${ARGUMENT}` },
+  {
+    selector: "CallExpression[callee.object.name='Math'][callee.property.name='random']",
+    message: `No Math.random here. ${ARGUMENT}`,
+  },
   { selector: "CallExpression[callee.property.name='randomUUID']", message: `No randomUUID here. ${ARGUMENT}` },
-  { selector: "CallExpression[callee.object.name='performance'][callee.property.name='now']", message: `No performance.now here. ${ARGUMENT}` },
+  {
+    selector: "CallExpression[callee.object.name='performance'][callee.property.name='now']",
+    message: `No performance.now here. ${ARGUMENT}`,
+  },
 ];
 
 /** A test that is switched off or runs alone hides what it would say. */
 const SWITCHED_OFF = [
   {
-    selector: "MemberExpression[object.name=/^(describe|it|test)$/][property.name=/^(only|skip|todo)$/]",
+    selector: 'MemberExpression[object.name=/^(describe|it|test)$/][property.name=/^(only|skip|todo)$/]',
     message: 'No .only, .skip or .todo: fix the test or delete it.',
   },
 ];
@@ -44,7 +53,14 @@ const config = [
       'import/no-duplicates': 'error',
       'no-restricted-imports': [
         'error',
-        { patterns: [{ group: ['../../*', '../..'], message: 'Two folders up is too far to follow: write @/ and the path from the root.' }] },
+        {
+          patterns: [
+            {
+              group: ['../../*', '../..'],
+              message: 'Two folders up is too far to follow: write @/ and the path from the root.',
+            },
+          ],
+        },
       ],
       'no-restricted-syntax': ['error', ...EDGE_SYNTAX],
       'no-console': 'error',
@@ -82,7 +98,10 @@ const config = [
   { files: ['tests/**'], rules: { 'no-restricted-syntax': ['error', ...SWITCHED_OFF] } },
   { files: ['lib/cli/**', 'tests/support/console-guard.ts'], rules: { 'no-console': 'off' } },
   { files: NEXT_FILES, rules: { 'import/no-default-export': 'off' } },
-  { files: ['tests/config/**'], rules: { 'no-restricted-imports': 'off', 'import/no-anonymous-default-export': 'off' } },
+  {
+    files: ['tests/config/**'],
+    rules: { 'no-restricted-imports': 'off', 'import/no-anonymous-default-export': 'off' },
+  },
 ];
 
 export default config;

@@ -12,7 +12,8 @@
 const PURE = ['lib/comb', 'lib/brood', 'lib/stats', 'lib/csv', 'lib/protocol'];
 const FOR_COMPONENTS = ['lib/comb', 'lib/brood', 'lib/stats', 'lib/csv', 'lib/offline'];
 const PURE_INSTEAD = 'This folder is pure: take what you need as an argument, or move the code to the folder that may.';
-const UI_INSTEAD = 'Components show what they are given: let the page or a hook of lib/offline fetch it and pass plain data.';
+const UI_INSTEAD =
+  'Components show what they are given: let the page or a hook of lib/offline fetch it and pass plain data.';
 
 /** Folders in order of search: the first that contains a file is the file's folder. @type {FolderRule[]} */
 export const IMPORT_TABLE = [
@@ -41,7 +42,11 @@ export const IMPORT_TABLE = [
     may: ['components', 'lib/server/auth'],
     instead: 'Files beside the route groups only frame the pages.',
   },
-  { folder: 'components/ui', may: [], instead: 'Primitives know nothing of our data: pass text, numbers and children.' },
+  {
+    folder: 'components/ui',
+    may: [],
+    instead: 'Primitives know nothing of our data: pass text, numbers and children.',
+  },
   { folder: 'components/comb', may: ['components/ui', ...FOR_COMPONENTS], instead: UI_INSTEAD },
   { folder: 'components/charts', may: ['components/ui', 'components/comb', ...FOR_COMPONENTS], instead: UI_INSTEAD },
   {

@@ -1,5 +1,6 @@
 import { randomBytes } from 'node:crypto';
 import { QueryTypes, type Sequelize } from 'sequelize';
+import { processMark } from '@/lib/cli/pid-lock.mjs';
 import { migrateUp } from '@/lib/cli/run-migrations';
 import { connect } from '@/lib/server/db/connect';
 
@@ -54,12 +55,7 @@ export function createTestDatabase(): Promise<TestDatabase> {
 }
 
 function ownerIsAlive(name: string): boolean {
-  try {
-    process.kill(Number(name.slice(PREFIX.length).split('_')[0]), 0);
-    return true;
-  } catch {
-    return false;
-  }
+  return processMark(Number(name.slice(PREFIX.length).split('_')[0])) !== null;
 }
 
 /** Drops what tests that were cut short have left behind: databases of processes that are gone. */

@@ -24,8 +24,11 @@ export function plantTree(files: Readonly<Record<string, string>>): PlantedTree 
   }
   const run = (script: string, args: readonly string[]) =>
     new Promise<{ code: number; output: string }>((resolve) => {
-      const child = execFile(process.execPath, [join('node_modules', script), ...args], { cwd: folder }, (_, out, err) =>
-        resolve({ code: child.exitCode ?? 1, output: out + err }),
+      const child = execFile(
+        process.execPath,
+        [join('node_modules', script), ...args],
+        { cwd: folder },
+        (_, out, err) => resolve({ code: child.exitCode ?? 1, output: out + err }),
       );
     });
   return { folder, run, remove: () => rmSync(folder, { recursive: true, force: true }) };

@@ -18,8 +18,8 @@ export default async function NoAccessPage(): Promise<ReactElement> {
     <PlainFrame>
       <h1 className="text-2xl font-bold">This page is not for your role</h1>
       <p className="mt-3">
-        You are signed in as {session.displayName}, {ROLE_WORDS[session.role]} of {session.teamName}. If you need this page, ask
-        your coordinator.
+        You are signed in as {session.displayName}, {ROLE_WORDS[session.role]} of {session.teamName}. If you need this
+        page, ask your coordinator.
       </p>
       <div className="mt-6 flex flex-wrap items-center gap-3">
         <LinkButton href="/nests" tone="main">

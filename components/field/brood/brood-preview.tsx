@@ -9,6 +9,7 @@ import { usePerson } from '@/components/field/parts/person-context';
 import type { BroodEstimate, DateRange } from '@/lib/brood/answer';
 import { estimateNest } from '@/lib/brood/estimate-nest';
 import type { Mark } from '@/lib/comb/mark';
+import { cellNumber } from '@/lib/comb/walk';
 import { SEASON_WORDS } from './season-words';
 
 interface BroodPreviewProps {
@@ -34,7 +35,13 @@ function usePreview({ nest, reading, taxon, marks }: BroodPreviewProps, zone: st
     const work = setTimeout(() => {
       try {
         const at = readAt(marks);
-        const estimate = estimateNest({ nest, zone, asOf: at, taxon, readings: [{ id: reading, at, marks: [...marks] }] });
+        const estimate = estimateNest({
+          nest,
+          zone,
+          asOf: at,
+          taxon,
+          readings: [{ id: reading, at, marks: [...marks] }],
+        });
         setPreview({ kind: 'ready', estimate });
       } catch {
         setPreview({ kind: 'failed' });
@@ -51,6 +58,13 @@ function Range({ range, none }: { range: DateRange | null; none: string }): Reac
   return range ? <DateRangeWords median={range.median} ends={range.p80} /> : <span>{none}</span>;
 }
 
+/** Why no first adult is given: it is past, or there is nothing to date. */
+function noFirstAdult(flags: BroodEstimate['flags']): string {
+  return flags.some(({ code }) => code === 'past')
+    ? 'Past: adults have come out already.'
+    : 'Cannot be dated from this reading.';
+}
+
 function EstimateWords({ estimate }: { estimate: BroodEstimate }): ReactElement {
   const { nest, assumptions, flags } = estimate;
   return (
@@ -61,14 +75,17 @@ function EstimateWords({ estimate }: { estimate: BroodEstimate }): ReactElement 
       <DescriptionList
         items={[
           { term: 'Nest founded', children: <Range range={nest.founded} none="Cannot be dated from this reading." /> },
-          { term: 'First adult expected', children: <Range range={nest.firstEmergence} none="Cannot be dated from this reading." /> },
+          { term: 'First adult expected', children: <Range range={nest.firstEmergence} none={noFirstAdult(flags)} /> },
           { term: 'Season for moving', children: SEASON_WORDS[nest.season] },
         ]}
       />
       {flags.length > 0 && (
         <ul className="ml-5 list-disc">
-          {flags.map((flag) => (
-            <li key={`${flag.code} ${flag.cell?.q ?? ''} ${flag.cell?.r ?? ''}`}>{flag.text}</li>
+          {flags.map(({ code, cell, text }) => (
+            <li key={`${code} ${cell ? cellNumber(cell) : ''}`}>
+              {cell && <strong>Cell {cellNumber(cell)}: </strong>}
+              {text}
+            </li>
           ))}
         </ul>
       )}

@@ -15,9 +15,14 @@ export function HelpKey({ topic }: { topic: HelpTopic }): ReactElement {
         type="button"
         aria-label="Help"
         onClick={() => setOpen(true)}
-        className="min-h-field min-w-field shrink-0 rounded-lg text-2xl font-bold hover:bg-wash"
+        className="flex min-h-field min-w-field shrink-0 items-center justify-center rounded-xl hover:bg-wash"
       >
-        ?
+        <span
+          aria-hidden="true"
+          className="size-9 rounded-full border-3 border-ink text-2xl leading-[1.7rem] font-bold"
+        >
+          ?
+        </span>
       </button>
       <Sheet open={open} title={title} onClose={() => setOpen(false)}>
         <div className="flex flex-col gap-5">

@@ -12,7 +12,9 @@ export function NearNestCard(): ReactElement {
         <li>Overhead wires within 3 m, spray seen or smelt, lightning, rain: stop the visit.</li>
         <li>No written yes of the owner, no permit, or a species that may be introduced: stop the visit.</li>
       </ul>
-      <p className="mt-2 text-quiet">Your programme’s stop rules, local law and medical direction come before this list.</p>
+      <p className="mt-2 text-quiet">
+        Your programme’s stop rules, local law and medical direction come before this list.
+      </p>
     </Notice>
   );
 }

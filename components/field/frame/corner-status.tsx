@@ -23,10 +23,10 @@ export function CornerStatus({ press = null }: CornerStatusProps): ReactElement 
   return (
     <a
       href={fieldHref({ kind: 'unsent' })}
-      className={`flex min-h-field max-w-40 min-w-field items-center justify-end gap-2 text-right leading-tight font-bold no-underline ${needsYou ? 'text-stop' : 'text-ink'}`}
+      className={`flex min-h-field max-w-32 min-w-field items-center justify-end gap-2 text-right leading-tight font-bold no-underline ${needsYou ? 'text-stop' : 'text-ink'}`}
     >
       <span>{sentence(press ? PRESS_WORDS[press] : words)}</span>
-      {count > 0 && (
+      {count > 0 && !words.includes(String(count)) && (
         <span
           aria-hidden="true"
           className={`min-w-9 rounded-full px-2 py-1 text-center font-mono ${needsYou ? 'bg-stop text-stop-on' : 'bg-ink text-paper'}`}

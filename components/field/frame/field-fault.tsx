@@ -1,8 +1,7 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { Button } from '@/components/ui/button';
-import { LinkButton } from '@/components/ui/link-button';
+import { FieldButton, FieldLink } from '@/components/field/parts/field-button';
 import { Screen } from '@/components/field/parts/screen';
 import { FIELD_ROOT } from '@/components/field/routing/field-route';
 
@@ -11,14 +10,14 @@ export function FieldFault({ onRetry }: { onRetry: () => void }): ReactElement {
   return (
     <div className="min-h-dvh bg-paper text-field text-ink">
       <Screen title="This screen failed">
-        <p role="alert">What was shown as saved is still saved on this phone. Try again; if it fails again, go to the nests.</p>
+        <p role="alert">
+          What was shown as saved is still saved on this phone. Try again; if it fails again, go to the nests.
+        </p>
         <div className="flex flex-wrap gap-gap">
-          <Button tone="main" size="field" onClick={onRetry}>
+          <FieldButton tone="main" onClick={onRetry}>
             Try again
-          </Button>
-          <LinkButton size="field" href={FIELD_ROOT}>
-            To the nests
-          </LinkButton>
+          </FieldButton>
+          <FieldLink href={FIELD_ROOT}>To the nests</FieldLink>
         </div>
       </Screen>
     </div>

@@ -4,10 +4,9 @@ import type { ReactElement, ReactNode } from 'react';
 import { HelpKey } from '@/components/field/cautions/help-key';
 import type { HelpTopic } from '@/components/field/cautions/help-topics';
 import { FIELD_ROOT } from '@/components/field/routing/field-route';
+import { Mark } from '@/components/shell/mark';
 import { CornerStatus, type PressState } from './corner-status';
-import { RoofMark } from './roof-mark';
 import { SignInAgain } from './sign-in-again';
-import { UpdateNotice } from './update-notice';
 
 interface FieldFrameProps {
   /** Where the back key leads, and the name of that place; the home screen has none. */
@@ -15,7 +14,7 @@ interface FieldFrameProps {
   /** Shown beside the back key, where the screen has no heading of its own below. */
   title?: ReactNode;
   help: HelpTopic;
-  /** A comb is being read: no offers, nothing that moves the page. */
+  /** A comb is being read: every line of the screen counts. */
   reading?: boolean;
   press?: PressState;
   children: ReactNode;
@@ -26,7 +25,7 @@ function BackKey({ href, to }: { href: string; to: string }): ReactElement {
     <a
       href={href}
       aria-label={`Back to ${to}`}
-      className="flex min-h-field min-w-field shrink-0 items-center justify-center rounded-lg text-4xl leading-none font-bold text-ink no-underline hover:bg-wash"
+      className="flex min-h-field min-w-field shrink-0 items-center justify-center rounded-xl text-4xl leading-none font-bold text-ink no-underline hover:bg-wash"
     >
       <span aria-hidden="true">‹</span>
     </a>
@@ -36,7 +35,7 @@ function BackKey({ href, to }: { href: string; to: string }): ReactElement {
 function HomeMark(): ReactElement {
   return (
     <a href={FIELD_ROOT} className="flex min-h-field items-center gap-2 text-xl font-bold text-ink no-underline">
-      <RoofMark />
+      <Mark size={38} />
       Undereave
     </a>
   );
@@ -54,7 +53,6 @@ export function FieldFrame({ back, title, help, reading = false, press, children
           <CornerStatus press={press} />
         </div>
       </header>
-      {!reading && <UpdateNotice />}
       <SignInAgain brief={reading} />
       {children}
     </div>

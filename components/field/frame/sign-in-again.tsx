@@ -1,7 +1,7 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { LinkButton } from '@/components/ui/link-button';
+import { FieldLink } from '@/components/field/parts/field-button';
 import { useSession } from '@/lib/offline/hooks/use-session';
 
 /** Where one signs in, with the way back. */
@@ -22,9 +22,9 @@ export function SignInAgain({ brief }: SignInAgainProps): ReactElement | null {
         <strong>Sign in again as {view.person.displayName}</strong> to send. Everything is kept on this phone.
       </p>
       {!brief && (
-        <LinkButton tone="main" size="field" href={SIGN_IN_HREF} className="mt-3">
+        <FieldLink tone="main" href={SIGN_IN_HREF} className="mt-3">
           Sign in again
-        </LinkButton>
+        </FieldLink>
       )}
     </section>
   );

@@ -1,7 +1,6 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { tallyWords } from '@/components/comb/comb-view';
 import { countWords } from '@/components/ui/date-words';
 import { fieldHref } from '@/components/field/routing/field-route';
 import { readingState, visitsWords } from '@/components/field/words/reading-words';
@@ -15,41 +14,39 @@ interface NestCardProps {
   today: string;
 }
 
-/** What is said about the last reading of a nest. */
-function LastReading({ reading }: { reading: ReadingView }): ReactElement {
-  if (reading.blind) return <span>Hidden until you hand in your second reading</span>;
-  const { tally } = reading;
-  return (
-    <span>
-      <strong>{countWords(tally.cellsTotal, 'cell')}</strong>
-      {tally.cellsTotal > 0 && `: ${tallyWords(tally).join(', ')}`}
-      <span className="block text-quiet">Reading {readingState(reading)}</span>
-    </span>
-  );
+/** What is said about the last reading of a nest: `33 cells · handed in, at the office`. */
+function lastReadingWords(reading: ReadingView): string {
+  if (reading.blind) return 'Hidden until you hand in your second reading';
+  return `${countWords(reading.tally.cellsTotal, 'cell')} · ${readingState(reading)}`;
 }
 
 /** The card of a nest whose last reading is known. */
 function CardWithReading({ nest, today, readingId }: NestCardProps & { readingId: string }): ReactElement {
   const reading = useReading(readingId) ?? null;
   return (
-    <CardFrame nest={nest} today={today} picture={reading && !reading.blind ? <CombThumb marks={reading.marks} /> : null}>
-      {reading && <LastReading reading={reading} />}
+    <CardFrame
+      nest={nest}
+      today={today}
+      picture={reading && !reading.blind ? <CombThumb marks={reading.marks} /> : null}
+    >
+      {reading ? lastReadingWords(reading) : 'Opening …'}
     </CardFrame>
   );
 }
 
 interface CardFrameProps extends NestCardProps {
   picture: ReactElement | null;
-  children: ReactElement | null;
+  /** What is said about its last reading. */
+  children: string;
 }
 
 function CardFrame({ nest, today, picture, children }: CardFrameProps): ReactElement {
   const visited = nest.lastVisitAt ? `Last visit ${writtenTime(nest.lastVisitAt, today)}` : visitsWords(nest.visits);
   return (
-    <li className="[contain-intrinsic-size:auto_9rem] [content-visibility:auto]">
+    <li>
       <a
         href={fieldHref({ kind: 'nest', id: nest.id })}
-        className="flex h-full min-h-key items-center gap-4 rounded-lg border-3 border-ink bg-paper p-4 text-ink no-underline hover:bg-wash"
+        className="flex h-full min-h-key items-center gap-4 rounded-xl border-3 border-ink bg-paper p-4 text-ink no-underline hover:bg-wash"
       >
         <span className="min-w-0 flex-1 [overflow-wrap:anywhere]">
           <span className="block text-[1.375rem] leading-snug font-bold">{nest.name ?? nest.code}</span>
@@ -57,7 +54,7 @@ function CardFrame({ nest, today, picture, children }: CardFrameProps): ReactEle
             {nest.name && `${nest.code} · `}
             {visited}
           </span>
-          <span className="mt-1 block">{children ?? 'No reading yet'}</span>
+          <span className="mt-1 block">{children}</span>
           {nest.waiting > 0 && <span className="block font-bold">{nest.waiting} waiting to send</span>}
           {nest.standing === 'not-accepted' && <span className="block font-bold text-stop">Needs you: see unsent</span>}
         </span>
@@ -72,7 +69,7 @@ export function NestCard({ nest, today }: NestCardProps): ReactElement {
   if (nest.lastReadingId === null) {
     return (
       <CardFrame nest={nest} today={today} picture={null}>
-        {null}
+        No reading yet
       </CardFrame>
     );
   }

@@ -1,7 +1,7 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { LinkButton } from '@/components/ui/link-button';
+import { FieldLink } from '@/components/field/parts/field-button';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import { Fetching } from '@/components/field/parts/fetching';
 import { NotOnThisPhone } from '@/components/field/parts/not-here';
@@ -24,7 +24,8 @@ function LastMap({ readingId }: { readingId: string }): ReactElement {
   const reading = useReading(readingId);
   const person = usePerson();
   const today = useToday(person.zone);
-  if (!reading) return <p className="text-quiet">{reading === null ? 'The last reading is not on this phone.' : 'Opening …'}</p>;
+  if (!reading)
+    return <p className="text-quiet">{reading === null ? 'The last reading is not on this phone.' : 'Opening …'}</p>;
   const mine = reading.mine ? 'you' : memberName(person, reading.observer);
   return (
     <>
@@ -46,7 +47,10 @@ function VisitRow({ visit, today }: { visit: VisitView; today: string }): ReactE
   const readings = visit.readings.length;
   const handedIn = visit.readings.filter((reading) => reading.submittedAt !== null).length;
   return (
-    <RowLink href={fieldHref({ kind: 'visit', id: visit.id })} title={`${purposeWord(visit.purpose)}, ${writtenTime(visit.startedAt, today)}`}>
+    <RowLink
+      href={fieldHref({ kind: 'visit', id: visit.id })}
+      title={`${purposeWord(visit.purpose)}, ${writtenTime(visit.startedAt, today)}`}
+    >
       {readings === 0 ? 'No reading yet' : `Readings handed in: ${progressWords(handedIn, readings)}`}
       {visit.standing === 'waiting' && ' · waiting to send'}
       {visit.standing === 'not-accepted' && ' · needs you'}
@@ -60,15 +64,24 @@ function NestBody({ nest }: { nest: NestView }): ReactElement {
   return (
     <Screen title={nestTitle(nest)} under={nest.taxon ? <em>{nest.taxon}</em> : 'Taxon not named yet'}>
       {open && (
-        <LinkButton tone="main" size="field" href={fieldHref({ kind: 'reading', id: open })} className="text-xl">
+        <FieldLink tone="main" href={fieldHref({ kind: 'reading', id: open })} className="text-xl">
           Go on reading
-        </LinkButton>
+        </FieldLink>
       )}
-      <LinkButton tone={open ? 'plain' : 'main'} size="field" href={fieldHref({ kind: 'new-visit', id: nest.id })} className="text-xl">
+      <FieldLink
+        tone={open ? 'plain' : 'main'}
+
+        href={fieldHref({ kind: 'new-visit', id: nest.id })}
+        className="text-xl"
+      >
         Start a visit
-      </LinkButton>
+      </FieldLink>
       <Part title="The comb">
-        {nest.lastReadingId ? <LastMap readingId={nest.lastReadingId} /> : <p>No reading yet. Start a visit, then read the cells.</p>}
+        {nest.lastReadingId ? (
+          <LastMap readingId={nest.lastReadingId} />
+        ) : (
+          <p>No reading yet. Start a visit, then read the cells.</p>
+        )}
       </Part>
       <Part title="Visits">
         {nest.visitList.length === 0 && <p>No visit yet.</p>}

@@ -2,14 +2,13 @@
 
 import { type ReactElement, useState } from 'react';
 import { EmptyState } from '@/components/ui/empty-state';
-import { Field } from '@/components/ui/field';
-import { Input } from '@/components/ui/input';
-import { LinkButton } from '@/components/ui/link-button';
+import { FieldLink } from '@/components/field/parts/field-button';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import { Fetching } from '@/components/field/parts/fetching';
 import { Part } from '@/components/field/parts/part';
 import { usePerson } from '@/components/field/parts/person-context';
 import { Screen } from '@/components/field/parts/screen';
+import { TextLine } from '@/components/field/parts/text-line';
 import { fieldHref } from '@/components/field/routing/field-route';
 import { useToday } from '@/components/field/words/use-today';
 import { useNests } from '@/lib/offline/hooks/use-nests';
@@ -30,22 +29,6 @@ function Cards({ nests, today }: { nests: readonly NestSummary[]; today: string 
   );
 }
 
-function NestSearch({ words, onChange }: { words: string; onChange: (words: string) => void }): ReactElement {
-  return (
-    <Field id="find-nest" label="Find a nest" hint="By code or name.">
-      {(control) => (
-        <Input
-          {...control}
-          type="search"
-          value={words}
-          onChange={(event) => onChange(event.target.value)}
-          className="min-h-field max-w-[40rem] border-3 text-field"
-        />
-      )}
-    </Field>
-  );
-}
-
 /** All nests in two groups, with a search when they are many. */
 function NestGroups({ nests }: { nests: readonly NestSummary[] }): ReactElement {
   const today = useToday(usePerson().zone);
@@ -53,7 +36,17 @@ function NestGroups({ nests }: { nests: readonly NestSummary[] }): ReactElement 
   const { today: now, others } = splitByDay(findNests(nests, words), today);
   return (
     <>
-      {nests.length >= SEARCH_FROM && <NestSearch words={words} onChange={setWords} />}
+      {nests.length >= SEARCH_FROM && (
+        <TextLine
+          id="find-nest"
+          type="search"
+          label="Find a nest"
+          hint="By code or name."
+          value={words}
+          onChange={setWords}
+          maxLength={200}
+        />
+      )}
       {now.length > 0 && (
         <Part title="Today">
           <Cards nests={now} today={today} />
@@ -72,9 +65,14 @@ function NestGroups({ nests }: { nests: readonly NestSummary[] }): ReactElement 
 function Home({ nests }: { nests: readonly NestSummary[] }): ReactElement {
   return (
     <Screen title="Today’s nests" wide>
-      <LinkButton tone="main" size="field" href={fieldHref({ kind: 'new-nest' })} className="w-full text-xl md:max-w-[40rem]">
+      <FieldLink
+        tone="main"
+
+        href={fieldHref({ kind: 'new-nest' })}
+        className="w-full text-xl md:max-w-[40rem]"
+      >
         Start a nest
-      </LinkButton>
+      </FieldLink>
       {nests.length === 0 ? (
         <EmptyState title="No nest on this phone yet">
           <p>Start one at the nest, with or without signal. Nests of your team come here when there is signal.</p>
@@ -83,9 +81,7 @@ function Home({ nests }: { nests: readonly NestSummary[] }): ReactElement {
         <NestGroups nests={nests} />
       )}
       <nav aria-label="More">
-        <LinkButton size="field" href={fieldHref({ kind: 'settings' })}>
-          Settings
-        </LinkButton>
+        <FieldLink href={fieldHref({ kind: 'settings' })}>Settings</FieldLink>
       </nav>
     </Screen>
   );

@@ -1,20 +1,17 @@
 'use client';
 
 import { type FormEvent, type ReactElement, useState } from 'react';
-import { Button } from '@/components/ui/button';
-import { Field } from '@/components/ui/field';
-import { Input } from '@/components/ui/input';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import { NotSavedNotice } from '@/components/field/parts/not-saved-notice';
 import { Screen } from '@/components/field/parts/screen';
+import { TextLine } from '@/components/field/parts/text-line';
 import { fieldHref } from '@/components/field/routing/field-route';
 import { goInstead } from '@/components/field/routing/use-field-path';
 import { keepStorage } from '@/components/field/settings/storage-space';
 import { useCommands } from '@/lib/offline/hooks/use-commands';
 import type { Place } from '@/lib/offline/nest-view';
 import { PlaceField } from './place-field';
-
-const WIDE_INPUT = 'min-h-field border-3 text-field';
 
 interface NestForm {
   code: string;
@@ -39,7 +36,12 @@ function useNewNest(form: NestForm) {
     if (!commands || state === 'saving') return;
     setState('saving');
     try {
-      const id = await commands.openNest({ code, name: textOrNull(form.name), taxon: textOrNull(form.taxon), place: form.place });
+      const id = await commands.openNest({
+        code,
+        name: textOrNull(form.name),
+        taxon: textOrNull(form.taxon),
+        place: form.place,
+      });
       void keepStorage();
       goInstead(fieldHref({ kind: 'nest', id }));
     } catch {
@@ -58,28 +60,37 @@ export function NewNestScreen(): ReactElement {
     <FieldFrame back={{ href: fieldHref({ kind: 'nests' }), to: 'the nests' }} help="nests">
       <Screen title="Start a nest">
         <form onSubmit={(event) => void start(event)} noValidate className="flex flex-col gap-6">
-          <Field
+          <TextLine
             id="nest-code"
             label="Code"
             hint="As on the label, such as N12."
+            value={form.code}
+            onChange={(code) => put({ code })}
+            maxLength={40}
             required
             error={state === 'no-code' ? 'A nest needs a code. Any short one will do.' : null}
-          >
-            {(control) => (
-              <Input {...control} value={form.code} onChange={(e) => put({ code: e.target.value })} maxLength={40} autoCapitalize="characters" autoComplete="off" className={WIDE_INPUT} />
-            )}
-          </Field>
-          <Field id="nest-name" label="Where it hangs" hint="Such as Bandstand roof. Can wait.">
-            {(control) => <Input {...control} value={form.name} onChange={(e) => put({ name: e.target.value })} maxLength={200} autoComplete="off" className={WIDE_INPUT} />}
-          </Field>
-          <Field id="nest-taxon" label="Taxon" hint="Scientific name, if you are sure of it. Can wait.">
-            {(control) => <Input {...control} value={form.taxon} onChange={(e) => put({ taxon: e.target.value })} maxLength={200} autoComplete="off" className={WIDE_INPUT} />}
-          </Field>
+          />
+          <TextLine
+            id="nest-name"
+            label="Where it hangs"
+            hint="Such as Bandstand roof. Can wait."
+            value={form.name}
+            onChange={(name) => put({ name })}
+            maxLength={200}
+          />
+          <TextLine
+            id="nest-taxon"
+            label="Taxon"
+            hint="Scientific name, if you are sure of it. Can wait."
+            value={form.taxon}
+            onChange={(taxon) => put({ taxon })}
+            maxLength={200}
+          />
           <PlaceField place={form.place} onChange={(place) => put({ place })} />
           {state === 'failed' && <NotSavedNotice what="the nest" />}
-          <Button type="submit" tone="main" size="field" className="text-xl">
+          <FieldButton type="submit" tone="main" className="text-xl">
             {state === 'saving' ? 'Saving …' : 'Start the nest'}
-          </Button>
+          </FieldButton>
         </form>
       </Screen>
     </FieldFrame>

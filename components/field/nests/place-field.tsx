@@ -1,7 +1,7 @@
 'use client';
 
 import { type ReactElement, useState } from 'react';
-import { Button } from '@/components/ui/button';
+import { FieldButton } from '@/components/field/parts/field-button';
 import type { Place } from '@/lib/offline/nest-view';
 
 interface PlaceFieldProps {
@@ -53,13 +53,13 @@ export function PlaceField({ place, onChange }: PlaceFieldProps): ReactElement {
         {state === 'idle' && (place ? placeWords(place) : 'Can wait. Stand near the nest.')}
       </p>
       <div className="flex flex-wrap gap-gap">
-        <Button size="field" onClick={() => void look()} disabled={state === 'looking'}>
+        <FieldButton onClick={() => void look()} disabled={state === 'looking'}>
           {place ? 'Take the place again' : 'Take the place from this phone'}
-        </Button>
+        </FieldButton>
         {place && (
-          <Button size="field" tone="quiet" onClick={() => onChange(null)}>
+          <FieldButton tone="quiet" onClick={() => onChange(null)}>
             No place
-          </Button>
+          </FieldButton>
         )}
       </div>
     </div>

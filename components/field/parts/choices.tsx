@@ -25,7 +25,7 @@ export function Choices<T extends string>({ legend, choices, value, onChange }: 
       {choices.map((choice) => (
         <label
           key={choice.value}
-          className="flex min-h-field items-center gap-4 rounded-lg border-3 border-edge px-4 py-2 has-checked:border-main has-checked:bg-main-wash has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-main"
+          className="flex min-h-field items-center gap-4 rounded-xl border-3 border-edge px-4 py-2 has-checked:border-main has-checked:bg-main-wash has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-main"
         >
           <input
             type="radio"

@@ -1,9 +1,9 @@
 'use client';
 
 import { type ReactElement, useId } from 'react';
-import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Input } from '@/components/ui/input';
+import { FieldButton } from './field-button';
 import { readCount } from './read-count';
 
 interface CountFieldProps {
@@ -19,9 +19,9 @@ export function CountField({ value, onChange }: CountFieldProps): ReactElement {
     <Field id={id} label="How many cells do you count?" hint="Can stay blank. The walk ends at this number.">
       {(control) => (
         <div className="flex gap-gap">
-          <Button size="field" aria-label="One less" onClick={() => step(-1)} className="min-w-field text-2xl">
+          <FieldButton aria-label="One less" onClick={() => step(-1)} className="min-w-field text-2xl">
             −
-          </Button>
+          </FieldButton>
           <Input
             {...control}
             inputMode="numeric"
@@ -31,9 +31,9 @@ export function CountField({ value, onChange }: CountFieldProps): ReactElement {
             onChange={(event) => onChange(readCount(event.target.value))}
             className="min-h-field border-3 text-center text-number font-bold"
           />
-          <Button size="field" aria-label="One more" onClick={() => step(1)} className="min-w-field text-2xl">
+          <FieldButton aria-label="One more" onClick={() => step(1)} className="min-w-field text-2xl">
             +
-          </Button>
+          </FieldButton>
         </div>
       )}
     </Field>

@@ -1,5 +1,5 @@
 import type { ReactElement, ReactNode } from 'react';
-import { LinkButton } from '@/components/ui/link-button';
+import { FieldLink } from './field-button';
 import { FIELD_ROOT } from '@/components/field/routing/field-route';
 import { Screen } from './screen';
 
@@ -13,9 +13,9 @@ export function NotHere({ title, children }: NotHereProps): ReactElement {
   return (
     <Screen title={title}>
       <div>{children}</div>
-      <LinkButton tone="main" size="field" href={FIELD_ROOT}>
+      <FieldLink tone="main" href={FIELD_ROOT}>
         To the nests
-      </LinkButton>
+      </FieldLink>
     </Screen>
   );
 }

@@ -5,7 +5,10 @@ import { Notice } from '@/components/ui/notice';
 export function NotSavedNotice({ what }: { what: string }): ReactElement {
   return (
     <Notice tone="stop" live="assertive" title={`Not saved: ${what}`}>
-      <p>The phone could not keep it. What you entered is still here: try again. If it fails again, make room on the phone.</p>
+      <p>
+        The phone could not keep it. What you entered is still here: try again. If it fails again, make room on the
+        phone.
+      </p>
     </Notice>
   );
 }

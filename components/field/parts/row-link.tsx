@@ -11,7 +11,7 @@ export function RowLink({ href, title, children }: RowLinkProps): ReactElement {
   return (
     <a
       href={href}
-      className="flex min-h-field items-center justify-between gap-4 rounded-lg border-3 border-ink bg-paper px-4 py-3 text-ink no-underline hover:bg-wash"
+      className="flex min-h-field items-center justify-between gap-4 rounded-xl border-3 border-ink bg-paper px-4 py-3 text-ink no-underline hover:bg-wash"
     >
       <span className="min-w-0 [overflow-wrap:anywhere]">
         <span className="block font-bold">{title}</span>

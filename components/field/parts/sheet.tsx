@@ -34,7 +34,7 @@ export function Sheet({ open, title, onClose, children }: SheetProps): ReactElem
         <button
           type="button"
           onClick={onClose}
-          className="min-h-field min-w-field shrink-0 rounded-lg border-3 border-ink px-4 font-bold"
+          className="min-h-field min-w-field shrink-0 rounded-xl border-3 border-ink px-4 font-bold"
         >
           Close
         </button>

@@ -1,8 +1,7 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { Button } from '@/components/ui/button';
-import { LinkButton } from '@/components/ui/link-button';
+import { FieldButton, FieldLink } from '@/components/field/parts/field-button';
 import { BroodPreview } from '@/components/field/brood/brood-preview';
 import { nestTitle } from '@/components/field/nests/nest-lists';
 import { Fetching } from '@/components/field/parts/fetching';
@@ -26,7 +25,13 @@ interface ReadOnlyProps {
   onCorrect: (() => void) | null;
 }
 
-function ReadOnlyBody({ reading, onCorrect }: { reading: ReadingView; onCorrect: ReadOnlyProps['onCorrect'] }): ReactElement {
+function ReadOnlyBody({
+  reading,
+  onCorrect,
+}: {
+  reading: ReadingView;
+  onCorrect: ReadOnlyProps['onCorrect'];
+}): ReactElement {
   const person = usePerson();
   const nest = useNest(reading.nest);
   const today = useToday(person.zone);
@@ -35,21 +40,19 @@ function ReadOnlyBody({ reading, onCorrect }: { reading: ReadingView; onCorrect:
       title={readingTitle(reading, memberName(person, reading.observer))}
       under={`${nest ? `${nestTitle(nest)} · ` : ''}${writtenTime(reading.openedAt, today)} · ${readingState(reading)}`}
     >
-      <LinkButton tone="main" size="field" href={fieldHref({ kind: 'visit', id: reading.visit })}>
+      <FieldLink tone="main" href={fieldHref({ kind: 'visit', id: reading.visit })}>
         To the visit
-      </LinkButton>
+      </FieldLink>
       <Part title="The comb">
         <ReadingMap reading={reading} />
-        {!reading.mine && !reading.blind && <p className="text-quiet">You can look at this reading. Only its reader can change it.</p>}
+        {!reading.mine && !reading.blind && (
+          <p className="text-quiet">You can look at this reading. Only its reader can change it.</p>
+        )}
       </Part>
       {!reading.blind && (
         <BroodPreview nest={reading.nest} reading={reading.id} taxon={nest?.taxon ?? null} marks={reading.marks} />
       )}
-      {onCorrect && (
-        <Button size="field" onClick={onCorrect}>
-          Correct a cell
-        </Button>
-      )}
+      {onCorrect && <FieldButton onClick={onCorrect}>Correct a cell</FieldButton>}
       <ReadingHistory reading={reading} today={today} />
     </Screen>
   );

@@ -1,8 +1,7 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { cellLine, cellTitle } from '@/components/field/words/cell-words';
-import { progressWords } from '@/components/field/words/reading-words';
+import { cellLine, cellTitle, earlierLine } from '@/components/field/words/cell-words';
 import { type Desk, stepTo } from './desk';
 
 /** The walk's keys for one cell back and forward. */
@@ -31,31 +30,33 @@ function StepKey({ desk, way }: StepKeyProps): ReactElement {
   );
 }
 
-/** The current cell in large, how far the walk is, and the keys for one cell back and forward. */
-export function CellLine({ desk }: { desk: Desk }): ReactElement {
-  const { view } = desk.recorder;
+/** How far the walk is, drawn: it grows by one piece a cell. Bare when nobody counted the cells. */
+function WalkBar({ desk }: { desk: Desk }): ReactElement {
+  const { tally, expectedTotal } = desk.recorder.view;
+  const share = expectedTotal === null ? 0 : Math.min(1, tally.cellsTotal / expectedTotal);
   return (
-    <div className="flex items-center gap-3">
-      <StepKey desk={desk} way="back" />
-      <div className="min-w-0 flex-1 text-center leading-tight">
-        <p className="text-number font-bold">{cellTitle(view.current)}</p>
-        <p className="min-h-6 truncate">{view.current ? cellLine(view) : 'Press Finish, or a place on the comb.'}</p>
-      </div>
-      <StepKey desk={desk} way="forward" />
+    <div aria-hidden="true" className="h-2 bg-rule">
+      <div className="h-full bg-main" style={{ width: `${share * 100}%` }} />
     </div>
   );
 }
 
-/** A still bar that grows by one piece a cell. Shown only when the person counted the cells. */
-export function WalkProgress({ desk }: { desk: Desk }): ReactElement {
-  const { tally, expectedTotal } = desk.recorder.view;
-  const share = expectedTotal === null ? 0 : Math.min(1, tally.cellsTotal / expectedTotal);
+/** The current cell in large with the keys for one cell back and forward, and how far the walk is. */
+export function CellLine({ desk }: { desk: Desk }): ReactElement {
+  const { view } = desk.recorder;
+  const earlier = earlierLine(view);
   return (
-    <div className="flex items-center gap-3">
-      <div aria-hidden="true" className="h-2.5 flex-1 bg-rule">
-        <div className="h-full bg-main" style={{ width: `${share * 100}%` }} />
+    <div className="flex flex-col gap-2">
+      <div className="flex items-center gap-3">
+        <StepKey desk={desk} way="back" />
+        <div className="min-w-0 flex-1 text-center leading-tight">
+          <p className="text-number font-bold">{cellTitle(view.current)}</p>
+          <p className="truncate">{cellLine(view)}</p>
+          {earlier !== null && <p className="truncate text-quiet">{earlier}</p>}
+        </div>
+        <StepKey desk={desk} way="forward" />
       </div>
-      <p className="font-bold tabular-nums">{progressWords(tally.cellsTotal, expectedTotal)}</p>
+      <WalkBar desk={desk} />
     </div>
   );
 }

@@ -1,7 +1,7 @@
 import type { ReactElement } from 'react';
-import { Button } from '@/components/ui/button';
 import { countWords, runWords } from '@/components/ui/date-words';
 import { Notice } from '@/components/ui/notice';
+import { FieldButton } from '@/components/field/parts/field-button';
 import type { Axial } from '@/lib/comb/axial';
 import { cellNumber } from '@/lib/comb/walk';
 import type { RecorderView } from '@/lib/offline/recorder-view';
@@ -24,9 +24,9 @@ function OpenCells({ words, cells, onGoTo }: OpenCellsProps): ReactElement | nul
   return (
     <Notice tone="warn" title={words}>
       <p>{`${cells.length === 1 ? 'Cell' : 'Cells'} ${runWords(cells.map(cellNumber))}.`}</p>
-      <Button size="field" className="mt-2" onClick={() => onGoTo(first)}>
+      <FieldButton className="mt-2" onClick={() => onGoTo(first)}>
         Go to cell {cellNumber(first)}
-      </Button>
+      </FieldButton>
     </Notice>
   );
 }

@@ -4,7 +4,7 @@ import { type ReactElement, useState } from 'react';
 import { CombPicture } from '@/components/comb/comb-picture';
 import { tallyWords } from '@/components/comb/comb-view';
 import { TallyLine } from '@/components/comb/tally-line';
-import { Button } from '@/components/ui/button';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { BroodPreview } from '@/components/field/brood/brood-preview';
 import { NotSavedNotice } from '@/components/field/parts/not-saved-notice';
 import { Part } from '@/components/field/parts/part';
@@ -53,20 +53,26 @@ export function FinishSummary({ desk, label, onBack }: FinishSummaryProps): Reac
       <NotSavedAlert recorder={recorder} />
       <Part title="What you read">
         <TallyLine tally={view.tally} />
-        {marks.length > 0 && <CombPicture cells={cellsOfMarks(marks)} label={`Comb: ${tallyWords(view.tally).join(', ')}`} cellSize={46} />}
+        {marks.length > 0 && (
+          <CombPicture cells={cellsOfMarks(marks)} label={`Comb: ${tallyWords(view.tally).join(', ')}`} cellSize={46} />
+        )}
       </Part>
       <FinishChecks view={view} onGoTo={goTo} />
       <BroodPreview nest={view.nest} reading={view.reading} taxon={label.taxon} marks={marks} />
       {state === 'failed' && <NotSavedNotice what="that the reading is finished" />}
       <div className="flex flex-col gap-gap">
         {!view.submitted && (
-          <Button tone="main" size="field" className="text-xl" disabled={marks.length === 0} onClick={() => void press()}>
+          <FieldButton
+            tone="main"
+
+            className="text-xl"
+            disabled={marks.length === 0}
+            onClick={() => void press()}
+          >
             {state === 'saving' ? 'Saving …' : 'Submit reading'}
-          </Button>
+          </FieldButton>
         )}
-        <Button size="field" onClick={onBack}>
-          Back to the cells
-        </Button>
+        <FieldButton onClick={onBack}>Back to the cells</FieldButton>
       </div>
       <p className="text-quiet">After that, your marks can still be corrected; each correction is shown as later.</p>
     </Screen>

@@ -1,9 +1,9 @@
 'use client';
 
 import { type ReactElement, useState } from 'react';
-import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { TextArea } from '@/components/ui/input';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { Sheet } from '@/components/field/parts/sheet';
 import { cellTitle } from '@/components/field/words/cell-words';
 import type { CellState } from '@/lib/comb/states';
@@ -26,7 +26,11 @@ function NoteField({ desk }: { desk: Desk }): ReactElement {
   const [text, setText] = useState(mark?.note ?? detail.note ?? '');
   const note = text.trim() || null;
   return (
-    <Field id="cell-note" label="Note" hint={mark ? undefined : 'It is saved with the state you press next for this cell.'}>
+    <Field
+      id="cell-note"
+      label="Note"
+      hint={mark ? undefined : 'It is saved with the state you press next for this cell.'}
+    >
       {(control) => (
         <>
           <TextArea
@@ -40,9 +44,9 @@ function NoteField({ desk }: { desk: Desk }): ReactElement {
             className="border-3 text-field"
           />
           {mark && note !== mark.note && (
-            <Button size="field" tone="main" onClick={() => putDetail(desk.recorder, { note })}>
+            <FieldButton tone="main" onClick={() => putDetail(desk.recorder, { note })}>
               Save the note
-            </Button>
+            </FieldButton>
           )}
         </>
       )}
@@ -58,10 +62,15 @@ function FurtherBody({ desk, onClose }: Omit<FurtherSheetProps, 'open'>): ReactE
     chooseState(desk, state);
     onClose();
   };
-  const putInstar = (instar: number | null): void => (mark ? putDetail(recorder, { instar }) : setDetail({ ...detail, instar }));
+  const putInstar = (instar: number | null): void =>
+    mark ? putDetail(recorder, { instar }) : setDetail({ ...detail, instar });
   return (
     <div className="flex flex-col gap-6">
-      <FurtherKeys chosen={mode.kind === 'paint' ? mode.state : (mark?.state ?? null)} onPress={press} />
+      <FurtherKeys
+        tally={recorder.view.tally}
+        chosen={mode.kind === 'paint' ? mode.state : (mark?.state ?? null)}
+        onPress={press}
+      />
       <div className="grid grid-cols-2 gap-gap">
         <ToggleKey pressed={toggles.reused} onPress={() => flipToggle(recorder, 'reused')}>
           Reused
@@ -78,7 +87,8 @@ function FurtherBody({ desk, onClose }: Omit<FurtherSheetProps, 'open'>): ReactE
 
 /** What is seldom needed for a cell: the other six states, two marks, the instar and a note. */
 export function FurtherSheet({ desk, open, onClose }: FurtherSheetProps): ReactElement {
-  const title = desk.mode.kind === 'paint' ? 'More to paint' : `More for ${cellTitle(desk.recorder.view.current).toLowerCase()}`;
+  const title =
+    desk.mode.kind === 'paint' ? 'More to paint' : `More for ${cellTitle(desk.recorder.view.current).toLowerCase()}`;
   return (
     <Sheet open={open} title={title} onClose={onClose}>
       <FurtherBody desk={desk} onClose={onClose} />

@@ -1,7 +1,7 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { Button } from '@/components/ui/button';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { CopyUnsentKey } from '@/components/field/unsent/copy-unsent-key';
 import { unsavedReason, unsavedWords } from '@/components/field/words/cell-words';
 import type { Recorder } from '@/lib/offline/recorder-view';
@@ -20,12 +20,12 @@ export function NotSavedAlert({ recorder }: { recorder: Recorder }): ReactElemen
           </span>
         ))}
       </h2>
-      <p className="mt-1">{unsavedReason(first)} Keep this page open: what is not saved is held here only.</p>
+      <p className="mt-1 leading-snug">{unsavedReason(first)} Until then, keep this page open.</p>
       <div className="mt-3 flex flex-wrap gap-gap">
-        <Button tone="main" size="field" onClick={() => recorder.retryUnsaved()}>
+        <FieldButton tone="main" onClick={() => recorder.retryUnsaved()}>
           Try again
-        </Button>
-        <CopyUnsentKey />
+        </FieldButton>
+        <CopyUnsentKey>Make a copy</CopyUnsentKey>
       </div>
     </section>
   );

@@ -22,7 +22,7 @@ export function PaintLine({ desk, mode }: PaintLineProps): ReactElement {
       <button
         type="button"
         onClick={() => desk.setMode({ kind: 'walk' })}
-        className="min-h-field shrink-0 touch-manipulation rounded-lg border-3 border-main-on px-3 font-bold"
+        className="min-h-field shrink-0 touch-manipulation rounded-xl border-3 border-main-on px-3 font-bold"
       >
         Stop painting
       </button>

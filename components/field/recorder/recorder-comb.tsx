@@ -5,6 +5,7 @@ import { CombDiagram } from '@/components/comb/comb-diagram';
 import type { Axial } from '@/lib/comb/axial';
 import { combPart } from './comb-part';
 import { type Desk, pressPlace } from './desk';
+import { NotSavedAlert } from './not-saved-alert';
 import { useFollowedWindow } from './use-followed-window';
 
 interface RecorderCombProps {
@@ -20,7 +21,7 @@ interface RecorderCombProps {
 /** The labels of the frame lie over the corners of the picture: on a phone every row of pixels is a row of cells. */
 const LABELS =
   'h-full [&>.comb-label]:absolute [&>.comb-label]:z-1 [&>.comb-label]:bg-paper/85 [&>.comb-label]:px-1 ' +
-  '[&>.comb-label:first-child]:top-0 [&>.comb-label:first-child]:left-1/2 [&>.comb-label:first-child]:-translate-x-1/2 ' +
+  '[&>.comb-label:first-child]:top-0 [&>.comb-label:first-child]:left-0 ' +
   '[&>.comb-label:last-child]:bottom-0 [&>.comb-label:last-child]:left-0';
 
 /** From this many cells on, the whole comb on a phone is too small for the corner marks. */
@@ -50,6 +51,9 @@ export function RecorderComb({ desk, title, whole, looking, onPress }: RecorderC
           sizing="fill"
           className={LABELS}
         />
+      </div>
+      <div className="absolute inset-x-0 top-1 z-2 max-h-full overflow-y-auto">
+        <NotSavedAlert recorder={desk.recorder} />
       </div>
     </div>
   );

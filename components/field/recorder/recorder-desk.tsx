@@ -4,15 +4,14 @@ import { type ReactElement, useState } from 'react';
 import { MarkGlyph } from '@/components/comb/cell-glyph';
 import type { Axial } from '@/lib/comb/axial';
 import { spokenWords } from '@/components/field/words/spoken-words';
-import { CellLine, WalkProgress } from './cell-line';
+import { CellLine } from './cell-line';
 import { chooseState, type Desk } from './desk';
 import { FurtherSheet } from './further-sheet';
-import { NotSavedAlert } from './not-saved-alert';
 import { PaintLine } from './paint-line';
 import { RecorderComb } from './recorder-comb';
 import { currentMark, flipToggle, shownToggles } from './recorder-acts';
 import { EverydayKeys } from './stage-keys';
-import { TallyChips } from './tally-chips';
+import { TallyHead } from './tally-head';
 import { ToggleKey } from './toggle-key';
 import { ToolsSheet } from './tools-sheet';
 import { UndoRow } from './undo-row';
@@ -25,7 +24,15 @@ interface RecorderDeskProps {
 }
 
 /** A small key beside the tally; *Finish* stands out once nothing is left to read. */
-function SideKey({ main = false, onPress, children }: { main?: boolean; onPress: () => void; children: string }): ReactElement {
+function SideKey({
+  main = false,
+  onPress,
+  children,
+}: {
+  main?: boolean;
+  onPress: () => void;
+  children: string;
+}): ReactElement {
   return (
     <button
       type="button"
@@ -46,18 +53,26 @@ function KeyPad({ desk, onMore }: { desk: Desk; onMore: () => void }): ReactElem
   return (
     <div role="group" aria-label="Keys" className="grid grid-cols-3 gap-gap">
       <UndoRow desk={desk} />
-      <EverydayKeys chosen={chosen} onPress={(state) => chooseState(desk, state)} />
-      <ToggleKey pressed={toggles.nectar} sign={<MarkGlyph mark="nectar" size={26} />} onPress={() => flipToggle(recorder, 'nectar')}>
+      <EverydayKeys chosen={chosen} tally={recorder.view.tally} onPress={(state) => chooseState(desk, state)} />
+      <ToggleKey
+        pressed={toggles.nectar}
+        sign={<MarkGlyph mark="nectar" size={26} />}
+        onPress={() => flipToggle(recorder, 'nectar')}
+      >
         Nectar
       </ToggleKey>
-      <ToggleKey pressed={toggles.unsure} sign={<MarkGlyph mark="unsure" size={24} />} onPress={() => flipToggle(recorder, 'unsure')}>
+      <ToggleKey
+        pressed={toggles.unsure}
+        sign={<MarkGlyph mark="unsure" size={24} />}
+        onPress={() => flipToggle(recorder, 'unsure')}
+      >
         Unsure
       </ToggleKey>
       <button
         type="button"
         aria-haspopup="dialog"
         onClick={onMore}
-        className={`min-h-16 touch-manipulation rounded-xl border-3 border-ink font-bold select-none active:bg-main-wash ${more ? 'bg-main-wash' : 'bg-paper'}`}
+        className={`min-h-field touch-manipulation rounded-xl border-3 border-ink font-bold select-none active:bg-main-wash ${more ? 'bg-main-wash' : 'bg-paper'}`}
       >
         More
       </button>
@@ -83,17 +98,15 @@ export function RecorderDesk({ desk, title, onFinish }: RecorderDeskProps): Reac
         looking={desk.mode.kind === 'paint' ? tapped : view.current}
         onPress={setTapped}
       />
-      <div className="flex flex-col gap-3 lg:justify-center lg:gap-5">
-        <NotSavedAlert recorder={desk.recorder} />
+      <div className="flex flex-col gap-2 lg:justify-center lg:gap-5">
         <div className="flex min-h-field items-center gap-3">
-          <TallyChips tally={view.tally} />
+          <TallyHead tally={view.tally} />
           <SideKey onPress={() => setSheet('tools')}>Tools</SideKey>
           <SideKey main={view.current === null} onPress={onFinish}>
             Finish
           </SideKey>
         </div>
         {desk.mode.kind === 'paint' ? <PaintLine desk={desk} mode={desk.mode} /> : <CellLine desk={desk} />}
-        <WalkProgress desk={desk} />
         <KeyPad desk={desk} onMore={() => setSheet('more')} />
       </div>
       <p role="status" aria-label="Last mark" className="sr-only">

@@ -17,7 +17,7 @@ export function ToggleKey({ pressed, onPress, sign, children }: ToggleKeyProps):
       type="button"
       aria-pressed={pressed}
       onClick={onPress}
-      className="flex min-h-16 min-w-0 touch-manipulation items-center justify-center gap-1 rounded-xl border-3 border-dashed border-ink bg-paper px-1 font-bold select-none active:bg-main-wash aria-pressed:border-solid aria-pressed:bg-ink aria-pressed:text-paper"
+      className="flex min-h-field min-w-0 touch-manipulation items-center justify-center gap-1 rounded-xl border-3 border-dashed border-ink bg-paper px-1 font-bold select-none active:bg-main-wash aria-pressed:border-solid aria-pressed:bg-ink aria-pressed:text-paper"
     >
       {pressed ? <span aria-hidden="true">✓</span> : sign}
       {children}

@@ -1,7 +1,7 @@
 'use client';
 
 import { type ReactElement, useState } from 'react';
-import { Button } from '@/components/ui/button';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { CountField } from '@/components/field/parts/count-field';
 import { Sheet } from '@/components/field/parts/sheet';
 import type { Desk } from './desk';
@@ -24,9 +24,7 @@ function CountTool({ desk, onClose }: Pick<ToolsSheetProps, 'desk' | 'onClose'>)
   return (
     <div className="flex flex-col gap-gap">
       <CountField value={counted} onChange={setCounted} />
-      <Button size="field" onClick={keep}>
-        Use this number
-      </Button>
+      <FieldButton onClick={keep}>Use this number</FieldButton>
     </div>
   );
 }
@@ -46,12 +44,8 @@ export function ToolsSheet({ desk, open, onClose, whole, onWhole }: ToolsSheetPr
     <Sheet open={open} title="Tools" onClose={onClose}>
       <div className="flex flex-col gap-6">
         <div className="grid gap-gap sm:grid-cols-2">
-          <Button size="field" onClick={paint}>
-            {painting ? 'Stop painting' : 'Paint cells'}
-          </Button>
-          <Button size="field" onClick={look}>
-            {whole ? 'Show the cells close by' : 'Show the whole comb'}
-          </Button>
+          <FieldButton onClick={paint}>{painting ? 'Stop painting' : 'Paint cells'}</FieldButton>
+          <FieldButton onClick={look}>{whole ? 'Show the cells close by' : 'Show the whole comb'}</FieldButton>
         </div>
         <CountTool desk={desk} onClose={onClose} />
       </div>

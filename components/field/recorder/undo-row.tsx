@@ -10,7 +10,7 @@ export function UndoRow({ desk }: { desk: Desk }): ReactElement {
   const noCell = mode.kind === 'walk' && mayBeNoCell(recorder.view);
   return (
     <>
-      <div className="col-span-2 flex min-h-16 items-stretch overflow-hidden rounded-xl border-3 border-ink">
+      <div className="col-span-2 flex min-h-field items-stretch overflow-hidden rounded-xl border-3 border-ink">
         <p id="undo-words" className="flex min-w-0 flex-1 items-center px-3 leading-tight">
           {undoWords ?? 'Nothing to undo'}
         </p>
@@ -28,7 +28,7 @@ export function UndoRow({ desk }: { desk: Desk }): ReactElement {
         type="button"
         aria-disabled={!noCell}
         onClick={() => noCell && recorder.skip()}
-        className="min-h-16 min-w-0 touch-manipulation rounded-xl border-3 border-ink bg-paper px-2 leading-tight font-bold select-none active:bg-main-wash aria-disabled:border-rule aria-disabled:text-quiet"
+        className="min-h-field min-w-0 touch-manipulation rounded-xl border-3 border-ink bg-paper px-2 leading-tight font-bold select-none active:bg-main-wash aria-disabled:border-rule aria-disabled:text-quiet"
       >
         No cell here
       </button>

@@ -8,18 +8,11 @@ import { usePerson } from '@/components/field/parts/person-context';
 import { Screen } from '@/components/field/parts/screen';
 import { canKeepAwake } from '@/components/field/recorder/use-wake-lock';
 import { fieldHref } from '@/components/field/routing/field-route';
+import { ROLE_WORDS } from '@/components/shell/role-words';
 import { useSession } from '@/lib/offline/hooks/use-session';
 import type { Person, SessionView } from '@/lib/offline/session-view';
 import { SignOutPart } from './sign-out-part';
 import { StoragePart } from './storage-part';
-
-const ROLE_WORDS: Readonly<Record<Person['role'], string>> = {
-  technician: 'technician',
-  reviewer: 'reviewer',
-  biologist: 'lead biologist',
-  coordinator: 'coordinator',
-  researcher: 'researcher',
-};
 
 /** Whether the office knows this phone. */
 function phoneWords(view: SessionView): string {

@@ -1,9 +1,9 @@
 'use client';
 
 import { type ReactElement, useState } from 'react';
-import { Button } from '@/components/ui/button';
 import { countWords } from '@/components/ui/date-words';
 import { Notice } from '@/components/ui/notice';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { Part } from '@/components/field/parts/part';
 import { CopyUnsentKey } from '@/components/field/unsent/copy-unsent-key';
 import { type Outbox, useOutbox } from '@/lib/offline/hooks/use-outbox';
@@ -19,13 +19,15 @@ function NotYet({ outbox }: { outbox: Outbox }): ReactElement {
   return (
     <>
       <Notice tone="warn" title={`Not yet: ${countWords(openItems(outbox), 'item')} unsent`}>
-        <p>Send first. Signing out now could leave this work behind on the phone, where the next person cannot send it.</p>
+        <p>
+          Send first. Signing out now could leave this work behind on the phone, where the next person cannot send it.
+        </p>
       </Notice>
       <div className="flex flex-wrap items-start gap-gap">
-        <Button tone="main" size="field" onClick={outbox.sendNow} disabled={outbox.busy}>
+        <FieldButton tone="main" onClick={outbox.sendNow} disabled={outbox.busy}>
           {outbox.busy ? 'Sending …' : 'Send now'}
-        </Button>
-        <CopyUnsentKey />
+        </FieldButton>
+        <CopyUnsentKey>Copy of everything unsent</CopyUnsentKey>
       </div>
     </>
   );
@@ -50,9 +52,9 @@ function SignOutKey(): ReactElement {
           <p>The office did not answer. Try again where there is signal.</p>
         </Notice>
       )}
-      <Button size="field" tone="stop" onClick={() => void leave()} disabled={state === 'leaving'}>
+      <FieldButton tone="stop" onClick={() => void leave()} disabled={state === 'leaving'}>
         {state === 'leaving' ? 'Signing out …' : 'Sign out'}
-      </Button>
+      </FieldButton>
     </>
   );
 }

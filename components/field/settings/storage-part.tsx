@@ -1,14 +1,15 @@
 'use client';
 
 import { type ReactElement, useEffect, useState } from 'react';
-import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { Part } from '@/components/field/parts/part';
 import { keepStorage, readStorage, type StorageSpace, spaceWords } from './storage-space';
 
 /** What the browser has promised about our records. */
 function keptWords(kept: boolean | null): string {
-  if (kept === null) return 'This browser does not say whether it may clear records by itself. Install the app to be surer.';
+  if (kept === null)
+    return 'This browser does not say whether it may clear records by itself. Install the app to be surer.';
   return kept
     ? 'The browser keeps the records on this phone until you remove them.'
     : 'The browser may clear the records when the phone runs short of room. Ask it to keep them, or install the app.';
@@ -32,11 +33,7 @@ export function StoragePart({ cleared }: { cleared: boolean }): ReactElement {
         </Notice>
       )}
       <p role="status">{space ? `${keptWords(space.kept)} ${spaceWords(space.left)}` : 'Asking the browser …'}</p>
-      {space?.kept === false && (
-        <Button size="field" onClick={() => void ask()}>
-          Ask to keep the records
-        </Button>
-      )}
+      {space?.kept === false && <FieldButton onClick={() => void ask()}>Ask to keep the records</FieldButton>}
     </Part>
   );
 }

@@ -1,14 +1,14 @@
 'use client';
 
 import { type ReactElement, useState } from 'react';
-import { Button } from '@/components/ui/button';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { saveFile } from '@/components/field/parts/save-file';
 import { usePerson } from '@/components/field/parts/person-context';
 import { useToday } from '@/components/field/words/use-today';
 import { useOutbox } from '@/lib/offline/hooks/use-outbox';
 
 /** Makes a file of everything that is not at the office, to hand over by cable or message. Nothing is removed. */
-export function CopyUnsentKey(): ReactElement {
+export function CopyUnsentKey({ children }: { children: string }): ReactElement {
   const outbox = useOutbox();
   const today = useToday(usePerson().zone);
   const [state, setState] = useState<'ready' | 'made' | 'failed'>('ready');
@@ -23,9 +23,7 @@ export function CopyUnsentKey(): ReactElement {
   };
   return (
     <div className="flex flex-col gap-1">
-      <Button size="field" onClick={() => void copy()}>
-        Copy of everything unsent
-      </Button>
+      <FieldButton onClick={() => void copy()}>{children}</FieldButton>
       <p role="status">
         {state === 'made' && 'The copy is among this phone’s downloads. Nothing was removed here.'}
         {state === 'failed' && 'No copy could be made. Try again.'}

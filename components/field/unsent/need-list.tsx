@@ -1,7 +1,7 @@
 import type { ReactElement } from 'react';
 import { countWords } from '@/components/ui/date-words';
-import { LinkButton } from '@/components/ui/link-button';
 import { Notice } from '@/components/ui/notice';
+import { FieldLink } from '@/components/field/parts/field-button';
 import { SIGN_IN_HREF } from '@/components/field/frame/sign-in-again';
 import type { Need } from '@/lib/offline/sync-status';
 
@@ -9,19 +9,44 @@ import type { Need } from '@/lib/offline/sync-status';
 function needWords(need: Need): { title: string; todo: string } {
   switch (need.what) {
     case 'sign-in':
-      return { title: 'Sign in again', todo: 'The office wants to know who sends. Everything is kept on this phone until then.' };
+      return {
+        title: 'Sign in again',
+        todo: 'The office wants to know who sends. Everything is kept on this phone until then.',
+      };
     case 'revoked':
-      return { title: 'This phone was withdrawn', todo: 'It may not send any more. Make a copy below and ask your coordinator.' };
+      return {
+        title: 'This phone was withdrawn',
+        todo: 'It may not send any more. Make a copy below and ask your coordinator.',
+      };
     case 'role':
       return { title: 'Your role may not send', todo: 'Ask your coordinator. Everything stays on this phone.' };
     case 'update':
-      return { title: 'This app is too old', todo: 'Close it and open it again where there is signal. Unsent work is kept.' };
+      return {
+        title: 'This app is too old',
+        todo: 'Close it and open it again where there is signal. Unsent work is kept.',
+      };
+    case 'cleared':
+      return {
+        title: 'The browser has cleared this phone’s storage',
+        todo: 'Load the app again where there is signal. What had reached the office comes back.',
+      };
     case 'refused':
       return { title: `${countWords(need.count, 'item')} not accepted`, todo: 'See below what happened to each.' };
     case 'suspect':
-      return { title: `${countWords(need.count, 'item')} the office could not read`, todo: 'See below. They hold nothing else up.' };
+      return {
+        title: `${countWords(need.count, 'item')} the office could not read`,
+        todo: 'See below. They hold nothing else up.',
+      };
+    case 'set-aside':
+      return {
+        title: `${countWords(need.count, 'item')} set aside at the office`,
+        todo: 'See below what happened to each.',
+      };
     case 'not-saved':
-      return { title: `${countWords(need.count, 'press', 'presses')} not saved`, todo: 'Go back to the reading and try again, or make a copy now.' };
+      return {
+        title: `${countWords(need.count, 'press', 'presses')} not saved`,
+        todo: 'Go back to the reading and try again, or make a copy now.',
+      };
   }
 }
 
@@ -35,9 +60,9 @@ export function NeedList({ needs }: { needs: readonly Need[] }): ReactElement {
           <Notice key={need.what} tone="stop" title={title}>
             <p>{todo}</p>
             {need.what === 'sign-in' && (
-              <LinkButton tone="main" size="field" href={SIGN_IN_HREF} className="mt-2">
+              <FieldLink tone="main" href={SIGN_IN_HREF} className="mt-2">
                 Sign in again
-              </LinkButton>
+              </FieldLink>
             )}
           </Notice>
         );

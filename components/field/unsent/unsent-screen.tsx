@@ -1,10 +1,9 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { Button } from '@/components/ui/button';
 import { countWords } from '@/components/ui/date-words';
-import { LinkButton } from '@/components/ui/link-button';
 import { Notice } from '@/components/ui/notice';
+import { FieldButton, FieldLink } from '@/components/field/parts/field-button';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import { Fetching } from '@/components/field/parts/fetching';
 import { Part } from '@/components/field/parts/part';
@@ -29,14 +28,16 @@ function UnsentBody({ outbox }: { outbox: Outbox }): ReactElement {
     <Screen title={unsentTitle(outbox)} under={statusSentence(status)}>
       {outbox.unsaved > 0 && (
         <Notice tone="stop" live="assertive" title={`Not saved: ${countWords(outbox.unsaved, 'press', 'presses')}`}>
-          <p>The phone could not keep them. Keep this app open, go back to the reading and try again, or make a copy now.</p>
+          <p>
+            The phone could not keep them. Keep this app open, go back to the reading and try again, or make a copy now.
+          </p>
         </Notice>
       )}
       {status.kind === 'needs-you' && <NeedList needs={status.needs} />}
       <div className="flex flex-wrap gap-gap">
-        <Button tone="main" size="field" onClick={outbox.sendNow} disabled={outbox.busy} className="flex-1 text-xl">
+        <FieldButton tone="main" onClick={outbox.sendNow} disabled={outbox.busy} className="flex-1 text-xl">
           {outbox.busy ? 'Sending …' : 'Send now'}
-        </Button>
+        </FieldButton>
       </div>
       {outbox.attention.length > 0 && (
         <Part title="These need you">
@@ -50,12 +51,13 @@ function UnsentBody({ outbox }: { outbox: Outbox }): ReactElement {
         </Part>
       )}
       <Part title="A copy to hand over">
-        <p>One file with everything that is not at the office. It can be given over by cable or message and removes nothing here.</p>
-        <CopyUnsentKey />
+        <p>
+          One file with everything that is not at the office. It can be given over by cable or message and removes
+          nothing here.
+        </p>
+        <CopyUnsentKey>Copy of everything unsent</CopyUnsentKey>
       </Part>
-      <LinkButton size="field" href={fieldHref({ kind: 'settings' })}>
-        Settings
-      </LinkButton>
+      <FieldLink href={fieldHref({ kind: 'settings' })}>Settings</FieldLink>
     </Screen>
   );
 }

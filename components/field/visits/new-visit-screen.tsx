@@ -1,7 +1,7 @@
 'use client';
 
 import { type ReactElement, useState } from 'react';
-import { Button } from '@/components/ui/button';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { NearNestCard } from '@/components/field/cautions/near-nest-card';
 import { StingCard } from '@/components/field/cautions/sting-card';
 import { FieldFrame } from '@/components/field/frame/field-frame';
@@ -45,9 +45,9 @@ function NewVisit({ nest }: { nest: NestView }): ReactElement {
       <NearNestCard />
       <Choices legend="What is the visit for?" choices={PURPOSE_CHOICES} value={purpose} onChange={setPurpose} />
       {state === 'failed' && <NotSavedNotice what="the visit" />}
-      <Button tone="main" size="field" onClick={() => void start()} className="text-xl">
+      <FieldButton tone="main" onClick={() => void start()} className="text-xl">
         {state === 'saving' ? 'Saving …' : 'Start the visit'}
-      </Button>
+      </FieldButton>
       <StingCard />
     </Screen>
   );

@@ -37,7 +37,7 @@ export function ReadingCard({ reading, today }: ReadingCardProps): ReactElement 
     <li>
       <a
         href={fieldHref({ kind: 'reading', id: reading.id })}
-        className="flex min-h-key flex-col gap-1 rounded-lg border-3 border-ink bg-paper p-4 text-ink no-underline hover:bg-wash"
+        className="flex min-h-key flex-col gap-1 rounded-xl border-3 border-ink bg-paper p-4 text-ink no-underline hover:bg-wash"
       >
         <span className="font-bold">{title}</span>
         <span className="text-quiet">

@@ -1,7 +1,7 @@
 'use client';
 
 import { type ReactElement, useState } from 'react';
-import { Button } from '@/components/ui/button';
+import { FieldButton } from '@/components/field/parts/field-button';
 import { ComeDownCard } from '@/components/field/cautions/near-nest-card';
 import { Choices } from '@/components/field/parts/choices';
 import { CountField } from '@/components/field/parts/count-field';
@@ -54,9 +54,9 @@ export function StartReading({ visit, open, onClose }: StartReadingProps): React
         <Choices legend="What do you read from?" choices={SOURCE_CHOICES} value={source} onChange={setSource} />
         <CountField value={counted} onChange={setCounted} />
         {state === 'failed' && <NotSavedNotice what="the reading" />}
-        <Button tone="main" size="field" onClick={() => void start(source, counted)} className="text-xl">
+        <FieldButton tone="main" onClick={() => void start(source, counted)} className="text-xl">
           {state === 'saving' ? 'Saving …' : 'Read the cells'}
-        </Button>
+        </FieldButton>
       </div>
     </Sheet>
   );

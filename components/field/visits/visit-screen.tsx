@@ -1,8 +1,7 @@
 'use client';
 
 import { type ReactElement, useState } from 'react';
-import { Button } from '@/components/ui/button';
-import { LinkButton } from '@/components/ui/link-button';
+import { FieldButton, FieldLink } from '@/components/field/parts/field-button';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import { nestTitle } from '@/components/field/nests/nest-lists';
 import { Fetching } from '@/components/field/parts/fetching';
@@ -28,14 +27,14 @@ function ReadingKey({ visit }: { visit: VisitView }): ReactElement {
   return (
     <>
       {open && (
-        <LinkButton tone="main" size="field" href={fieldHref({ kind: 'reading', id: open.id })} className="text-xl">
+        <FieldLink tone="main" href={fieldHref({ kind: 'reading', id: open.id })} className="text-xl">
           Go on reading
-        </LinkButton>
+        </FieldLink>
       )}
       {!open && (
-        <Button tone={hasOwn ? 'plain' : 'main'} size="field" onClick={() => setStarting(true)} className="text-xl">
+        <FieldButton tone={hasOwn ? 'plain' : 'main'} onClick={() => setStarting(true)} className="text-xl">
           Start reading
-        </Button>
+        </FieldButton>
       )}
       <StartReading visit={visit} open={starting} onClose={() => setStarting(false)} />
     </>

@@ -3,6 +3,7 @@ import type { Mark } from '@/lib/comb/mark';
 import { STATE_WORDS } from '@/lib/comb/states';
 import { cellNumber } from '@/lib/comb/walk';
 import type { RecorderView, UnsavedPress } from '@/lib/offline/recorder-view';
+import { progressWords } from './reading-words';
 
 const MARK_WORDS = [
   ['nectar', 'nectar'],
@@ -12,26 +13,36 @@ const MARK_WORDS = [
 ] as const;
 
 /** What a mark says: `egg, nectar, unsure`. */
-export function markWords(mark: Pick<Mark, 'state' | 'nectar' | 'unsure' | 'reused' | 'scrap' | 'instar' | 'note'>): string {
+export function markWords(
+  mark: Pick<Mark, 'state' | 'nectar' | 'unsure' | 'reused' | 'scrap' | 'instar' | 'note'>,
+): string {
   const marks = MARK_WORDS.filter(([name]) => mark[name]).map(([, word]) => word);
   const instar = mark.instar === null ? [] : [`instar ${mark.instar}`];
   const note = mark.note === null ? [] : ['note'];
   return [STATE_WORDS[mark.state], ...instar, ...marks, ...note].join(', ');
 }
 
-/** The line under the number of the current cell: its ring, then what it holds or held at the last visit. */
-export function cellLine({ current, marks, last }: Pick<RecorderView, 'current' | 'marks' | 'last'>): string {
-  if (!current) return '';
-  const key = cellKey(current);
-  const ring = `ring ${ringOf(current)}`;
-  const [mark, earlier] = [marks.get(key), last.get(key)];
-  if (mark) return `${ring} · ${markWords(mark)}`;
-  return earlier ? `${ring} · last time ${STATE_WORDS[earlier.state]}` : ring;
+/**
+ * The line under the number of the current cell: its ring, and what it holds if it bears a mark, else how far the walk
+ * is: `ring 2 · 14 of 33`.
+ */
+export function cellLine({ current, marks, tally, expectedTotal }: RecorderView): string {
+  const progress = progressWords(tally.cellsTotal, expectedTotal);
+  if (!current) return progress;
+  const mark = marks.get(cellKey(current));
+  return `ring ${ringOf(current)} · ${mark ? markWords(mark) : progress}`;
+}
+
+/** What the current cell held at the last visit; blank for a new cell, null when there was no earlier reading. */
+export function earlierLine({ current, last }: Pick<RecorderView, 'current' | 'last'>): string | null {
+  if (last.size === 0) return null;
+  const earlier = current && last.get(cellKey(current));
+  return earlier ? `last time ${STATE_WORDS[earlier.state]}` : '\u00a0';
 }
 
 /** What a cell is called: `Cell 14`. */
 export function cellTitle(current: RecorderView['current']): string {
-  return current ? `Cell ${cellNumber(current)}` : 'No cell left';
+  return current ? `Cell ${cellNumber(current)}` : 'All read';
 }
 
 /** A press that was not kept, as it is called out: `Cell 13: egg` → `cell 13, egg`. */

@@ -28,7 +28,11 @@ const SOURCE_WORDS: Readonly<Record<ReadingSummary['source'], string>> = {
 };
 
 /** How far one reading has come. */
-export function readingState({ submittedAt, standing, mine }: Pick<ReadingSummary, 'submittedAt' | 'standing' | 'mine'>): string {
+export function readingState({
+  submittedAt,
+  standing,
+  mine,
+}: Pick<ReadingSummary, 'submittedAt' | 'standing' | 'mine'>): string {
   if (standing === 'not-accepted') return 'not accepted by the office';
   if (submittedAt === null) return mine ? 'not handed in yet' : 'still being read';
   return standing === 'waiting' ? 'handed in, waiting to send' : 'handed in, at the office';

@@ -55,6 +55,9 @@ const GENERAL: Readonly<Record<Why, TroubleWords>> = {
 
 /** Plain words for an item that needs a person: what happened and what to do. Unknown codes get the general words. */
 export function troubleWords(why: Why, code: string | null): TroubleWords {
-  const known: Partial<Record<Why, Readonly<Record<string, TroubleWords>>>> = { refused: REFUSED, 'set-aside': SET_ASIDE };
+  const known: Partial<Record<Why, Readonly<Record<string, TroubleWords>>>> = {
+    refused: REFUSED,
+    'set-aside': SET_ASIDE,
+  };
   return (code !== null && known[why]?.[code]) || GENERAL[why];
 }

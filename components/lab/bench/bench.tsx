@@ -60,7 +60,7 @@ export function Bench({ nest, reading, label, cells, cellSize, lockedVersion }: 
   return (
     <div className="grid gap-8 lg:grid-cols-[minmax(0,30rem)_minmax(0,1fr)]">
       <div>
-        <div className="overflow-x-auto" onKeyDown={type}>
+        <div className="overflow-x-auto print:overflow-visible" onKeyDown={type}>
           <CombDiagram
             cells={withList(cells, corrections)}
             label={label}

@@ -14,7 +14,13 @@ interface CellsTableProps {
 }
 
 function markWords({ nectar, unsure, reused, scrap, instar }: MarkView): string {
-  const words = [nectar && 'nectar', unsure && 'unsure', reused && 'reused', scrap && 'prey scrap', instar !== null && `instar ${instar}`];
+  const words = [
+    nectar && 'nectar',
+    unsure && 'unsure',
+    reused && 'reused',
+    scrap && 'prey scrap',
+    instar !== null && `instar ${instar}`,
+  ];
   return words.filter(Boolean).join(', ');
 }
 
@@ -31,7 +37,7 @@ function StateCell({ state }: { state: string }): ReactElement {
 /** Every cell of a reading in walk order, in words: for reading through, and for those who do not see the comb. */
 export function CellsTable({ marks, zone, year }: CellsTableProps): ReactElement {
   return (
-    <Table caption="Cells in walk order" className="text-[0.9375rem]">
+    <Table scrolls caption="Cells in walk order" className="text-[0.9375rem]">
       <thead>
         <tr>
           <HeadCell className="text-right">Cell</HeadCell>
@@ -55,7 +61,9 @@ export function CellsTable({ marks, zone, year }: CellsTableProps): ReactElement
               {markWords(mark)}
               {mark.note !== null && <p className="whitespace-pre-line">{mark.note}</p>}
             </BodyCell>
-            <BodyCell className="whitespace-nowrap max-sm:hidden">{mark.at === null ? 'by a reviewer' : momentWords(mark.at, zone, year)}</BodyCell>
+            <BodyCell className="whitespace-nowrap max-sm:hidden">
+              {mark.at === null ? 'by a reviewer' : momentWords(mark.at, zone, year)}
+            </BodyCell>
           </tr>
         ))}
       </tbody>

@@ -3,8 +3,7 @@ import { stringMember } from '@/components/shell/string-member';
 /** What came of a change at the office. */
 export type ChangeResult =
   /** `reading` is the final reading the change went into. */
-  | { ok: true; reading: string }
-  | { ok: false; words: string };
+  { ok: true; reading: string } | { ok: false; words: string };
 
 const UNREACHABLE = 'The office cannot be reached. Nothing was stored; your list is still here.';
 const NOT_TAKEN = 'The office did not take it. Nothing was stored; your list is still here.';

@@ -29,7 +29,8 @@ export function CorrectionForm({ cell, listed, lettered, onAdd }: CorrectionForm
     event.preventDefault();
     const wrong = chosen === null ? 'Choose the new state first.' : reasonTrouble(reason);
     setTrouble(wrong);
-    if (wrong === null && chosen !== null) onAdd({ q: cell.q, r: cell.r, was: cell.state, state: chosen, reason: reason.trim() });
+    if (wrong === null && chosen !== null)
+      onAdd({ q: cell.q, r: cell.r, was: cell.state, state: chosen, reason: reason.trim() });
   };
   return (
     <form onSubmit={add} aria-label={`Settle cell ${cellNumber(cell)}`} className="flex flex-col gap-3">

@@ -15,7 +15,8 @@ interface CorrectionListProps {
 
 /** The decisions waiting to be stored, each with its way out. */
 export function CorrectionList({ corrections, isSending, onRemove, onSave }: CorrectionListProps): ReactElement {
-  if (corrections.length === 0) return <p className="text-quiet">Nothing in the list yet. The observer’s marks are never changed.</p>;
+  if (corrections.length === 0)
+    return <p className="text-quiet">Nothing in the list yet. The observer’s marks are never changed.</p>;
   return (
     <>
       <ol className="flex flex-col">

@@ -30,8 +30,8 @@ function LockQuestion({ nest, reading, unsaved }: Omit<LockActsProps, 'lockedVer
       {unsaved > 0 && <p className="mt-1 text-sm text-quiet">Settle the list or take it out before locking.</p>}
       <Dialog open={isOpen} onClose={() => setOpen(false)} title="Lock this reading?">
         <p>
-          Its version is then fixed and goes into letters and downloads. It can only be amended, with a reason; every version is
-          kept.
+          Its version is then fixed and goes into letters and downloads. It can only be amended, with a reason; every
+          version is kept.
         </p>
         {trouble && (
           <Notice tone="stop" live="assertive" className="mt-3">

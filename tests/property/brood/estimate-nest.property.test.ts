@@ -14,13 +14,22 @@ const RUNS = { numRuns: 25, seed: 2026 };
 
 /** One mark a cell along the spiral. */
 const marksArb = fc
-  .array(fc.record({ state: fc.constantFrom(...CELL_STATES), unsure: fc.boolean(), reused: fc.boolean() }), { minLength: 1, maxLength: 12 })
+  .array(fc.record({ state: fc.constantFrom(...CELL_STATES), unsure: fc.boolean(), reused: fc.boolean() }), {
+    minLength: 1,
+    maxLength: 12,
+  })
   .map((cells) => spiral(cells.length).map<BroodMark>((at, i) => ({ ...at, state: 'unread', ...cells[i] })));
 
 /** One to four readings on different days, in any order. */
 const readingsArb = fc
-  .uniqueArray(fc.record({ day: fc.integer({ min: 0, max: 60 }), marks: marksArb }), { selector: ({ day }) => day, minLength: 1, maxLength: 4 })
-  .map((visits) => visits.map<BroodReading>(({ day, marks }) => ({ id: `day-${day}`, at: START + day * DAY_MS, marks })));
+  .uniqueArray(fc.record({ day: fc.integer({ min: 0, max: 60 }), marks: marksArb }), {
+    selector: ({ day }) => day,
+    minLength: 1,
+    maxLength: 4,
+  })
+  .map((visits) =>
+    visits.map<BroodReading>(({ day, marks }) => ({ id: `day-${day}`, at: START + day * DAY_MS, marks })),
+  );
 
 function estimate(readings: readonly BroodReading[], rest: Partial<BroodInput> = {}): BroodEstimate {
   const asOf = START + 61 * DAY_MS;
@@ -34,7 +43,11 @@ function instants({ median, p50, p80, p95 }: Spread): number[] {
 
 /** All instants of an answer in a fixed order. */
 function allInstants({ cells, nest }: BroodEstimate): number[] {
-  const ranges = [...cells.flatMap(({ laid, capped, emerges }) => [laid, capped, emerges]), nest.founded, nest.firstEmergence];
+  const ranges = [
+    ...cells.flatMap(({ laid, capped, emerges }) => [laid, capped, emerges]),
+    nest.founded,
+    nest.firstEmergence,
+  ];
   return ranges.filter((range): range is DateRange => range !== null).flatMap(({ utc }) => instants(utc));
 }
 
@@ -115,22 +128,32 @@ describe('estimates, whatever the readings', () => {
 
 describe('scaling', () => {
   it('changes nothing when all durations and the clock are stretched alike', () => {
-    const stageArb = fc.record({ phases: fc.integer({ min: 1, max: 40 }), meanDays: fc.double({ min: 0.5, max: 30, noNaN: true }) });
+    const stageArb = fc.record({
+      phases: fc.integer({ min: 1, max: 40 }),
+      meanDays: fc.double({ min: 0.5, max: 30, noNaN: true }),
+    });
     fc.assert(
-      fc.property(fc.array(stageArb, { minLength: 1, maxLength: 5 }), fc.double({ min: 0.1, max: 10, noNaN: true }), (stages, factor) => {
-        const chain = phaseChain(stages);
-        const stretched = phaseChain(stages.map(({ phases, meanDays }) => ({ phases, meanDays: meanDays * factor })));
-        const run = { from: 0, to: chain.rates.length };
-        const total = stages.reduce((sum, { meanDays }) => sum + meanDays, 0);
-        for (const part of [0.1, 0.5, 1, 1.7]) {
-          const laws = [chain, stretched].map((one, i) => {
-            const weights = equilibriumWeights(one, run);
-            const days = part * total * (i === 0 ? 1 : factor);
-            return [passageCdf(one, passageSince(one, 0, weights), days), passageCdf(one, passageTo(one, weights, run.to), days)];
-          });
-          laws[0]?.forEach((p, i) => expect(Math.abs(p - (laws[1]?.[i] ?? NaN))).toBeLessThan(1e-11));
-        }
-      }),
+      fc.property(
+        fc.array(stageArb, { minLength: 1, maxLength: 5 }),
+        fc.double({ min: 0.1, max: 10, noNaN: true }),
+        (stages, factor) => {
+          const chain = phaseChain(stages);
+          const stretched = phaseChain(stages.map(({ phases, meanDays }) => ({ phases, meanDays: meanDays * factor })));
+          const run = { from: 0, to: chain.rates.length };
+          const total = stages.reduce((sum, { meanDays }) => sum + meanDays, 0);
+          for (const part of [0.1, 0.5, 1, 1.7]) {
+            const laws = [chain, stretched].map((one, i) => {
+              const weights = equilibriumWeights(one, run);
+              const days = part * total * (i === 0 ? 1 : factor);
+              return [
+                passageCdf(one, passageSince(one, 0, weights), days),
+                passageCdf(one, passageTo(one, weights, run.to), days),
+              ];
+            });
+            laws[0]?.forEach((p, i) => expect(Math.abs(p - (laws[1]?.[i] ?? NaN))).toBeLessThan(1e-11));
+          }
+        },
+      ),
       RUNS,
     );
   });

@@ -1,5 +1,5 @@
 import type { LocalOp } from '@/lib/offline/local-op';
-import type { Store } from '@/lib/offline/store';
+import type { OpCounts, Store } from '@/lib/offline/store';
 import type { MemoryDisk } from './memory-disk';
 
 /** How a simulated disk takes its time and fails. `work` runs at one instant between two waits, or never. */
@@ -12,10 +12,20 @@ function isSetAside({ state, outcome, seen }: LocalOp): boolean {
   return state === 'held' && !seen && (outcome === 'quarantined' || outcome === 'conflict');
 }
 
+function countOps(disk: MemoryDisk): OpCounts {
+  const counts = { queued: 0, suspect: 0, refused: 0, setAside: 0 };
+  for (const row of disk.ops.values()) {
+    if (row.state === 'queued') counts.queued += 1;
+    else if (row.state === 'suspect') counts.suspect += 1;
+    else if (row.state === 'refused' && !row.seen) counts.refused += 1;
+    else if (isSetAside(row)) counts.setAside += 1;
+  }
+  return counts;
+}
+
 /** The storage port over a `MemoryDisk`: one per tab, several may share a disk. */
 export function memoryStore(disk: MemoryDisk, run: DiskRun = steadyDisk): Store {
   const all = () => [...disk.ops.values()];
-  const count = (keep: (row: LocalOp) => boolean) => all().filter(keep).length;
   return {
     transact: (keys, change) =>
       run(() => {
@@ -31,13 +41,7 @@ export function memoryStore(disk: MemoryDisk, run: DiskRun = steadyDisk): Store 
       run(() => disk.select((row) => row.state === 'held' && row.key > key, (row) => row.key, limit)),
     heldUpTo: (seq, limit) =>
       run(() => disk.select((row) => row.state === 'held' && row.seq > 0 && row.seq <= seq, (row) => row.seq, limit)),
-    counts: () =>
-      run(() => ({
-        queued: count((row) => row.state === 'queued'),
-        suspect: count((row) => row.state === 'suspect'),
-        refused: count((row) => row.state === 'refused' && !row.seen),
-        setAside: count(isSetAside),
-      })),
+    counts: () => run(() => countOps(disk)),
     opsOfReading: (reading) => run(() => all().filter((row) => row.reading === reading)),
     opsOfNest: (nest) => run(() => all().filter((row) => row.nest === nest)),
     place: (reading) => run(() => disk.places.get(reading) ?? null),

@@ -54,7 +54,7 @@ export class SimTab implements Process {
   ) {
     const { world, server, weather, sent } = around;
     const connection = simConnection(world, this, weather);
-    const timers = { sleep: (ms: number, wake?: AbortSignal) => world.wait(this, ms, wake) };
+    const timers = { after: (ms: number, fire: () => void) => world.after(this, ms, fire) };
     const raw = { ...memoryStore(disk, connection.run), reopen: connection.reopen };
     this.store = watchStore(raw, timers);
     const network = simNetwork({ world, weather, server, process: this, user, sent });

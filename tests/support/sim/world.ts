@@ -3,7 +3,8 @@ import { type Random, seededRandom } from '@/lib/kit/random';
 interface Happening {
   at: number;
   order: number;
-  fire(): void;
+  /** Returns false when nothing came of it, so that nobody needs to be waited for. */
+  fire(): boolean;
 }
 
 /** Something that runs and can be killed: a tab of the app. Its waits never end after its death. */
@@ -63,22 +64,31 @@ export class World {
 
   /** Makes something happen after `ms`. */
   later(ms: number, fire: () => void): void {
-    this.push({ at: this.time + Math.max(0, ms), order: this.order++, fire });
+    this.schedule(ms, () => {
+      fire();
+      return true;
+    });
+  }
+
+  /** A process's timer: it never fires after the process's death, and fires late when it is frozen. */
+  after(process: Process, ms: number, fire: () => void): () => void {
+    let cancelled = false;
+    const end = () => {
+      if (!process.alive || cancelled) return false;
+      const late = process.frozenUntil - this.time;
+      if (late > 0) this.schedule(late, end);
+      else fire();
+      return late <= 0;
+    };
+    this.schedule(ms, end);
+    return () => {
+      cancelled = true;
+    };
   }
 
   /** A wait of a process. */
-  wait(process: Process, ms: number, wake?: AbortSignal): Promise<void> {
-    return new Promise((resolve) => {
-      const end = () => {
-        wake?.removeEventListener('abort', rouse);
-        if (!process.alive) return;
-        if (this.time < process.frozenUntil) this.later(process.frozenUntil - this.time, end);
-        else resolve();
-      };
-      const rouse = () => this.later(0, end);
-      this.later(wake?.aborted ? 0 : ms, end);
-      wake?.addEventListener('abort', rouse);
-    });
+  wait(process: Process, ms: number): Promise<void> {
+    return new Promise((resolve) => this.after(process, ms, resolve));
   }
 
   /** Lets time pass until `time`. */
@@ -87,10 +97,13 @@ export class World {
     for (let next = this.heap[0]; next && next.at <= time; next = this.heap[0]) {
       this.pop();
       this.time = next.at;
-      next.fire();
-      await settle();
+      if (next.fire()) await settle();
     }
     this.time = time;
+  }
+
+  private schedule(ms: number, fire: () => boolean): void {
+    this.push({ at: this.time + Math.max(0, ms), order: this.order++, fire });
   }
 
   private push(item: Happening): void {

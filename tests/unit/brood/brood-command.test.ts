@@ -11,13 +11,18 @@ afterAll(() => rmSync(folder, { recursive: true }));
 function run(text: string, door = '--nest') {
   const file = join(folder, 'input.json');
   writeFileSync(file, text);
-  const { status, stdout, stderr } = spawnSync('npx', ['tsx', 'lib/cli/brood.ts', door, file], { encoding: 'utf8' });
+  const { status, stdout, stderr } = spawnSync(process.execPath, ['--import', 'tsx', 'lib/cli/brood.ts', door, file], {
+    encoding: 'utf8',
+  });
   return { status, stdout, stderr };
 }
 
 describe('the brood command', { timeout: 30_000 }, () => {
   it('prints the estimate of a nest file as JSON', () => {
-    const nest = { readings: [{ at: '2026-06-16T05:35:00-04:00', marks: [{ q: 0, r: 0, state: 'capped' }] }], taxon: 'Polistes fuscatus' };
+    const nest = {
+      readings: [{ at: '2026-06-16T05:35:00-04:00', marks: [{ q: 0, r: 0, state: 'capped' }] }],
+      taxon: 'Polistes fuscatus',
+    };
     const { status, stdout, stderr } = run(JSON.stringify(nest));
     expect([status, stderr]).toEqual([0, '']);
     const answer = JSON.parse(stdout) as { inputDigest: string; cells: unknown[] };

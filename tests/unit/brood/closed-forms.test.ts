@@ -54,22 +54,32 @@ describe('one sighting with a flat prior (equilibrium law of renewal theory, Cox
     expect(Math.abs(residualCdf(9, 12, 8) - 0.6487490129845832)).toBeLessThan(1e-12);
   });
 
-  it.each(facts.one_sighting_flat_prior_residual)('agrees for $k phases and mean $mean', ({ k, mean, mean_residual, cdf }) => {
-    const { chain, weights } = oneStage(k, mean);
-    expect(Math.abs(elapsedMoments(chain, { from: 0, weights }, ONE).mean - mean_residual)).toBeLessThan(1e-12);
-    for (const [x, p] of Object.entries(cdf)) expect(Math.abs(residualCdf(k, mean, Number(x)) - p)).toBeLessThan(1e-12);
-  });
+  it.each(facts.one_sighting_flat_prior_residual)(
+    'agrees for $k phases and mean $mean',
+    ({ k, mean, mean_residual, cdf }) => {
+      const { chain, weights } = oneStage(k, mean);
+      expect(Math.abs(elapsedMoments(chain, { from: 0, weights }, ONE).mean - mean_residual)).toBeLessThan(1e-12);
+      for (const [x, p] of Object.entries(cdf))
+        expect(Math.abs(residualCdf(k, mean, Number(x)) - p)).toBeLessThan(1e-12);
+    },
+  );
 
-  it.each(facts.one_sighting_flat_prior_residual)('gives the time already spent the same law ($k phases)', ({ k, mean, cdf }) => {
-    const { chain, weights } = oneStage(k, mean);
-    const since = passageSince(chain, 0, weights);
-    for (const [x, p] of Object.entries(cdf)) expect(Math.abs(passageCdf(chain, since, Number(x)) - p)).toBeLessThan(1e-12);
-  });
+  it.each(facts.one_sighting_flat_prior_residual)(
+    'gives the time already spent the same law ($k phases)',
+    ({ k, mean, cdf }) => {
+      const { chain, weights } = oneStage(k, mean);
+      const since = passageSince(chain, 0, weights);
+      for (const [x, p] of Object.entries(cdf))
+        expect(Math.abs(passageCdf(chain, since, Number(x)) - p)).toBeLessThan(1e-12);
+    },
+  );
 });
 
 describe('stage at a given age (matrix exponential, scipy 1.17.1)', () => {
   const { chain: stages, rows } = facts.stage_occupancy_given_age;
-  const chain = phaseChain(stages.map(([, phases, meanDays]) => ({ phases: Number(phases), meanDays: Number(meanDays) })));
+  const chain = phaseChain(
+    stages.map(([, phases, meanDays]) => ({ phases: Number(phases), meanDays: Number(meanDays) })),
+  );
 
   it('gives larva, pupa, emerged at 30 days (B06)', () => {
     const [, larva, pupa, emerged] = stageOccupancy(chain, 30);

@@ -43,13 +43,25 @@ describe('published stage durations (P rows: biology)', () => {
 });
 
 describe('the row that serves a taxon', () => {
-  it.each(['Polistes fuscatus', 'polistes fuscatus', 'P. fuscatus', 'fuscatus', 'fuscatus group'])('finds fuscatus for %s', (name) => {
-    expect(durationsFor(name, DEFAULT_DURATIONS)).toMatchObject({ match: 'exact', row: { taxon: 'Polistes fuscatus' } });
-  });
+  it.each(['Polistes fuscatus', 'polistes fuscatus', 'P. fuscatus', 'fuscatus', 'fuscatus group'])(
+    'finds fuscatus for %s',
+    (name) => {
+      expect(durationsFor(name, DEFAULT_DURATIONS)).toMatchObject({
+        match: 'exact',
+        row: { taxon: 'Polistes fuscatus' },
+      });
+    },
+  );
 
-  it.each(['Polistes metricus', 'Polistes', 'Polistes sp.', 'Fuscopolistes', '', null])('falls back on the genus for %s, low trust', (name) => {
-    expect(durationsFor(name, DEFAULT_DURATIONS)).toMatchObject({ match: 'genus', row: { taxon: 'Polistes', trust: 'low' } });
-  });
+  it.each(['Polistes metricus', 'Polistes', 'Polistes sp.', 'Fuscopolistes', '', null])(
+    'falls back on the genus for %s, low trust',
+    (name) => {
+      expect(durationsFor(name, DEFAULT_DURATIONS)).toMatchObject({
+        match: 'genus',
+        row: { taxon: 'Polistes', trust: 'low' },
+      });
+    },
+  );
 
   it('says that another genus is a guess', () => {
     const choice = durationsFor('Dolichovespula arenaria', DEFAULT_DURATIONS);

@@ -20,13 +20,19 @@ describe('adults to expect per day', () => {
   });
 
   it('spreads capped cells evenly over 14 days when nothing varies (renewal theory)', () => {
-    const settings = { ...NO_SPREAD, values: { ...NO_SPREAD.values, lossCapped: settingsWith({ lossCapped: 0 }).values.lossCapped } };
+    const settings = {
+      ...NO_SPREAD,
+      values: { ...NO_SPREAD.values, lossCapped: settingsWith({ lossCapped: 0 }).values.lossCapped },
+    };
     const { emergencePerDay } = estimate([reading(AT, cellsOf({ capped: 28 }))], { settings, zone: 'UTC' }).nest;
     for (const { expected } of emergencePerDay.slice(1, 12)) expect(expected).toBeCloseTo(2, 2);
   });
 
   it('bands a binomial count exactly when nothing is shared: 28 cells, 1/14 a day', () => {
-    const settings = { ...NO_SPREAD, values: { ...NO_SPREAD.values, lossCapped: settingsWith({ lossCapped: 0 }).values.lossCapped } };
+    const settings = {
+      ...NO_SPREAD,
+      values: { ...NO_SPREAD.values, lossCapped: settingsWith({ lossCapped: 0 }).values.lossCapped },
+    };
     const [, day] = estimate([reading(AT, cellsOf({ capped: 28 }))], { settings, zone: 'UTC' }).nest.emergencePerDay;
     // Binomial(28, 1/14): P(0) = 0.1255, P(≤ 3) = 0.8651, P(≤ 4) = 0.9556 → the 10 % and 90 % points are 0 and 4.
     expect(day).toMatchObject({ lo80: 0, hi80: 4 });

@@ -30,7 +30,9 @@ describe('the shape of an answer', () => {
     for (const { laid, capped, emerges } of answer.cells) {
       for (const range of [laid, capped, emerges]) {
         const { utc } = range ?? { utc: null };
-        const order = [utc?.p95[0], utc?.p80[0], utc?.p50[0], utc?.median, utc?.p50[1], utc?.p80[1], utc?.p95[1]];
+        const order = [utc?.p95[0], utc?.p80[0], utc?.p50[0], utc?.median, utc?.p50[1], utc?.p80[1], utc?.p95[1]].map(
+          String,
+        );
         expect(order).toEqual([...order].sort());
         expect(new Set(order).size).toBe(7);
       }
@@ -54,10 +56,13 @@ describe('the shape of an answer', () => {
 });
 
 describe('cells without a datable brood', () => {
-  it.each(['empty', 'unread', 'webbed', 'damaged', 'dead', 'parasitised', 'opened'] as const)('gives %s no dates', (state) => {
-    const answer = estimate([reading(AT, [cell(state)])]);
-    expect(answer.cells).toMatchObject([{ state, laid: null, capped: null, emerges: null }]);
-  });
+  it.each(['empty', 'unread', 'webbed', 'damaged', 'dead', 'parasitised', 'opened'] as const)(
+    'gives %s no dates',
+    (state) => {
+      const answer = estimate([reading(AT, [cell(state)])]);
+      expect(answer.cells).toMatchObject([{ state, laid: null, capped: null, emerges: null }]);
+    },
+  );
 
   it('counts dead and parasitised brood as lost, an empty or opened cell as not', () => {
     const lost = (state: BroodMark['state']) => estimate([reading(AT, [cell(state)])]).cells[0]?.lost.probability;
@@ -103,7 +108,11 @@ describe('a nest whose adults have come out', () => {
   it('M C31: capped, empty, egg is a second brood; its age restarts and the founding stays', () => {
     const first = reading('2026-06-01T12:00:00Z', [cell('capped')]);
     const before = estimate([first]);
-    const after = estimate([first, reading('2026-06-20T12:00:00Z', [cell('empty')]), reading('2026-06-26T12:00:00Z', [cell('egg')])]);
+    const after = estimate([
+      first,
+      reading('2026-06-20T12:00:00Z', [cell('empty')]),
+      reading('2026-06-26T12:00:00Z', [cell('egg')]),
+    ]);
     expect(after.cells[0]).toMatchObject({ state: 'egg', generation: 2 });
     expect((after.cells[0]?.laid?.p95[0] ?? '') > '2026-06-01').toBe(true);
     expect(after.nest.founded).toEqual(before.nest.founded);
@@ -196,7 +205,11 @@ describe('time of day and year', () => {
     const before = estimate([reading('2026-10-31T12:00:00-04:00', [cell('egg')])], { settings });
     const utc = estimate([reading('2026-10-31T12:00:00-04:00', [cell('egg')])], { settings, zone: 'UTC' });
     expect(before.cells[0]?.emerges?.utc).toEqual(utc.cells[0]?.emerges?.utc);
-    expect(before.nest.emergencePerDay.map(({ date }) => date).slice(0, 3)).toEqual(['2026-10-31', '2026-11-01', '2026-11-02']);
+    expect(before.nest.emergencePerDay.map(({ date }) => date).slice(0, 3)).toEqual([
+      '2026-10-31',
+      '2026-11-01',
+      '2026-11-02',
+    ]);
   });
 });
 

@@ -13,7 +13,9 @@ describe('losses before an adult comes out', () => {
     const { chain } = nestModel(GENUS_ROW, settings);
     const [losses] = lossesByNode(chain, settings, { group: PUPA, nodes: [{ rate: 1, weight: 1 }] });
     const [k, rate] = [39, 39 / 14];
-    const survive = Array.from({ length: k }, (_, left) => (rate / (rate + 0.05)) ** (left + 1) / k).reduce((a, b) => a + b);
+    const survive = Array.from({ length: k }, (_, left) => (rate / (rate + 0.05)) ** (left + 1) / k).reduce(
+      (a, b) => a + b,
+    );
     expect(losses?.capped).toBeCloseTo(1 - survive, 12);
     expect(losses).toMatchObject({ egg: 0, larva: 0 });
   });

@@ -34,7 +34,11 @@ describe('a nest file', () => {
     const answer = result.ok ? estimateNest(result.value) : null;
     expect(answer?.settings.version).toBe('mine');
     expect(answer?.cells[0]?.laid).not.toBeNull();
-    expect(result.ok && result.value.settings?.values.nestFactorCv).toEqual({ value: 0.3, trust: 'assumption', source: 'own nests' });
+    expect(result.ok && result.value.settings?.values.nestFactorCv).toEqual({
+      value: 0.3,
+      trust: 'assumption',
+      source: 'own nests',
+    });
   });
 
   it('puts its own duration rows before the built-in ones', () => {
@@ -50,29 +54,63 @@ describe('a nest file', () => {
 });
 
 describe('a malformed nest file is refused with one line that names the field', () => {
-  const withMark = (mark: object) => ({ readings: [{ ...READING, marks: [MARK, { q: 1, r: 0, state: 'egg', ...mark }] }] });
+  const withMark = (mark: object) => ({
+    readings: [{ ...READING, marks: [MARK, { q: 1, r: 0, state: 'egg', ...mark }] }],
+  });
 
   it.each([
     ['a list instead of an object', [], 'file: must be an object, is a list'],
     ['no readings', {}, 'readings: must be a list, is missing'],
     ['a reading without a time', { readings: [{ marks: [] }] }, 'readings[0].at: must be a text, is missing'],
-    ['a time without an offset', { readings: [{ ...READING, at: '2026-06-16T05:35' }] }, 'readings[0].at: "2026-06-16T05:35"'],
-    ['a day that is not in the calendar', { readings: [{ ...READING, at: '2026-02-30' }] }, 'readings[0].at: "2026-02-30"'],
+    [
+      'a time without an offset',
+      { readings: [{ ...READING, at: '2026-06-16T05:35' }] },
+      'readings[0].at: "2026-06-16T05:35"',
+    ],
+    [
+      'a day that is not in the calendar',
+      { readings: [{ ...READING, at: '2026-02-30' }] },
+      'readings[0].at: "2026-02-30"',
+    ],
     ['an offset that is none', { readings: [{ ...READING, at: '2026-06-16T05:35:00+99:00' }] }, 'readings[0].at:'],
     ['no marks', { readings: [{ at: '2026-06-16' }] }, 'readings[0].marks: must be a list, is missing'],
     ['an unknown state', withMark({ state: 'pupa' }), 'readings[0].marks[1].state: must be one of unread, empty,'],
     ['a broken address', withMark({ q: 0.5 }), 'readings[0].marks[1].q: must be a whole number, is 0.5'],
     ['an address off the comb', withMark({ q: 41 }), 'readings[0].marks[1]: cell 41,0 lies further than 40'],
     ['a cell marked twice', withMark({ q: 0 }), 'readings[0].marks[1]: cell 0,0 is marked a second time'],
-    ['an instar of 6', withMark({ state: 'large', instar: 6 }), 'readings[0].marks[1].instar: must be between 1 and 5, is 6'],
-    ['a flag that is a text', withMark({ nectar: 'yes' }), 'readings[0].marks[1].nectar: must be true or false, is a string'],
+    [
+      'an instar of 6',
+      withMark({ state: 'large', instar: 6 }),
+      'readings[0].marks[1].instar: must be between 1 and 5, is 6',
+    ],
+    [
+      'a flag that is a text',
+      withMark({ nectar: 'yes' }),
+      'readings[0].marks[1].nectar: must be true or false, is a string',
+    ],
     ['an unknown zone', { readings: [READING], zone: 'Mars/Base' }, 'zone: "Mars/Base" is not a time zone'],
     ['a number for a taxon', { readings: [READING], taxon: 3 }, 'taxon: must be a text, is a number'],
     ['a text for a temperature', { readings: [READING], temperature: 'warm' }, 'temperature: must be an object'],
-    ['a setting that is none', { readings: [READING], settings: { lossEggs: 1 } }, 'settings.lossEggs: is not a setting'],
-    ['a setting out of bounds', { readings: [READING], settings: { cvEgg: 0 } }, 'settings.cvEgg: must be between 0.05 and 1, is 0'],
-    ['a trust word that is none', { readings: [READING], settings: { cvEgg: { value: 0.2, trust: 'high' } } }, 'settings.cvEgg.trust:'],
-    ['a duration of nothing', { readings: [READING], settings: { durations: [{ taxon: 'x', egg: 0 }] } }, 'settings.durations[0].egg:'],
+    [
+      'a setting that is none',
+      { readings: [READING], settings: { lossEggs: 1 } },
+      'settings.lossEggs: is not a setting',
+    ],
+    [
+      'a setting out of bounds',
+      { readings: [READING], settings: { cvEgg: 0 } },
+      'settings.cvEgg: must be between 0.05 and 1, is 0',
+    ],
+    [
+      'a trust word that is none',
+      { readings: [READING], settings: { cvEgg: { value: 0.2, trust: 'high' } } },
+      'settings.cvEgg.trust:',
+    ],
+    [
+      'a duration of nothing',
+      { readings: [READING], settings: { durations: [{ taxon: 'x', egg: 0 }] } },
+      'settings.durations[0].egg:',
+    ],
     ['no reading and no day asked for', { readings: [] }, 'asOf: is needed when there is no reading'],
   ])('%s', (_, value, line) => {
     expect(refusal(value)).toContain(line);

@@ -55,7 +55,10 @@ describe('published founding-to-worker times (P rows: biology)', () => {
 });
 
 describe('arithmetic of the default durations with next to no spread (M rows: coded as written, no biology)', () => {
-  const capped = estimate([reading('2026-06-15T12:00:00Z', cellsOf({ capped: 1 }))], { settings: NO_SPREAD, zone: 'UTC' });
+  const capped = estimate([reading('2026-06-15T12:00:00Z', cellsOf({ capped: 1 }))], {
+    settings: NO_SPREAD,
+    zone: 'UTC',
+  });
 
   it('M C14: a capped cell on 15 June was laid 1–15 May and comes out 15–29 June', () => {
     const [cell] = capped.cells;
@@ -73,8 +76,12 @@ describe('arithmetic of the default durations with next to no spread (M rows: co
   });
 
   it('M C15: an egg today is capped in 20–31 days and comes out in 34–45', () => {
-    const [cell] = estimate([reading('2026-06-01T12:00:00Z', cellsOf({ egg: 1 }))], { settings: NO_SPREAD, zone: 'UTC' }).cells;
-    const days = (range: readonly [string, string] | undefined) => range?.map((date) => daysBetween('2026-06-01', date));
+    const [cell] = estimate([reading('2026-06-01T12:00:00Z', cellsOf({ egg: 1 }))], {
+      settings: NO_SPREAD,
+      zone: 'UTC',
+    }).cells;
+    const days = (range: readonly [string, string] | undefined) =>
+      range?.map((date) => daysBetween('2026-06-01', date));
     const [firstCap = 0, lastCap = 0] = days(cell?.capped?.p95) ?? [];
     const [firstOut = 0, lastOut = 0] = days(cell?.emerges?.p95) ?? [];
     expect([firstCap >= 19, lastCap <= 32, lastCap - firstCap >= 9]).toEqual([true, true, true]);
@@ -90,7 +97,9 @@ describe('arithmetic of the default durations with next to no spread (M rows: co
 
 describe('the 33 cells of Fennel Green bandstand (nest N12 of the demo season, final reading of 16 June)', () => {
   const marks = cellsOf({ capped: 6, parasitised: 1, large: 7, medium: 3, small: 6, egg: 10 });
-  const { cells, nest, flags } = estimate([reading('2026-06-16T05:35:00-04:00', marks)], { taxon: 'Polistes fuscatus' });
+  const { cells, nest, flags } = estimate([reading('2026-06-16T05:35:00-04:00', marks)], {
+    taxon: 'Polistes fuscatus',
+  });
 
   it('dates every living brood between February and October', () => {
     const dates = cells.flatMap(({ laid, emerges }) => [...(laid?.p95 ?? []), ...(emerges?.p95 ?? [])]);

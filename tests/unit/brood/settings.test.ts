@@ -17,7 +17,9 @@ describe('the default settings', () => {
   it('split 20 larval days into four instars of 3.333 and one of 6.667 (assumption), with 39, 6 and 39 phases', () => {
     const laws = stageLaws(GENUS_ROW, DEFAULT_SETTINGS);
     expect(laws.map(({ phases }) => phases)).toEqual([39, 6, 6, 6, 6, 6, 39]);
-    [11, 10 / 3, 10 / 3, 10 / 3, 10 / 3, 20 / 3, 14].forEach((days, i) => expect(laws[i]?.meanDays).toBeCloseTo(days, 12));
+    [11, 10 / 3, 10 / 3, 10 / 3, 10 / 3, 20 / 3, 14].forEach((days, i) =>
+      expect(laws[i]?.meanDays).toBeCloseTo(days, 12),
+    );
   });
 
   it('make the whole larva vary by 0.192 and the whole development by 4.79 days (arithmetic of the defaults)', () => {
@@ -53,7 +55,13 @@ describe('what a recorded class means', () => {
   it('narrows to an instar within the class only', () => {
     expect(stageGroup({ state: 'small', instar: 3 })).toEqual({ key: 'L3', first: 3, last: 3 });
     expect(stageGroup({ state: 'egg', instar: 3 })).toMatchObject({ key: 'egg' });
-    expect([fitsInstar({ state: 'large', instar: 5 }), fitsInstar({ state: 'capped', instar: 5 })]).toEqual([true, false]);
-    expect([fitsInstar({ state: 'egg', instar: 1 }), fitsInstar({ state: 'egg', instar: null })]).toEqual([false, true]);
+    expect([fitsInstar({ state: 'large', instar: 5 }), fitsInstar({ state: 'capped', instar: 5 })]).toEqual([
+      true,
+      false,
+    ]);
+    expect([fitsInstar({ state: 'egg', instar: 1 }), fitsInstar({ state: 'egg', instar: null })]).toEqual([
+      false,
+      true,
+    ]);
   });
 });

@@ -26,7 +26,10 @@ export function estimate(readings: readonly BroodReading[], rest: Partial<BroodI
 
 /** The default settings with some numbers replaced. */
 export function settingsWith(values: Partial<Record<SettingName, number>>): BroodSettings {
-  const replaced = Object.entries(values).map(([name, value]) => [name, { value, trust: 'assumption', source: 'test' }]);
+  const replaced = Object.entries(values).map(([name, value]) => [
+    name,
+    { value, trust: 'assumption', source: 'test' },
+  ]);
   return { ...DEFAULT_SETTINGS, values: { ...DEFAULT_SETTINGS.values, ...Object.fromEntries(replaced) } };
 }
 

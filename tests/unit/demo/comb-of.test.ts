@@ -11,7 +11,11 @@ describe('a comb laid out from its counts', () => {
   });
 
   it('hangs together, whichever way it leans', () => {
-    for (const lean of [{ x: 0.9, y: -0.3 }, { x: -0.8, y: 0.2 }, { x: 0.2, y: 0.9 }]) {
+    for (const lean of [
+      { x: 0.9, y: -0.3 },
+      { x: -0.8, y: 0.2 },
+      { x: 0.2, y: 0.9 },
+    ]) {
       const cells = combOf({ counts: { large: 5, egg: 26 }, nectar: 0, lean });
       const keys = new Set(cells.map(cellKey));
       expect(keys.has('0,0')).toBe(true);

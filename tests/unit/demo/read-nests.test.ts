@@ -33,7 +33,8 @@ function visitField(code: string, visitKey: string, name: string): unknown {
   return visit?.acts.find(({ kind, body }) => kind === 'field.set' && body.field === name)?.body.value;
 }
 
-describe.each(TABLE)('nest %s', (code, visitKey, start, ...row) => {
+describe.each(TABLE)('nest %s', (...entry) => {
+  const [code, visitKey, start, ...row] = entry;
   const [cells, egg, small, medium, large, capped, other, empty, nectarCells, comb, pedicel, temperature, adults] = row;
   const marks = readingMarks(ops, readingId(code, visitKey, 'field'));
 
@@ -58,7 +59,9 @@ describe.each(TABLE)('nest %s', (code, visitKey, start, ...row) => {
   it('is the visit and the measures of the table', () => {
     const visit = storyOf(code).visits.find(({ key }) => key === visitKey);
     const measured = ['comb_max_mm', 'comb_min_mm', 'pedicel_mm', 'temp_c', 'adult_females'];
-    expect(measured.map((name) => visitField(code, visitKey, name))).toEqual([comb, pedicel, temperature, adults].flat());
+    expect(measured.map((name) => visitField(code, visitKey, name))).toEqual(
+      [comb, pedicel, temperature, adults].flat(),
+    );
     if (visitKey === 'take-down') expect(visit?.startedAt).toBe(start);
   });
 });
@@ -71,14 +74,17 @@ describe('the readings of the season', () => {
         const rings = marks.filter(({ state }) => states.includes(state)).map(ringOf);
         return rings.reduce((sum, k) => sum + k, 0) / rings.length;
       };
-      const oldest = ['capped', 'large', 'medium', 'small'].find((state) => marks.some((mark) => mark.state === state)) ?? '';
+      const oldest =
+        ['capped', 'large', 'medium', 'small'].find((state) => marks.some((mark) => mark.state === state)) ?? '';
       expect(meanRing([oldest]), code).toBeLessThan(meanRing(['egg']));
     }
   });
 
   it('have a second reader who agrees on 18 of 19 cells of N02', () => {
     const field = readingMarks(ops, readingId('N02', 'take-down', 'field'));
-    const second = new Map(readingMarks(ops, readingId('N02', 'take-down', 'second')).map((mark) => [cellKey(mark), mark.state]));
+    const second = new Map(
+      readingMarks(ops, readingId('N02', 'take-down', 'second')).map((mark) => [cellKey(mark), mark.state]),
+    );
     expect(second.size).toBe(19);
     expect(field.filter((mark) => second.get(cellKey(mark)) === mark.state)).toHaveLength(18);
   });
@@ -106,7 +112,10 @@ describe('the readings of the season', () => {
 
 describe('the release log', () => {
   it('gives the minutes from sunset of the season’s table', () => {
-    const minutes = Object.entries(RELEASES).map(([code, release]) => [code, /^\d+ min (before|after)/.exec(releaseNote(release))?.[0]]);
+    const minutes = Object.entries(RELEASES).map(([code, release]) => [
+      code,
+      /^\d+ min (before|after)/.exec(releaseNote(release))?.[0],
+    ]);
     expect(minutes).toEqual([
       ['N01', '16 min before'],
       ['N02', '12 min before'],
@@ -124,7 +133,9 @@ describe('the release log', () => {
 
   it('puts every nest into its enclosure after its cells were read', () => {
     for (const [code, { enclosedAt }] of Object.entries(RELEASES)) {
-      const reading = ops.filter((op) => op.reading === readingId(code, 'take-down', 'field') && op.kind === 'cell.mark');
+      const reading = ops.filter(
+        (op) => op.reading === readingId(code, 'take-down', 'field') && op.kind === 'cell.mark',
+      );
       const lastRead = Math.max(...reading.map(({ at }) => Date.parse(at.wall)));
       expect(lastRead, code).toBeLessThan(instantOf(enclosedAt, TARROW.offset));
     }

@@ -71,13 +71,18 @@ describe('the demo season', () => {
       const known = taxa.map(({ scientificName }) => scientificName);
       expect(nests.filter(({ taxon }) => !known.includes(taxon))).toEqual([]);
     }
-    const statuses = SEASON.map(({ taxa }) => taxa.find(({ scientificName }) => scientificName === 'Polistes dominula')?.status);
+    const statuses = SEASON.map(
+      ({ taxa }) => taxa.find(({ scientificName }) => scientificName === 'Polistes dominula')?.status,
+    );
     expect(statuses).toEqual(['introduced', 'native']);
   });
 
   it('hangs no more nests at a host than there is room for', () => {
-    const hosts = TARROW.nests.flatMap(({ acts }) => acts.filter(({ body }) => body.field === 'host').map(({ body }) => body.value));
-    for (const { code, capacity } of TARROW.hosts) expect(hosts.filter((host) => host === code).length).toBeLessThanOrEqual(capacity);
+    const hosts = TARROW.nests.flatMap(({ acts }) =>
+      acts.filter(({ body }) => body.field === 'host').map(({ body }) => body.value),
+    );
+    for (const { code, capacity } of TARROW.hosts)
+      expect(hosts.filter((host) => host === code).length).toBeLessThanOrEqual(capacity);
     expect(hosts.length).toBe(6);
   });
 
@@ -86,7 +91,9 @@ describe('the demo season', () => {
   });
 
   it('reads every cell in one of the twelve states', () => {
-    const cells = SEASON.flatMap(({ nests }) => nests.flatMap(({ visits }) => visits.flatMap(({ readings }) => readings.flatMap((r) => r.cells))));
+    const cells = SEASON.flatMap(({ nests }) =>
+      nests.flatMap(({ visits }) => visits.flatMap(({ readings }) => readings.flatMap((r) => r.cells))),
+    );
     expect(cells.filter(({ state }) => !isCellState(state))).toEqual([]);
   });
 });

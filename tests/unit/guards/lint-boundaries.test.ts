@@ -10,10 +10,12 @@ interface FileReport {
 
 const ALLOWED = {
   'components/field/good.tsx': "import { tally } from '@/lib/comb/tally';\n\nexport const good = tally;\n",
-  'lib/brood/good.ts': "import type { State } from '@/lib/comb/states';\nimport { ok } from '@/lib/kit/result';\n\nexport const good = (state: State) => ok(state);\n",
+  'lib/brood/good.ts':
+    "import type { State } from '@/lib/comb/states';\nimport { ok } from '@/lib/kit/result';\n\nexport const good = (state: State) => ok(state);\n",
   'lib/protocol/good.ts': "import { z } from 'zod';\n\nexport const good = z.string();\n",
   'lib/kit/good.ts': 'export const now = Date.now();\n',
-  'app/(lab)/nests/page.tsx': "import { nests } from '@/lib/server/queries/nests';\n\nexport default function Page() {\n  return nests;\n}\n",
+  'app/(lab)/nests/page.tsx':
+    "import { nests } from '@/lib/server/queries/nests';\n\nexport default function Page() {\n  return nests;\n}\n",
 };
 
 let tree: PlantedTree;
@@ -28,7 +30,12 @@ function complaintsAbout(file: string): string[] {
 beforeAll(async () => {
   const planted = Object.fromEntries(LINT_BREACHES.map(({ file, text }) => [file, text]));
   tree = plantTree({ ...planted, ...ALLOWED });
-  const { output } = await tree.run('eslint/bin/eslint.js', ['--config', 'tests/config/eslint.config.mjs', '--format=json', '.']);
+  const { output } = await tree.run('eslint/bin/eslint.js', [
+    '--config',
+    'tests/config/eslint.config.mjs',
+    '--format=json',
+    '.',
+  ]);
   reports = JSON.parse(output.slice(output.indexOf('[{'))) as FileReport[];
 }, 120_000);
 

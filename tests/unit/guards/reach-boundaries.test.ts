@@ -5,13 +5,15 @@ const CRUISER = 'dependency-cruiser/bin/dependency-cruise.mjs';
 const ARGS = ['--config', 'tests/config/dependency-cruiser.config.mjs', '--output-type=err-long'];
 const FOLDERS = ['app', 'components', 'lib', 'models', 'workers'];
 
-const value = (name: string, source: string) => `import { ${name} } from '${source}';\n\nexport const used = ${name};\n`;
+const value = (name: string, source: string) =>
+  `import { ${name} } from '${source}';\n\nexport const used = ${name};\n`;
 
 /** What both projects have: a server file, a model, and something allowed in every other folder. */
 const SOUND = {
   'lib/server/env.ts': "import 'server-only';\n\nexport const used = 1;\n",
   'models/nest.ts': "import type { Model } from 'sequelize';\n\nexport type Nest = Model;\n",
-  'lib/server/read.ts': "import 'server-only';\nimport type { Nest } from '@/models/nest';\n\nexport type Read = Nest;\n",
+  'lib/server/read.ts':
+    "import 'server-only';\nimport type { Nest } from '@/models/nest';\n\nexport type Read = Nest;\n",
   'app/api/health/route.ts': value('used', '@/lib/server/env'),
   'lib/protocol/shape.ts': value('z', 'zod'),
   'components/field/fine.tsx': value('used', '@/lib/offline/fine'),
@@ -51,7 +53,10 @@ describe('the dependency check', () => {
   }, 120_000);
 
   test.each([
-    ['a component that reaches the server through two other files', /reach of components: components\/field\/list\.tsx/],
+    [
+      'a component that reaches the server through two other files',
+      /reach of components: components\/field\/list\.tsx/,
+    ],
     ['a file of the phone that reaches the server', /reach of lib\/offline: lib\/offline\/second\.ts/],
     ['a worker that reaches a model through a type', /reach of workers: workers\/w\.ts/],
     ['a page that names a model', /models: app\/\(lab\)\/nests\/page\.tsx/],

@@ -1,7 +1,8 @@
 import 'server-only';
 import { entityOf } from '@/lib/protocol/entity-of';
 import type { OpKind } from '@/lib/protocol/op';
-import { basesOf, registerKey } from '@/lib/protocol/register';
+import { basesOf } from '@/lib/protocol/register';
+import { registerOf } from '@/lib/protocol/register-of';
 import type { ValidOp } from '@/lib/protocol/validate-op';
 import { NO_RIGHT, type Objection, quarantined } from './decision';
 import type { Actor, World } from './world';
@@ -30,12 +31,6 @@ function checkRetraction({ world, op, by }: Question): Objection | null {
   if (mark?.kind !== 'cell.mark' || mark.reading !== op.reading) return quarantined('target');
   if (mark.actorId !== by.userId && !mayRetractForOthers(by)) return NO_RIGHT;
   return world.retracted.has(target) ? quarantined('retracted') : null;
-}
-
-/** The key of the register an operation sets; null for other operations. */
-export function registerOf(op: ValidOp): string | null {
-  const entity = op.kind === 'field.set' || op.kind === 'note.set' ? entityOf(op) : null;
-  return entity && (op.kind === 'field.set' || op.kind === 'note.set') ? registerKey(op.kind, entity, String(op.body.field)) : null;
 }
 
 /** An edit starts from the same register, or from the operation that opened the entity. */

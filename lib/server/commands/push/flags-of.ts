@@ -2,8 +2,8 @@ import 'server-only';
 import type { OpFlag } from '@/lib/protocol/op-codes';
 import { hasClockFlag, isDoubtfulPlace, placeOf } from '@/lib/protocol/op-flags';
 import { basesOf, registerWinner } from '@/lib/protocol/register';
+import { registerOf } from '@/lib/protocol/register-of';
 import type { ValidOp } from '@/lib/protocol/validate-op';
-import { registerOf } from './check-kind';
 import type { World } from './world';
 
 const CHANGES_CELLS: ReadonlySet<string> = new Set(['cell.mark', 'cell.retract']);
@@ -21,8 +21,8 @@ function isConflict(world: World, op: ValidOp): boolean {
 }
 
 function hasPlaceFlag(world: World, op: ValidOp): boolean {
-  const value = op.kind === 'nest.open' ? op.body.place : op.body.field === 'place' ? op.body.value : null;
-  const place = placeOf(value);
+  const isPlaceField = op.kind === 'field.set' && op.body.field === 'place';
+  const place = placeOf(isPlaceField ? op.body.value : op.body.place);
   return place !== null && isDoubtfulPlace(place, world.home);
 }
 

@@ -2,7 +2,6 @@ import 'server-only';
 import { z } from 'zod';
 import type { TeamContext } from '@/lib/server/auth/team-context';
 import { HttpProblem } from '@/lib/server/http/problem';
-import { auditDecision } from './audit-decision';
 import { DECISION_REASON } from './decision-reason';
 import { type FinalVersion, finalVersion, isClosed, updateFinal, versionOf } from './final-reading';
 import { labWork } from './lab-work';
@@ -24,12 +23,12 @@ export interface AmendInput {
  * @throws HttpProblem `not-found`, `blind`, or `not-locked` when there is nothing locked to amend.
  */
 export async function amendReading(ctx: TeamContext, { id, reason }: AmendInput, nowMs: number): Promise<FinalVersion> {
-  return labWork(ctx, id, async (work) => {
+  const decision = await labWork(ctx, { id, nowMs }, async (work) => {
     const { final } = work;
     if (!final || !isClosed(work)) throw new HttpProblem('not-locked');
     const version = versionOf(final) + 1;
     await updateFinal(work, final, { version });
-    await auditDecision(ctx, work, { action: 'reading.amend', final: { ...final, version }, detail: { reason }, nowMs });
-    return finalVersion(final, version);
+    return { action: 'reading.amend', final, version, detail: { reason } };
   });
+  return finalVersion(decision);
 }

@@ -3,7 +3,7 @@ import { fromBinary, toBinary } from '@/lib/server/db/uuid-binary';
 import { newId } from '@/lib/server/db/new-id';
 import { isLocked } from '@/lib/server/queries/census';
 import type { ReadingRow } from '@/lib/server/queries/reading-rows';
-import type { LabWork } from './lab-work';
+import type { LabDecision, LabWork } from './lab-work';
 
 /** Answer of every command on a final reading. */
 export interface FinalVersion {
@@ -17,8 +17,8 @@ export function versionOf({ version }: Pick<ReadingRow, 'version'>): number {
   return version ?? 1;
 }
 
-/** The answer about a final reading at a version. */
-export function finalVersion(final: ReadingRow, version = versionOf(final)): FinalVersion {
+/** The answer after a decision. */
+export function finalVersion({ final, version }: LabDecision): FinalVersion {
   return { reading: fromBinary(final.id), version };
 }
 
@@ -31,7 +31,7 @@ export function isClosed({ final }: LabWork): boolean {
  * The final reading of a source, made now if there is none: it stands on the marks the team's log holds at this
  * moment, and marks that come later do not move it.
  */
-export async function ensureFinal({ scope, source, final, seq }: LabWork, nowMs: number): Promise<ReadingRow> {
+export async function ensureFinal({ scope, source, final, counter }: LabWork, nowMs: number): Promise<ReadingRow> {
   if (final) return final;
   const now = new Date(nowMs);
   const made = await scope.db.models.Reading.create(
@@ -49,7 +49,7 @@ export async function ensureFinal({ scope, source, final, seq }: LabWork, nowMs:
       opened_at_text: now.toISOString(),
       submitted_at: now,
       based_on: source.id,
-      base_seq: seq,
+      base_seq: counter.seq,
       version: 1,
       locked_version: null,
     },

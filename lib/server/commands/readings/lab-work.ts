@@ -1,7 +1,10 @@
 import 'server-only';
+import type { Json } from '@/lib/protocol/canonical-json';
 import type { TeamContext } from '@/lib/server/auth/team-context';
-import { lockCounter } from '@/lib/server/commands/push/lock-counter';
+import { type Counter, lockCounter, saveCounter } from '@/lib/server/commands/push/lock-counter';
+import { writeAudit } from '@/lib/server/commands/push/write-audit';
 import { inTransaction } from '@/lib/server/db/in-transaction';
+import { fromBinary } from '@/lib/server/db/uuid-binary';
 import { visibleReading } from '@/lib/server/queries/reading-detail';
 import { type ReadingRow, finalOf, readingById } from '@/lib/server/queries/reading-rows';
 import { type TeamScope, teamScope } from '@/lib/server/queries/team-scope';
@@ -13,9 +16,17 @@ export interface LabWork {
   source: ReadingRow;
   /** The final reading made from it; null before the first decision. */
   final: ReadingRow | null;
-  /** The last place in the team's log. */
-  seq: number;
-  counter: Awaited<ReturnType<typeof lockCounter>>;
+  /** Where the team's log stands. */
+  counter: Counter;
+}
+
+/** What a command did to a final reading. */
+export interface LabDecision {
+  action: 'reading.settle' | 'reading.lock' | 'reading.amend';
+  final: ReadingRow;
+  version: number;
+  /** Beside the reading it is based on and the version. */
+  detail: { [key: string]: Json };
 }
 
 /** Both halves of a reading that may be asked for by either id. */
@@ -27,21 +38,27 @@ async function halvesOf(scope: TeamScope, asked: ReadingRow): Promise<Pick<LabWo
 }
 
 /**
- * Runs a command on a reading in one transaction; the team's counter row is locked first, so decisions and pushes
- * of a team happen one after the other.
+ * Runs a decision about a reading in one transaction and adds it to the team's audit chain. The team's counter row is
+ * locked first, so that decisions and pushes of a team happen one after the other.
  *
  * @param id of a field, second or final reading, as it stands in the address.
+ * @param nowMs epoch milliseconds.
  * @throws HttpProblem `not-found`, or `blind` while the person has an own second reading open at this visit.
  */
-export async function labWork<Result>(
+export async function labWork(
   ctx: TeamContext,
-  id: string,
-  work: (work: LabWork) => Promise<Result>,
-): Promise<Result> {
+  { id, nowMs }: { id: string; nowMs: number },
+  decide: (work: LabWork) => Promise<LabDecision>,
+): Promise<LabDecision> {
   return inTransaction(async (transaction) => {
     const counter = await lockCounter(ctx, transaction);
     const scope = { ...teamScope(ctx), transaction };
     const halves = await halvesOf(scope, await visibleReading(scope, id));
-    return work({ scope, ...halves, seq: counter.seq, counter });
+    const decision = await decide({ scope, ...halves, counter });
+    const { action, final, version } = decision;
+    const detail = { basedOn: fromBinary(halves.source.id), version, ...decision.detail };
+    await writeAudit({ ctx, counter, transaction }, { action, subjectId: fromBinary(final.id), detail, at: new Date(nowMs) });
+    await saveCounter(ctx, counter, transaction);
+    return decision;
   });
 }

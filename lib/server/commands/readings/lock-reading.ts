@@ -2,7 +2,6 @@ import 'server-only';
 import { z } from 'zod';
 import type { TeamContext } from '@/lib/server/auth/team-context';
 import { HttpProblem } from '@/lib/server/http/problem';
-import { auditDecision } from './audit-decision';
 import { type FinalVersion, ensureFinal, finalVersion, isClosed, updateFinal, versionOf } from './final-reading';
 import { labWork } from './lab-work';
 
@@ -18,11 +17,12 @@ export const LOCK_INPUT = z.strictObject({});
  * @throws HttpProblem `not-found`, `blind`, or `locked` when this version is locked already.
  */
 export async function lockReading(ctx: TeamContext, { id }: { id: string }, nowMs: number): Promise<FinalVersion> {
-  return labWork(ctx, id, async (work) => {
+  const decision = await labWork(ctx, { id, nowMs }, async (work) => {
     if (isClosed(work)) throw new HttpProblem('locked');
     const final = await ensureFinal(work, nowMs);
-    await updateFinal(work, final, { opened_by: work.scope.user, locked_version: versionOf(final) });
-    await auditDecision(ctx, work, { action: 'reading.lock', final, detail: {}, nowMs });
-    return finalVersion(final);
+    const version = versionOf(final);
+    await updateFinal(work, final, { opened_by: work.scope.user, locked_version: version });
+    return { action: 'reading.lock', final, version, detail: {} };
   });
+  return finalVersion(decision);
 }

@@ -8,7 +8,6 @@ import { idKey } from '@/lib/server/queries/id-key';
 import { liveUpTo, markHistories } from '@/lib/server/queries/mark-history';
 import { settlementsOf } from '@/lib/server/queries/reading-cells';
 import type { ReadingRow } from '@/lib/server/queries/reading-rows';
-import { auditDecision } from './audit-decision';
 import { type FinalVersion, ensureFinal, finalVersion, isClosed, updateFinal, versionOf } from './final-reading';
 import { type LabWork, labWork } from './lab-work';
 import type { SettleInput } from './settle-input';
@@ -51,12 +50,14 @@ async function writeSettlements(work: LabWork, final: ReadingRow, decided: { cel
  * @throws HttpProblem `not-found`, `blind`, or `locked` while the final reading is locked.
  */
 export async function settleReading(ctx: TeamContext, input: SettleInput & { id: string }, nowMs: number): Promise<FinalVersion> {
-  return labWork(ctx, input.id, async (work) => {
+  const { id, cells } = input;
+  const decision = await labWork(ctx, { id, nowMs }, async (work) => {
     if (isClosed(work)) throw new HttpProblem('locked');
     const final = await ensureFinal(work, nowMs);
-    await writeSettlements(work, final, { cells: input.cells, at: new Date(nowMs) });
+    await writeSettlements(work, final, { cells, at: new Date(nowMs) });
     await updateFinal(work, final, { opened_by: work.scope.user });
-    await auditDecision(ctx, work, { action: 'reading.settle', final, detail: { cells: input.cells }, nowMs });
-    return finalVersion(final);
+    const detail = { cells: cells.map(({ q, r, state }) => ({ q, r, state })) };
+    return { action: 'reading.settle', final, version: versionOf(final), detail };
   });
+  return finalVersion(decision);
 }

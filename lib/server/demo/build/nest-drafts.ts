@@ -22,7 +22,18 @@ function actDrafts(acts: readonly ActStory[], place: ActPlace): Draft[] {
   return acts.map(({ at, kind, body, by = place.by }, i) => {
     const label = `act/${i}`;
     const atMs = instantOf(at, offset) + actDelay(`${name}/${label}`);
-    return { opId: opId(name, label), by, atMs, sentMs: sentAt(atMs, heldMs), kind, nest, visit, reading: null, deps: [], body };
+    return {
+      opId: opId(name, label),
+      by,
+      atMs,
+      sentMs: sentAt(atMs, heldMs),
+      kind,
+      nest,
+      visit,
+      reading: null,
+      deps: [],
+      body,
+    };
   });
 }
 
@@ -55,7 +66,11 @@ function visitDrafts(visit: VisitStory, nest: NestStory, offset: string): Draft[
       heldMs,
     }),
   );
-  return [open, ...actDrafts(visit.acts, { name, nest: nestId, visit: visitId, by: visit.by, offset, heldMs }), ...readings];
+  return [
+    open,
+    ...actDrafts(visit.acts, { name, nest: nestId, visit: visitId, by: visit.by, offset, heldMs }),
+    ...readings,
+  ];
 }
 
 function openDraft(nest: NestStory, offset: string): Draft {

@@ -26,6 +26,17 @@ export function readingDrafts(story: ReadingStory, place: ReadingPlace): Draft[]
   let atMs = instantOf(story.openedAt, offset) + openingDelay(name);
   return readingSayings(story, name, visitOp).map(({ label, kind, body, afterMs, deps }) => {
     atMs += afterMs;
-    return { opId: opId(name, label), by: story.by, atMs, sentMs: sentAt(atMs, heldMs), kind, nest, visit, reading, deps, body };
+    return {
+      opId: opId(name, label),
+      by: story.by,
+      atMs,
+      sentMs: sentAt(atMs, heldMs),
+      kind,
+      nest,
+      visit,
+      reading,
+      deps,
+      body,
+    };
   });
 }

@@ -52,7 +52,15 @@ function misTapSayings({ misTap }: ReadingStory, name: string): Saying[] {
 
 function endSayings({ note, submitted }: ReadingStory): Saying[] {
   const text: Saying[] = note
-    ? [{ label: 'note', kind: 'note.set', afterMs: 20_000, body: { entity: 'reading', text: note, base: null }, deps: [] }]
+    ? [
+        {
+          label: 'note',
+          kind: 'note.set',
+          afterMs: 20_000,
+          body: { entity: 'reading', text: note, base: null },
+          deps: [],
+        },
+      ]
     : [];
   return submitted ? [...text, { label: 'submit', kind: 'reading.submit', afterMs: 6_000, body: {}, deps: [] }] : text;
 }

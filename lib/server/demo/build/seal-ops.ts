@@ -28,7 +28,7 @@ function timeOf(atMs: number, { id, offset }: SealingDevice): OpTime {
   return { wall, mono: atMs - bootMs, boot: demoId(`boot/${id}/${date}`), skewMs: (demoSeed(id) % 1_800) - 900 };
 }
 
-function sealed(draft: Draft, n: number, hlc: Hlc, device: SealingDevice): Op {
+function sealed(draft: Draft, { n, hlc, device }: { n: number; hlc: Hlc; device: SealingDevice }): Op {
   const { opId, kind, nest, visit, reading, deps, body, atMs } = draft;
   const bare = { v: 1 as const, opId, kind, kindV: 1, deviceId: device.id, n, nest, visit, reading };
   const part = { ...bare, at: timeOf(atMs, device), hlc: formatHlc(hlc), deps, body };
@@ -46,6 +46,6 @@ export function sealOps(drafts: readonly Draft[], device: SealingDevice): Sealed
     .sort((a, b) => a.atMs - b.atMs)
     .map((draft, i) => {
       hlc = tickHlc(hlc, draft.atMs);
-      return { op: sealed(draft, i + 1, hlc, device), sentMs: draft.sentMs };
+      return { op: sealed(draft, { n: i + 1, hlc, device }), sentMs: draft.sentMs };
     });
 }

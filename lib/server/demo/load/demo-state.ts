@@ -22,7 +22,10 @@ async function isComplete(): Promise<boolean> {
 export async function demoState(): Promise<DemoState> {
   if (await isComplete()) return 'loaded';
   const { Team, User } = database().models;
-  const rows = [...(await Team.findAll({ attributes: ['id'], raw: true })), ...(await User.findAll({ attributes: ['id'], raw: true }))];
+  const rows = [
+    ...(await Team.findAll({ attributes: ['id'], raw: true })),
+    ...(await User.findAll({ attributes: ['id'], raw: true })),
+  ];
   if (rows.length === 0) return 'empty';
   const ours = new Set(SEASON.flatMap((team) => [teamId(team), ...team.people.map(userId)]));
   return rows.every(({ id }) => ours.has(fromBinary(id))) ? 'unfinished' : 'foreign';

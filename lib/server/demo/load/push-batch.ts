@@ -12,5 +12,8 @@ import type { PushStep } from '@/lib/server/demo/build/season-steps';
 export async function pushBatch(ctx: TeamContext, { ops, atMs }: PushStep): Promise<void> {
   const results = await applyOps(ctx, ops, { receivedAt: new Date(atMs) });
   const refused = results.find(({ r }) => r !== 'applied' && r !== 'duplicate');
-  if (refused) throw new Error(`The demo operation ${String(refused.opId)} was answered ${refused.r} (${refused.code ?? 'no code'}).`);
+  if (refused)
+    throw new Error(
+      `The demo operation ${String(refused.opId)} was answered ${refused.r} (${refused.code ?? 'no code'}).`,
+    );
 }

@@ -20,7 +20,11 @@ async function isTaken({ teamId }: TeamContext, { reading, decision: { leaves } 
 /** Takes one decision of the lab in the person's name, at its time in the season; one already taken is left alone. */
 export async function takeDecision(ctx: TeamContext, step: DecideStep): Promise<void> {
   if (await isTaken(ctx, step)) return;
-  const { reading: id, atMs, decision: { act } } = step;
+  const {
+    reading: id,
+    atMs,
+    decision: { act },
+  } = step;
   if (act.kind === 'settle') await settleReading(ctx, { id, cells: act.cells.map((cell) => ({ ...cell })) }, atMs);
   else if (act.kind === 'lock') await lockReading(ctx, { id }, atMs);
   else await amendReading(ctx, { id, reason: act.reason }, atMs);

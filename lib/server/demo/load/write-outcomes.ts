@@ -10,7 +10,11 @@ import type { TeamStory } from '@/lib/server/demo/story/team-story';
 function outcomeRow(team: TeamStory, nest: NestStory) {
   if (!nest.outcome) return [];
   const { outcome, decidedOn, note } = nest.outcome;
-  const ids = { team_id: toBinary(teamId(team)), id: toBinary(outcomeId(nest)), nest_id: toBinary(demoId(nestName(nest))) };
+  const ids = {
+    team_id: toBinary(teamId(team)),
+    id: toBinary(outcomeId(nest)),
+    nest_id: toBinary(demoId(nestName(nest))),
+  };
   return [{ ...ids, outcome, decided_on: decidedOn, note }];
 }
 

@@ -25,14 +25,23 @@ async function writePeople(team: TeamStory, passwordHash: string, transaction: T
   const enrolled = new Date(instantOf(SET_UP_AT, team.offset));
   for (const person of team.people) {
     const user_id = toBinary(userId(person));
-    const account = { id: user_id, email: person.email, display_name: person.name, password_hash: passwordHash, disabled_at: null };
+    const account = {
+      id: user_id,
+      email: person.email,
+      display_name: person.name,
+      password_hash: passwordHash,
+      disabled_at: null,
+    };
     await User.create(account, { transaction });
     await Membership.create({ team_id, user_id, role: person.role }, { transaction });
     if (!may(person.role, 'sync.enrol')) continue;
     const id = deviceId(person);
     const times = { enrolled_at: enrolled, last_seen_at: enrolled, revoked_at: null };
     const label = person.role === 'technician' ? 'Field phone' : 'Lab desk';
-    await Device.create({ team_id, id: toBinary(id), user_id, label, device_key: deviceKey(id), ...times }, { transaction });
+    await Device.create(
+      { team_id, id: toBinary(id), user_id, label, device_key: deviceKey(id), ...times },
+      { transaction },
+    );
   }
 }
 
@@ -80,7 +89,10 @@ export async function writeTeam(team: TeamStory, passwordHash: string): Promise<
     if (await Team.findByPk(id, { transaction })) return;
     const { name, zone, home } = team;
     await Team.create({ id, name, zone, home_lat: home.lat, home_lon: home.lon }, { transaction });
-    await TeamCounter.create({ team_id: id, seq: 0, safe_seq: 0, audit_seq: 0, audit_hash: Buffer.alloc(32) }, { transaction });
+    await TeamCounter.create(
+      { team_id: id, seq: 0, safe_seq: 0, audit_seq: 0, audit_hash: Buffer.alloc(32) },
+      { transaction },
+    );
     await writePeople(team, passwordHash, transaction);
     await writeSettings(team, transaction);
     await writePlacesAndKinds(team, transaction);

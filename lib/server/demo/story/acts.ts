@@ -8,9 +8,9 @@ export function step(at: WallTime, name: string, note?: string): ActStory {
   return { at, kind: 'step.mark', body: { step: name, phase: 'mark', ...(note ? { note } : {}) } };
 }
 
-/** A behaviour seen, in the words of the glossary. */
-export function behaviour(at: WallTime, name: string, note?: string): ActStory {
-  return { at, kind: 'behaviour.add', body: { mode: 'all', behaviour: name, ...(note ? { note } : {}) } };
+/** She comes home with something: `prey return` or `pulp return`. */
+export function load(at: WallTime, behaviour: 'prey return' | 'pulp return'): ActStory {
+  return { at, kind: 'behaviour.add', body: { mode: 'load', behaviour } };
 }
 
 /** The first note of a nest or a visit. */
@@ -18,9 +18,14 @@ export function note(at: WallTime, entity: 'nest' | 'visit', text: string): ActS
   return { at, kind: 'note.set', body: { entity, text, base: null } };
 }
 
-/** The first value of a field of a nest or a visit. */
-export function field(at: WallTime, entity: 'nest' | 'visit', name: string, value: number | string): ActStory {
-  return { at, kind: 'field.set', body: { entity, field: name, value, base: null } };
+/** The first value of a field of a nest. */
+export function nestField(at: WallTime, field: string, value: number | string): ActStory {
+  return { at, kind: 'field.set', body: { entity: 'nest', field, value, base: null } };
+}
+
+/** The first value of a field of a visit. */
+export function visitField(at: WallTime, field: string, value: number | string): ActStory {
+  return { at, kind: 'field.set', body: { entity: 'visit', field, value, base: null } };
 }
 
 /** A sting: where, and what was felt. The person stays unnamed. */

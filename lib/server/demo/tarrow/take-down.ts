@@ -1,6 +1,6 @@
 import 'server-only';
 import { type WallTime, minutesBetween, minutesLater } from '@/lib/server/demo/build/demo-time';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { note, step, visitField } from '@/lib/server/demo/story/acts';
 import type { ActStory, VisitStory } from '@/lib/server/demo/story/nest-story';
 import type { MeasuredNest } from './moved-nests';
 import type { Release } from './releases';
@@ -26,7 +26,7 @@ export function measures(at: WallTime, measured: Omit<MeasuredNest, 'comb'>): Ac
     ['temp_c', tempC],
     ['adult_females', adults],
   ];
-  return values.flatMap(([name, value]) => (value === null ? [] : [field(at, 'visit', name, value)]));
+  return values.flatMap(([name, value]) => (value === null ? [] : [visitField(at, name, value)]));
 }
 
 /** What is written beside a release: minutes from sunset, air, wind, and why it was late. */
@@ -40,7 +40,9 @@ function releaseSteps(release: Release): ActStory[] {
   const { enclosedAt, firstContactMin, releasedAt } = release;
   return [
     step(enclosedAt, 'into the enclosure'),
-    ...firstContactMin.map((min) => step(minutesLater(enclosedAt, min), 'first contact', `On the comb after ${min} min.`)),
+    ...firstContactMin.map((min) =>
+      step(minutesLater(enclosedAt, min), 'first contact', `On the comb after ${min} min.`),
+    ),
     step(releasedAt, 'release', releaseNote(release)),
   ];
 }
@@ -48,7 +50,7 @@ function releaseSteps(release: Release): ActStory[] {
 /** The visit at which a nest is taken down, read, measured, put back and released. */
 export function takeDown(story: TakeDownStory): VisitStory {
   const { by, startedAt, heldUntil, readings, heightM, steps, measuredAt, measured, release, text } = story;
-  const height = heightM === undefined ? [] : [field(startedAt, 'visit', 'height_m', heightM)];
+  const height = heightM === undefined ? [] : [visitField(startedAt, 'height_m', heightM)];
   const acts = [
     ...height,
     ...steps,

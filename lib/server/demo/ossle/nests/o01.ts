@@ -1,6 +1,6 @@
 import 'server-only';
 import { combOf } from '@/lib/server/demo/build/comb-of';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { note, step, visitField } from '@/lib/server/demo/story/acts';
 import type { NestStory } from '@/lib/server/demo/story/nest-story';
 import { YSOLDE } from '@/lib/server/demo/ossle/people';
 
@@ -22,7 +22,7 @@ export const O01: NestStory = {
       acts: [
         step('2026-05-13T06:58', 'caught', 'First attempt.'),
         step('2026-05-13T07:02', 'cut'),
-        field('2026-05-13T07:12', 'visit', 'temp_c', 13),
+        visitField('2026-05-13T07:12', 'temp_c', 13),
       ],
       readings: [
         {

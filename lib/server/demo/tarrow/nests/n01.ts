@@ -1,6 +1,6 @@
 import 'server-only';
 import { combOf } from '@/lib/server/demo/build/comb-of';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { nestField, note, step } from '@/lib/server/demo/story/acts';
 import type { NestStory, VisitStory } from '@/lib/server/demo/story/nest-story';
 import { check } from '@/lib/server/demo/tarrow/check';
 import { MOVED_NESTS } from '@/lib/server/demo/tarrow/moved-nests';
@@ -35,7 +35,14 @@ const TAKE_DOWN: VisitStory = takeDown({
 const CHECKS: readonly VisitStory[] = [
   check({ key: 'dawn', by: TOBIAH, at: '2026-05-23T05:40', adults: 1, text: 'On the comb at first light.' }),
   check({ key: 'day 3', by: TOBIAH, at: '2026-05-25T17:10', adults: 1, text: 'She stayed the third night.' }),
-  check({ key: 'day 7', by: TOBIAH, at: '2026-05-29T16:30', adults: 1, text: 'Two loads of pulp, two new cells.' }),
+  check({
+    key: 'day 7',
+    by: TOBIAH,
+    at: '2026-05-29T16:30',
+    adults: 1,
+    loads: ['pulp return', 'pulp return'],
+    text: 'Two loads of pulp, two new cells.',
+  }),
   check({ key: 'first worker', by: TOBIAH, at: '2026-06-23T11:20', adults: 2, text: 'The first worker is out.' }),
 ];
 
@@ -48,8 +55,12 @@ export const N01: NestStory = {
   openedBy: TOBIAH,
   openedAt: '2026-05-18T16:40',
   acts: [
-    note('2026-05-18T16:41', 'nest', 'The rack is in daily use; the nest cannot stay. H1 lies 5.63 km off, bearing 131°.'),
-    field('2026-05-20T18:00', 'nest', 'host', 'H1'),
+    note(
+      '2026-05-18T16:41',
+      'nest',
+      'The rack is in daily use; the nest cannot stay. H1 lies 5.63 km off, bearing 131°.',
+    ),
+    nestField('2026-05-20T18:00', 'host', 'H1'),
   ],
   visits: [TAKE_DOWN, ...CHECKS],
   decisions: [],

@@ -2,7 +2,7 @@ import 'server-only';
 import type { Axial } from '@/lib/comb/axial';
 import { combOf } from '@/lib/server/demo/build/comb-of';
 import { withStates } from '@/lib/server/demo/build/with-states';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { nestField, note, step } from '@/lib/server/demo/story/acts';
 import type { NestStory, VisitStory } from '@/lib/server/demo/story/nest-story';
 import { check } from '@/lib/server/demo/tarrow/check';
 import { MOVED_NESTS } from '@/lib/server/demo/tarrow/moved-nests';
@@ -57,7 +57,14 @@ const TAKE_DOWN: VisitStory = takeDown({
 const CHECKS: readonly VisitStory[] = [
   check({ key: 'dawn', by: ORIEL, at: '2026-05-31T05:35', adults: 1, text: 'On the comb at first light.' }),
   check({ key: 'day 3', by: ORIEL, at: '2026-06-02T16:20', adults: 1, text: 'She stayed the third night.' }),
-  check({ key: 'day 7', by: ORIEL, at: '2026-06-06T15:50', adults: 1, text: 'One load of prey, one new egg.' }),
+  check({
+    key: 'day 7',
+    by: ORIEL,
+    at: '2026-06-06T15:50',
+    adults: 1,
+    loads: ['prey return'],
+    text: 'One load of prey, one new egg.',
+  }),
   check({ key: 'first worker', by: ORIEL, at: '2026-06-22T12:10', adults: 2, text: 'The first worker is out.' }),
 ];
 
@@ -71,7 +78,7 @@ export const N02: NestStory = {
   openedAt: '2026-05-26T15:05',
   acts: [
     note('2026-05-26T15:06', 'nest', 'Above the stands, within reach of pupils. Visit before school opens.'),
-    field('2026-05-28T17:30', 'nest', 'host', 'H4'),
+    nestField('2026-05-28T17:30', 'host', 'H4'),
   ],
   visits: [TAKE_DOWN, ...CHECKS],
   decisions: [

@@ -56,7 +56,14 @@ const CHECKS: readonly VisitStory[] = [
     text: 'A file of ants on the post, two cells emptied. Sticky guard fitted to the hanger.',
   }),
   check({ key: 'day 3', by: ORIEL, at: '2026-06-05T17:00', adults: 1, text: 'She stayed the third night. No ants.' }),
-  check({ key: 'day 7', by: TOBIAH, at: '2026-06-09T14:20', adults: 1, text: 'Three loads of prey.' }),
+  check({
+    key: 'day 7',
+    by: TOBIAH,
+    at: '2026-06-09T14:20',
+    adults: 1,
+    loads: ['prey return', 'prey return', 'prey return'],
+    text: 'Three loads of prey.',
+  }),
   check({ key: 'first worker', by: TOBIAH, at: '2026-06-20T13:30', adults: 2, text: 'The first worker is out.' }),
 ];
 
@@ -68,7 +75,9 @@ export const N03: NestStory = {
   place: { lat: 43.552, lon: -77.541, accuracyM: 6 },
   openedBy: TOBIAH,
   openedAt: '2026-05-30T12:25',
-  acts: [note('2026-05-30T12:26', 'nest', 'On a ladder that is carried out each morning; a fixed beam is 1.6 m above.')],
+  acts: [
+    note('2026-05-30T12:26', 'nest', 'On a ladder that is carried out each morning; a fixed beam is 1.6 m above.'),
+  ],
   visits: [TAKE_DOWN, ...CHECKS],
   decisions: [],
   outcome: {

@@ -1,5 +1,5 @@
 import 'server-only';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { note, step, visitField } from '@/lib/server/demo/story/acts';
 import type { NestStory } from '@/lib/server/demo/story/nest-story';
 import { check } from '@/lib/server/demo/tarrow/check';
 import { SENNA } from '@/lib/server/demo/tarrow/people';
@@ -20,16 +20,30 @@ export const N04: NestStory = {
       by: SENNA,
       startedAt: '2026-06-03T08:30',
       acts: [
-        field('2026-06-03T08:34', 'visit', 'overhead_line_m', 2.1),
+        visitField('2026-06-03T08:34', 'overhead_line_m', 2.1),
         step('2026-06-03T08:36', 'stop', 'X5: the nest hangs 2.1 m from an overhead feeder.'),
         step('2026-06-03T08:50', 'sign and tape', 'Tape at 3 m, sign on both sides.'),
-        note('2026-06-03T08:52', 'visit', 'Stopped before the ladder went up. The rail operator agrees to guard it in place.'),
+        note(
+          '2026-06-03T08:52',
+          'visit',
+          'Stopped before the ladder went up. The rail operator agrees to guard it in place.',
+        ),
       ],
       readings: [],
     },
-    check({ key: 'june', by: SENNA, at: '2026-06-12T11:15', adults: 6, text: 'Six adults on the comb, seen from the platform.' }),
+    check({
+      key: 'june',
+      by: SENNA,
+      at: '2026-06-12T11:15',
+      adults: 6,
+      text: 'Six adults on the comb, seen from the platform.',
+    }),
     check({ key: 'autumn', by: SENNA, at: '2026-10-02T10:20', adults: 0, text: 'Empty. Tape and sign taken down.' }),
   ],
   decisions: [],
-  outcome: { outcome: 'guard it in place', decidedOn: '2026-10-02', note: 'Not moved (X5). Guarded to the end of the season.' },
+  outcome: {
+    outcome: 'guard it in place',
+    decidedOn: '2026-10-02',
+    note: 'Not moved (X5). Guarded to the end of the season.',
+  },
 };

@@ -1,6 +1,6 @@
 import 'server-only';
 import { combOf } from '@/lib/server/demo/build/comb-of';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { nestField, note, step } from '@/lib/server/demo/story/acts';
 import type { NestStory, VisitStory } from '@/lib/server/demo/story/nest-story';
 import type { CellStory, ReadingStory } from '@/lib/server/demo/story/reading-story';
 import { check } from '@/lib/server/demo/tarrow/check';
@@ -62,10 +62,22 @@ const TAKE_DOWN: VisitStory = takeDown({
 });
 
 const CHECKS: readonly VisitStory[] = [
-  check({ key: 'noon', by: TOBIAH, at: '2026-06-07T13:30', text: 'The host answers “not sure”. A look at dawn is asked for.' }),
+  check({
+    key: 'noon',
+    by: TOBIAH,
+    at: '2026-06-07T13:30',
+    text: 'The host answers “not sure”. A look at dawn is asked for.',
+  }),
   check({ key: 'dawn', by: TOBIAH, at: '2026-06-08T05:30', adults: 2, text: 'Both on the comb at first light.' }),
   check({ key: 'day 3', by: ORIEL, at: '2026-06-09T16:40', adults: 1, text: 'One has left; the larger one stays.' }),
-  check({ key: 'day 7', by: ORIEL, at: '2026-06-13T15:10', adults: 1, text: 'Prey twice, one new cell.' }),
+  check({
+    key: 'day 7',
+    by: ORIEL,
+    at: '2026-06-13T15:10',
+    adults: 1,
+    loads: ['prey return', 'prey return'],
+    text: 'Prey twice, one new cell.',
+  }),
   check({ key: 'first worker', by: TOBIAH, at: '2026-06-24T12:00', adults: 2, text: 'The first worker is out.' }),
 ];
 
@@ -79,7 +91,7 @@ export const N06: NestStory = {
   openedAt: '2026-06-02T10:30',
   acts: [
     note('2026-06-02T10:33', 'nest', 'Two females in the photo. Movable only if both are caught.'),
-    field('2026-06-04T18:10', 'nest', 'host', 'H1'),
+    nestField('2026-06-04T18:10', 'host', 'H1'),
   ],
   visits: [TAKE_DOWN, ...CHECKS],
   decisions: [],

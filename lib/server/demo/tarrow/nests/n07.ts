@@ -1,6 +1,6 @@
 import 'server-only';
 import { combOf } from '@/lib/server/demo/build/comb-of';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { note, step, visitField } from '@/lib/server/demo/story/acts';
 import type { NestStory } from '@/lib/server/demo/story/nest-story';
 import type { CellStory } from '@/lib/server/demo/story/reading-story';
 import { check } from '@/lib/server/demo/tarrow/check';
@@ -33,9 +33,13 @@ export const N07: NestStory = {
       by: TOBIAH,
       startedAt: '2026-06-24T15:30',
       acts: [
-        field('2026-06-24T15:33', 'visit', 'adult_females', 7),
+        visitField('2026-06-24T15:33', 'adult_females', 7),
         step('2026-06-24T16:10', 'night screen', 'Mesh between lamp and door, shut from dusk.'),
-        note('2026-06-24T16:14', 'visit', '58 cells, six workers and the foundress. Read from photos taken through the hatch.'),
+        note(
+          '2026-06-24T16:14',
+          'visit',
+          '58 cells, six workers and the foundress. Read from photos taken through the hatch.',
+        ),
       ],
       readings: [
         {
@@ -51,8 +55,18 @@ export const N07: NestStory = {
         },
       ],
     },
-    check({ key: 'frost', by: TOBIAH, at: '2026-10-14T09:30', adults: 0, text: 'First frost two nights ago. The comb is empty.' }),
+    check({
+      key: 'frost',
+      by: TOBIAH,
+      at: '2026-10-14T09:30',
+      adults: 0,
+      text: 'First frost two nights ago. The comb is empty.',
+    }),
   ],
   decisions: [],
-  outcome: { outcome: 'guard it in place', decidedOn: '2026-10-14', note: 'Not moved (D4). Guarded to the first frost.' },
+  outcome: {
+    outcome: 'guard it in place',
+    decidedOn: '2026-10-14',
+    note: 'Not moved (D4). Guarded to the first frost.',
+  },
 };

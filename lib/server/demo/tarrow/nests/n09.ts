@@ -1,6 +1,6 @@
 import 'server-only';
 import { combOf } from '@/lib/server/demo/build/comb-of';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { nestField, note, step } from '@/lib/server/demo/story/acts';
 import type { NestStory, VisitStory } from '@/lib/server/demo/story/nest-story';
 import { check } from '@/lib/server/demo/tarrow/check';
 import { MOVED_NESTS } from '@/lib/server/demo/tarrow/moved-nests';
@@ -36,8 +36,20 @@ const TAKE_DOWN: VisitStory = takeDown({
 });
 
 const CHECKS: readonly VisitStory[] = [
-  check({ key: 'dawn', by: ORIEL, at: '2026-06-11T05:25', adults: 0, text: 'Nobody on the comb at first light. Brood whole.' }),
-  check({ key: 'night', by: ORIEL, at: '2026-06-11T21:40', adults: 0, text: 'Nobody after dark either: gone by the two-check rule.' }),
+  check({
+    key: 'dawn',
+    by: ORIEL,
+    at: '2026-06-11T05:25',
+    adults: 0,
+    text: 'Nobody on the comb at first light. Brood whole.',
+  }),
+  check({
+    key: 'night',
+    by: ORIEL,
+    at: '2026-06-11T21:40',
+    adults: 0,
+    text: 'Nobody after dark either: gone by the two-check rule.',
+  }),
   check({
     key: 'day 6',
     by: ORIEL,
@@ -63,7 +75,7 @@ export const N09: NestStory = {
   openedAt: '2026-06-07T08:45',
   acts: [
     note('2026-06-07T08:47', 'nest', 'On the hinge side of a door in daily use. H2 lies 3.39 km off, bearing 343°.'),
-    field('2026-06-08T17:45', 'nest', 'host', 'H2'),
+    nestField('2026-06-08T17:45', 'host', 'H2'),
   ],
   visits: [TAKE_DOWN, ...CHECKS],
   decisions: [],

@@ -14,7 +14,13 @@ export const N10: NestStory = {
   place: { lat: 43.535, lon: -77.64, accuracyM: 5 },
   openedBy: TOBIAH,
   openedAt: '2026-06-17T15:35',
-  acts: [note('2026-06-17T15:36', 'nest', 'Over the weighbridge door. The caller was asked not to spray, knock, seal or hose.')],
+  acts: [
+    note(
+      '2026-06-17T15:36',
+      'nest',
+      'Over the weighbridge door. The caller was asked not to spray, knock, seal or hose.',
+    ),
+  ],
   visits: [
     {
       key: 'take-down',
@@ -24,7 +30,11 @@ export const N10: NestStory = {
       acts: [
         step('2026-06-18T06:06', 'stop', 'X11: sprayed the night before, residue smelt.'),
         step('2026-06-18T06:20', 'comb taken for the lab'),
-        note('2026-06-18T06:24', 'visit', 'The foundress lies dead below the nest. The comb goes to the lab in a sealed box.'),
+        note(
+          '2026-06-18T06:24',
+          'visit',
+          'The foundress lies dead below the nest. The comb goes to the lab in a sealed box.',
+        ),
       ],
       readings: [],
     },
@@ -35,7 +45,11 @@ export const N10: NestStory = {
       startedAt: '2026-06-18T10:30',
       acts: [
         ...measures('2026-06-18T11:05', MOVED_NESTS.N10),
-        note('2026-06-18T11:06', 'visit', 'Larvae of every size dead. The eggs keep their shape; whether they live is not known.'),
+        note(
+          '2026-06-18T11:06',
+          'visit',
+          'Larvae of every size dead. The eggs keep their shape; whether they live is not known.',
+        ),
       ],
       readings: [
         {
@@ -53,5 +67,9 @@ export const N10: NestStory = {
     },
   ],
   decisions: [],
-  outcome: { outcome: 'failed at visit', decidedOn: '2026-06-18', note: 'Sprayed the night before the visit (X11). Foundress dead.' },
+  outcome: {
+    outcome: 'failed at visit',
+    decidedOn: '2026-06-18',
+    note: 'Sprayed the night before the visit (X11). Foundress dead.',
+  },
 };

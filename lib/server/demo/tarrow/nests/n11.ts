@@ -1,6 +1,6 @@
 import 'server-only';
 import { combOf } from '@/lib/server/demo/build/comb-of';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { nestField, note, step } from '@/lib/server/demo/story/acts';
 import type { NestStory, VisitStory } from '@/lib/server/demo/story/nest-story';
 import { check } from '@/lib/server/demo/tarrow/check';
 import { MOVED_NESTS } from '@/lib/server/demo/tarrow/moved-nests';
@@ -39,7 +39,14 @@ const TAKE_DOWN: VisitStory = takeDown({
 
 const CHECKS: readonly VisitStory[] = [
   check({ key: 'dawn', by: TOBIAH, at: '2026-06-14T05:30', adults: 1, text: 'On the comb at first light.' }),
-  check({ key: 'day 3', by: TOBIAH, at: '2026-06-16T15:40', adults: 1, text: 'She stayed the third night, and brought prey twice.' }),
+  check({
+    key: 'day 3',
+    by: TOBIAH,
+    at: '2026-06-16T15:40',
+    adults: 1,
+    loads: ['prey return', 'prey return'],
+    text: 'She stayed the third night, and brought prey twice.',
+  }),
   check({
     key: 'day 6',
     by: TOBIAH,
@@ -58,8 +65,12 @@ export const N11: NestStory = {
   openedBy: TOBIAH,
   openedAt: '2026-06-10T10:00',
   acts: [
-    note('2026-06-10T10:20', 'nest', 'Reported twice on one day; the calls are joined here. H3 lies 12.27 km off, bearing 100°.'),
-    field('2026-06-11T18:20', 'nest', 'host', 'H3'),
+    note(
+      '2026-06-10T10:20',
+      'nest',
+      'Reported twice on one day; the calls are joined here. H3 lies 12.27 km off, bearing 100°.',
+    ),
+    nestField('2026-06-11T18:20', 'host', 'H3'),
   ],
   visits: [TAKE_DOWN, ...CHECKS],
   decisions: [],

@@ -14,10 +14,25 @@ export const N12_DECISIONS: readonly DecisionStory[] = [
     act: {
       kind: 'settle',
       cells: [
-        { q: -1, r: 0, state: 'parasitised', reason: 'The field photo shows a pierced cap; from above, in the lab photo, it looks whole.' },
+        {
+          q: -1,
+          r: 0,
+          state: 'parasitised',
+          reason: 'The field photo shows a pierced cap; from above, in the lab photo, it looks whole.',
+        },
         { q: 0, r: 2, state: 'large', reason: 'The face fills the mouth of the cell in both photos.' },
-        { q: -2, r: 0, state: 'small', reason: 'Still attached and under a third of the cell: the lens at the nest saw deeper than the photo.' },
-        { q: -3, r: 2, state: 'egg', reason: 'An egg on the upper wall in the lab photo; missed against the light in the field.' },
+        {
+          q: -2,
+          r: 0,
+          state: 'small',
+          reason: 'Still attached and under a third of the cell: the lens at the nest saw deeper than the photo.',
+        },
+        {
+          q: -3,
+          r: 2,
+          state: 'egg',
+          reason: 'An egg on the upper wall in the lab photo; missed against the light in the field.',
+        },
       ],
     },
   },
@@ -33,7 +48,8 @@ export const N12_DECISIONS: readonly DecisionStory[] = [
     leaves: { version: 2, lockedVersion: 1 },
     act: {
       kind: 'amend',
-      reason: 'The face photo of 26 June shows a different female: a usurper. The cells stand; the brood after that day may be hers.',
+      reason:
+        'The face photo of 26 June shows a different female: a usurper. The cells stand; the brood after that day may be hers.',
     },
   },
   {

@@ -1,5 +1,5 @@
 import 'server-only';
-import { field, note, step } from '@/lib/server/demo/story/acts';
+import { nestField, note, step } from '@/lib/server/demo/story/acts';
 import type { NestStory, VisitStory } from '@/lib/server/demo/story/nest-story';
 import { check } from '@/lib/server/demo/tarrow/check';
 import { N12_MEASURED } from '@/lib/server/demo/tarrow/moved-nests';
@@ -47,7 +47,14 @@ const TAKE_DOWN: VisitStory = takeDown({
 const CHECKS: readonly VisitStory[] = [
   check({ key: 'dawn', by: SENNA, at: '2026-06-18T05:35', adults: 1, text: 'On the comb at first light.' }),
   check({ key: 'day 3', by: SENNA, at: '2026-06-20T16:05', adults: 1, text: 'She stayed the third night.' }),
-  check({ key: 'day 7', by: SENNA, at: '2026-06-24T15:20', adults: 1, text: 'Prey once, pulp once. The first female by her face.' }),
+  check({
+    key: 'day 7',
+    by: SENNA,
+    at: '2026-06-24T15:20',
+    adults: 1,
+    loads: ['prey return', 'pulp return'],
+    text: 'Prey once, pulp once. The first female by her face.',
+  }),
   check({
     key: 'day 9',
     by: SENNA,
@@ -67,8 +74,12 @@ export const N12: NestStory = {
   openedBy: SENNA,
   openedAt: '2026-06-14T13:25',
   acts: [
-    note('2026-06-14T13:28', 'nest', 'Over the steps of the bandstand; concerts begin on 20 June. H4 lies 7.07 km off, bearing 30°.'),
-    field('2026-06-15T18:00', 'nest', 'host', 'H4'),
+    note(
+      '2026-06-14T13:28',
+      'nest',
+      'Over the steps of the bandstand; concerts begin on 20 June. H4 lies 7.07 km off, bearing 30°.',
+    ),
+    nestField('2026-06-15T18:00', 'host', 'H4'),
   ],
   visits: [TAKE_DOWN, ...CHECKS],
   decisions: N12_DECISIONS,

@@ -1,0 +1,96 @@
+import type { Metadata } from 'next';
+import type { ReactElement } from 'react';
+import { BroodSection } from '@/components/lab/brood-section';
+import { CombColumn } from '@/components/lab/comb-column';
+import { FlagsList } from '@/components/lab/flags-list';
+import { HistoryList } from '@/components/lab/history-list';
+import { nestLine, placeWords } from '@/components/lab/lab-words';
+import { NestTitle } from '@/components/lab/nest-title';
+import { NoReading } from '@/components/lab/no-reading';
+import { OutcomeBlock } from '@/components/lab/outcome-block';
+import { ReadingList } from '@/components/lab/reading-list';
+import { WhenBlock } from '@/components/lab/when-block';
+import { settles } from '@/components/shell/role-words';
+import { dateWords } from '@/components/ui/date-words';
+import { Section } from '@/components/ui/section';
+import { requirePage } from '@/lib/server/auth/current-session';
+import { nestDetail } from '@/lib/server/queries/nest-detail';
+import { foundOrAway } from '@/app/(lab)/problem-code';
+import { nestPageData } from './nest-page-data';
+
+interface NestPageProps {
+  params: Promise<{ id: string }>;
+  searchParams: Promise<{ reading?: string | string[] }>;
+}
+
+/** The browser's title: code and name. */
+export async function generateMetadata({ params }: NestPageProps): Promise<Metadata> {
+  const session = await requirePage('nests.read');
+  const { id } = await params;
+  return { title: nestLine(await foundOrAway(nestDetail(session, id))) };
+}
+
+/** One nest: its comb, when its brood was laid and comes out, its visits, and what the lab decided. */
+export default async function NestPage({ params, searchParams }: NestPageProps): Promise<ReactElement> {
+  const session = await requirePage('nests.read');
+  const [{ id }, { reading: asked }] = await Promise.all([params, searchParams]);
+  const data = await foundOrAway(nestPageData(session, id, typeof asked === 'string' ? asked : undefined));
+  const { nest, shown, review, estimate, asOf, outcome } = data;
+  const { zone, role } = session;
+  return (
+    <>
+      <NestTitle {...nest} />
+      <div className="grid gap-x-10 gap-y-8 lg:grid-cols-[28rem_minmax(0,1fr)] print:block">
+        <div className="min-w-0 self-start lg:sticky lg:top-4">
+          {shown ? (
+            <CombColumn
+              code={nest.code}
+              reading={shown.reading}
+              visitAt={shown.visitAt}
+              settlements={shown.reading.kind === 'final' ? (review?.settlements ?? []) : []}
+              estimates={estimate.cells}
+              zone={zone}
+              year={asOf}
+            />
+          ) : (
+            <NoReading hidden={nest.visits.some(({ readings }) => readings.length > 0)} />
+          )}
+        </div>
+        <div className="min-w-0 print:mt-6">
+          <Section id="when" title="When" aside={`as known on ${dateWords(asOf, data.today)}`}>
+            <WhenBlock estimate={estimate} year={asOf} />
+            <FlagsList flags={estimate.flags} />
+          </Section>
+          <BroodSection estimate={estimate} asOf={asOf} />
+          <Section id="visits" title="Visits and readings" className="mt-8">
+            {nest.visits.length === 0 ? (
+              <p className="text-quiet">No visit yet.</p>
+            ) : (
+              <ReadingList
+                nest={nest.id}
+                visits={nest.visits}
+                shown={shown?.reading.id ?? null}
+                zone={zone}
+                year={asOf}
+                settles={settles(role)}
+              />
+            )}
+          </Section>
+          {review && (
+            <Section id="decided" title="Settled in the lab" className="mt-8">
+              <HistoryList review={review} zone={zone} year={asOf} />
+            </Section>
+          )}
+          {outcome && (
+            <Section id="outcome" title="Outcome" className="mt-8">
+              <OutcomeBlock outcome={outcome} />
+            </Section>
+          )}
+          <Section id="place" title="Where it hung" className="mt-8">
+            <p>{nest.place ? placeWords(nest.place, role === 'researcher') : 'No place was recorded.'}</p>
+          </Section>
+        </div>
+      </div>
+    </>
+  );
+}

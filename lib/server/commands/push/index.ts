@@ -1,0 +1,3 @@
+import 'server-only';
+
+export { applyOps, pushOps } from './push-ops';
