@@ -290,7 +290,7 @@ reset() {
   take_lock
   use_node "$BASE/db" "$DB_PORT"
   stop_node || true
-  rm -rf -- "${NODE_HOME:?}" "$DATA_DIR/db-password" "$DATA_DIR/db-migrate-password"
+  rm -rf -- "${NODE_HOME:?}" "$DATA_DIR/db-password" "$DATA_DIR/db-migrate-password" "$DATA_DIR/epoch"
   if [ "$BASE" != "$DATA_DIR" ]; then rmdir "$BASE" 2>/dev/null || true; fi
   say "deleted $NODE_HOME"
 }

@@ -109,15 +109,7 @@ export function BroodStrips({ strips, asOf }: BroodStripsProps): ReactElement | 
           <svg width="100%" height={ROW_HEIGHT} className="block">
             <TimeGrid scale={scale} height={ROW_HEIGHT} />
             <Strip strip={strip} scale={scale} />
-            <line
-              x1={now}
-              x2={now}
-              y1="0"
-              y2={ROW_HEIGHT}
-              stroke="var(--ink)"
-              strokeWidth="1.5"
-              strokeDasharray="3 2"
-            />
+            {now && <AsOfLine x={now} />}
           </svg>
         </div>
       ))}

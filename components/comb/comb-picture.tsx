@@ -3,7 +3,16 @@ import type { Axial } from '@/lib/comb/axial';
 import { CombCell } from './comb-cell';
 import { CombFrame } from './comb-frame';
 import { CombOverlay } from './comb-overlay';
-import { boxAround, cellsAcross, type CombCellView, hasPedicel, naturalLook, PITCH, rowsOf, SMALLEST_MARKED_CELL } from './comb-view';
+import {
+  boxAround,
+  cellsAcross,
+  type CombCellView,
+  hasPedicel,
+  naturalLook,
+  PITCH,
+  rowsOf,
+  SMALLEST_MARKED_CELL,
+} from './comb-view';
 
 interface CombPictureProps {
   cells: readonly CombCellView[];

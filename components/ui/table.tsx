@@ -12,7 +12,10 @@ interface TableProps {
 /** A dense table that scrolls sideways inside itself when a narrow page can't hold it. */
 export function Table({ caption, scrolls = false, className = '', children }: TableProps): ReactElement {
   return (
-    <div className="overflow-x-auto print:overflow-visible" {...(scrolls && { role: 'group', 'aria-label': caption, tabIndex: 0 })}>
+    <div
+      className="overflow-x-auto print:overflow-visible"
+      {...(scrolls && { role: 'group', 'aria-label': caption, tabIndex: 0 })}
+    >
       <table className={`w-full border-collapse text-left ${className}`}>
         <caption className="sr-only">{caption}</caption>
         {children}

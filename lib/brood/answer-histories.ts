@@ -8,7 +8,7 @@ const QUANTILES = [0.025, 0.1, 0.25, 0.5, 0.75, 0.9, 0.975];
 type Quantiles = Record<string, number>;
 
 /** One record of the batch door's answer. */
-export interface HistoryRow {
+interface HistoryRow {
   name: string;
   /** Null when the model cannot produce the record; so is everything else then. */
   loglik: number | null;

@@ -11,7 +11,7 @@ export interface Sighting {
 }
 
 /** Everything recorded of one cell, oldest first. */
-export interface CellHistory extends Axial {
+interface CellHistory extends Axial {
   sightings: readonly Sighting[];
 }
 

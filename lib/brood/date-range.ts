@@ -6,7 +6,7 @@ import { type DayLaw, quantileDays } from './day-law';
 export const DAY_MS = 86_400_000;
 
 /** How a time in days becomes an instant. */
-export interface DateFrame {
+interface DateFrame {
   /** The instant the days are counted from, epoch milliseconds. */
   at: number;
   zone: string;

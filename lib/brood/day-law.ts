@@ -2,7 +2,7 @@ import type { FactorNode } from './nest-factor';
 import { type PoissonWeights, poissonMean, poissonWeights } from './poisson';
 
 /** Days between two points at which a law is worked out; between them it is taken as a straight line. */
-export const GRID_STEP = 0.25;
+const GRID_STEP = 0.25;
 
 /** A law is followed until it is this complete, well past the outermost quantile shown. */
 const COMPLETE = 1 - 1e-5;

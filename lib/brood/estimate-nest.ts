@@ -17,7 +17,7 @@ import { type BroodSettings, DEFAULT_SETTINGS } from './settings';
 import { type StageGroup, stageGroup } from './stages';
 
 /** Names the method in every answer. */
-export const BROOD_MODEL = { name: 'single-sighting', version: '1.0' } as const;
+const BROOD_MODEL = { name: 'single-sighting', version: '1.0' } as const;
 
 /** Every class that any look shows, once each. */
 function groupsSeen(views: readonly CellView[]): StageGroup[] {

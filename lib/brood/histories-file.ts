@@ -49,7 +49,11 @@ function readTimes(value: unknown, field: string, start: number): number[] {
   return times;
 }
 
-function readRecord(value: unknown, field: string, { model, classes }: { model: CellModel; classes: ReadonlySet<string> }): NamedRecord {
+function readRecord(
+  value: unknown,
+  field: string,
+  { model, classes }: { model: CellModel; classes: ReadonlySet<string> },
+): NamedRecord {
   const record = readObject(value, field);
   const times = readTimes(record.times, `${field}.times`, model.start.time);
   const observations = readList(record.obs, `${field}.obs`, (item, at) => readObservation(item, at, classes));
@@ -70,7 +74,8 @@ function refuseGridOutside({ model, histories, gridTimes }: Omit<HistoriesFile, 
   const start = model.start.time;
   const end = Math.min(...histories.map(({ times }) => times.at(-1) ?? start));
   gridTimes?.forEach((time, i) => {
-    if (time < start || time > end) throw new FieldError(`grid[${i}]`, `must lie between ${start} and the last visits, ${end}`);
+    if (time < start || time > end)
+      throw new FieldError(`grid[${i}]`, `must lie between ${start} and the last visits, ${end}`);
   });
 }
 
@@ -80,7 +85,8 @@ function readHistories(value: unknown): HistoriesFile {
   const classes = recordedClasses(model.confusion);
   const histories = readList(file.histories, 'histories', (item, field) => readRecord(item, field, { model, classes }));
   const readDay = (item: unknown, field: string) => readNumber(item, field, { min: 0, max: LONGEST_DAYS });
-  const forecastDays = file.forecastDays === undefined ? FORECAST_DAYS : readList(file.forecastDays, 'forecastDays', readDay);
+  const forecastDays =
+    file.forecastDays === undefined ? FORECAST_DAYS : readList(file.forecastDays, 'forecastDays', readDay);
   const grid = readGrid(file.grid);
   refuseGridOutside({ model, histories, gridTimes: grid.gridTimes });
   return { model, histories, ...grid, forecastDays };

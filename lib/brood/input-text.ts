@@ -4,7 +4,7 @@ import type { BroodMark, BroodReading } from './input';
 import type { BroodSettings } from './settings';
 
 /** Everything an answer depends on. */
-export interface InputTextParts {
+interface InputTextParts {
   model: { name: string; version: string };
   settings: BroodSettings;
   row: DurationRow;

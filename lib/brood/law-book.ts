@@ -5,7 +5,7 @@ import type { BroodSettings } from './settings';
 import type { StageGroup } from './stages';
 
 /** The laws of one model, worked out when first asked for. */
-export interface LawBook {
+interface LawBook {
   model: NestModel;
   /** The law of each of these classes, by its key. */
   classesOf(groups: readonly StageGroup[]): ReadonlyMap<string, ClassLaw>;

@@ -2,7 +2,7 @@ import type { FactorNode } from './nest-factor';
 import type { PhaseChain } from './phase-chain';
 
 /** Mean and standard deviation of a time, in days. */
-export interface Moments {
+interface Moments {
   mean: number;
   sd: number;
 }

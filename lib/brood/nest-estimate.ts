@@ -21,7 +21,7 @@ export interface NestInput {
 }
 
 /** Have adults come out? An opened cell or one marked as reused says so, in any reading. */
-export function isPastEmergence(views: readonly CellView[]): boolean {
+function isPastEmergence(views: readonly CellView[]): boolean {
   return views.some(({ looked }) => looked.some(({ mark }) => mark.state === 'opened' || mark.reused === true));
 }
 

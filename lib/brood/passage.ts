@@ -1,6 +1,5 @@
 import type { PhaseChain } from './phase-chain';
 import { tick } from './phase-chain';
-import { poissonMean, poissonWeights } from './poisson';
 
 /** The question a passage answers: mass `start` is let go at 0; `arrived` says how much of each phase counts as there. */
 interface Passage {
@@ -27,7 +26,7 @@ function dot(a: Float64Array, b: Float64Array): number {
  *
  * @returns the probability of having arrived after 0, 1, 2, … ticks, ending with 1.
  */
-export function passageByTick(chain: PhaseChain, { start, arrived }: Passage): Float64Array {
+function passageByTick(chain: PhaseChain, { start, arrived }: Passage): Float64Array {
   const mass = new Float64Array(chain.rates.length + 1);
   mass.set(start);
   const values: number[] = [];
@@ -54,17 +53,4 @@ export function passageSince(chain: PhaseChain, from: number, weights: Float64Ar
   const arrived = new Float64Array(chain.rates.length + 1);
   for (let i = 0; i < chain.rates.length; i++) arrived[i + 1] = (arrived[i] ?? 0) + (weights[i] ?? 0);
   return passageByTick(chain, { start, arrived });
-}
-
-/** P(passage takes at most `days`), exact: the ticks within `days` are Poisson. */
-export function passageCdf(chain: PhaseChain, byTick: Float64Array, days: number): number {
-  return days <= 0 ? 0 : poissonMean(byTick, poissonWeights(chain.clock * days));
-}
-
-/** P(each stage, then out of the chain) for a brood laid `age` days ago. */
-export function stageOccupancy(chain: PhaseChain, age: number): number[] {
-  const start = new Float64Array(chain.rates.length);
-  start[0] = 1;
-  const past = chain.starts.slice(1).map((end) => passageCdf(chain, passageTo(chain, start, end), age));
-  return [...past, 0].map((left, stage) => (stage === 0 ? 1 : (past[stage - 1] ?? 1)) - left);
 }

@@ -11,7 +11,7 @@ export interface PhaseChain {
 }
 
 /** A run of phases, `to` not included. */
-export interface PhaseRun {
+interface PhaseRun {
   from: number;
   to: number;
 }

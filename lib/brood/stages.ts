@@ -6,9 +6,6 @@ import type { BroodSettings } from './settings';
 /** The seven stages of development in order. */
 export const STAGES = ['egg', 'L1', 'L2', 'L3', 'L4', 'L5', 'pupa'] as const;
 
-/** One stage of development. */
-export type Stage = (typeof STAGES)[number];
-
 /** A stage as an Erlang law: so many equal phases, so many days in all. */
 export interface StageLaw {
   phases: number;

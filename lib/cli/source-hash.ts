@@ -8,7 +8,6 @@ const SOURCES = [
   'components',
   'fonts',
   'lib',
-  'lib/cli/build-sw.ts',
   'models',
   'public',
   'workers',
@@ -19,8 +18,8 @@ const SOURCES = [
   'tailwind.config.ts',
   'tsconfig.json',
 ];
-/** The other commands are not part of the application, and the build writes the service worker itself. */
-const LEFT_OUT = new Set(['lib/cli', 'public/sw.js', 'public/sw.js.map']);
+/** The build writes the service worker itself. */
+const LEFT_OUT = new Set(['public/sw.js', 'public/sw.js.map']);
 
 function filesUnder(root: string, path: string): string[] {
   const full = join(root, path);

@@ -34,7 +34,13 @@ const op = {
   bodyHash: z.string(),
 };
 
-const pullRow = z.object({ ...op, seq: whole.min(1), actor: z.string(), receivedAt: z.string(), flags: z.array(z.string()) });
+const pullRow = z.object({
+  ...op,
+  seq: whole.min(1),
+  actor: z.string(),
+  receivedAt: z.string(),
+  flags: z.array(z.string()),
+});
 
 /** Answer of a pull. */
 export const PULL_ANSWER = z.object({
@@ -49,7 +55,12 @@ export const PULL_ANSWER = z.object({
 export const HAVE_ANSWER = z.object({ ...ours, have: z.array(z.string()) });
 
 /** Answer of an enrolment. */
-export const ENROL_ANSWER = z.object({ deviceId: z.string(), deviceKey: z.string(), epoch: whole, serverTime: z.string() });
+export const ENROL_ANSWER = z.object({
+  deviceId: z.string(),
+  deviceKey: z.string(),
+  epoch: whole,
+  serverTime: z.string(),
+});
 
 /** Answer of the health route. */
 export const HEALTH_ANSWER = z.object({ ok: z.literal(true), epoch: whole });

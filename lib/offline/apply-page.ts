@@ -16,7 +16,15 @@ export interface Page {
 function remoteOp(row: PullRow, key: string, { answer, now }: Page): LocalOp {
   const { seq, actor, flags, receivedAt: _arrival, ...op } = row;
   const { kind, nest, visit, reading, n } = op;
-  const learnt = { outcome: 'applied' as const, code: null, seq, epoch: answer.epoch, flags, seen: true, triedAt: null };
+  const learnt = {
+    outcome: 'applied' as const,
+    code: null,
+    seq,
+    epoch: answer.epoch,
+    flags,
+    seen: true,
+    triedAt: null,
+  };
   return { key, op, kind, nest, visit, reading, n, state: 'remote', actor, savedAt: now, ...learnt };
 }
 

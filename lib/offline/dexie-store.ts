@@ -6,7 +6,8 @@ import type { Change, OpCounts, Snapshot, Store, StoreMeta } from './store';
 
 const ONLY = 'only';
 
-async function readMeta(db: RecordsDatabase): Promise<StoreMeta | null> {
+/** The meta row; null when there is none. */
+export async function readMeta(db: RecordsDatabase): Promise<StoreMeta | null> {
   return (await db.meta.get(ONLY))?.value ?? null;
 }
 
@@ -27,16 +28,19 @@ async function write(db: RecordsDatabase, change: Change<unknown>): Promise<void
 }
 
 /** The operations in a state, in the order of another field. */
-function inState(db: RecordsDatabase, state: LocalOp['state'], order: 'n' | 'key' | 'seq') {
+export function inState(db: RecordsDatabase, state: LocalOp['state'], order: 'n' | 'key' | 'seq') {
   return db.ops.where(`[state+${order}]`).between([state, Dexie.minKey], [state, Dexie.maxKey]);
 }
 
-async function counts(db: RecordsDatabase): Promise<OpCounts> {
+/** How many operations stand where. */
+export async function countOps(db: RecordsDatabase): Promise<OpCounts> {
   const unseen = (row: LocalOp) => row.state === 'held' && !row.seen;
   const [queued, suspect, refused, setAside] = await Promise.all([
     inState(db, 'queued', 'n').count(),
     inState(db, 'suspect', 'n').count(),
-    inState(db, 'refused', 'n').filter((row) => !row.seen).count(),
+    inState(db, 'refused', 'n')
+      .filter((row) => !row.seen)
+      .count(),
     db.ops.where('outcome').anyOf('quarantined', 'conflict').filter(unseen).count(),
   ]);
   return { queued, suspect, refused, setAside };
@@ -74,7 +78,7 @@ export function dexieStore(db: RecordsDatabase): Store {
       db.ops.where('[state+key]').between(['held', key], ['held', Dexie.maxKey], false).limit(limit).toArray(),
     heldUpTo: (seq, limit) =>
       db.ops.where('[state+seq]').between(['held', 1], ['held', seq], true, true).limit(limit).toArray(),
-    counts: () => db.transaction('r', [db.ops], () => counts(db)),
+    counts: () => db.transaction('r', [db.ops], () => countOps(db)),
     opsOfReading: (reading) => db.ops.where('reading').equals(reading).toArray(),
     opsOfNest: (nest) => db.ops.where('nest').equals(nest).toArray(),
     place: async (reading) => (await db.places.get(reading)) ?? null,

@@ -14,6 +14,8 @@ export interface DrainPorts extends LeasePorts {
   network: Network;
   /** The name the office shows for this phone. */
   label: string;
+  /** May this person's role enrol a phone? Others only read. */
+  enrols: boolean;
   /** Called while a push is on its way, and with null when none is. */
   report(progress: Progress | null): void;
   /** Called after an enrolment, before anything is sent as that device. */

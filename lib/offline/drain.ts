@@ -26,7 +26,10 @@ const LATER: DrainEnd = { kind: 'again', trouble: null, afterMs: null };
 
 /** Notes when the office confirmed that nothing waits. */
 function noteSync(now: number) {
-  return ({ meta }: Snapshot): Change<void> => ({ result: undefined, meta: meta ? { ...meta, lastSync: now } : undefined });
+  return ({ meta }: Snapshot): Change<void> => ({
+    result: undefined,
+    meta: meta ? { ...meta, lastSync: now } : undefined,
+  });
 }
 
 async function finish(ports: DrainPorts): Promise<DrainEnd> {
@@ -58,9 +61,8 @@ export function createDrain(ports: DrainPorts): Drain {
   async function steps(lease: HeldLease, wish: DrainWish): Promise<StepEnd> {
     const meta = await ports.store.readMeta();
     if (!meta) return { kind: 'cleared' };
-    const unknown = meta.deviceId === null && (await ports.store.counts()).queued > 0;
     return (
-      (unknown ? await enrolDevice(ports) : null) ??
+      (meta.deviceId === null && ports.enrols ? await enrolDevice(ports) : null) ??
       (await reoffer(ports, lease)) ??
       (await pushQueue(ports, lease, pace)) ??
       (await retrySuspects(ports, lease, wish.all)) ??

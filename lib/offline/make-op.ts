@@ -31,17 +31,19 @@ function said(body: Record<string, unknown>): { [key: string]: Json } {
   return Object.fromEntries(known) as { [key: string]: Json };
 }
 
+/** An operation whose body hash is not computed yet. */
+export type OpenDraft = Omit<OpDraft, 'bodyHash'>;
+
 /**
- * Makes an operation at the moment it happens: its id, its times, its body hash. Its counters follow when it is saved.
- * The hash is computed here because a database transaction would end while it waits for it.
+ * Begins an operation at the moment it happens: its id and its times. Its counters follow when it is saved.
  *
  * @throws ZodError for a body that the kind does not allow: wrong data made here must not become a record.
  */
-export async function makeOp<K extends OpKind>(maker: OpMaker, request: OpRequest<K>): Promise<OpDraft> {
+export function beginOp<K extends OpKind>(maker: OpMaker, request: OpRequest<K>): OpenDraft {
   const { clock } = maker;
   const now = clock.now();
-  const bare = {
-    v: 1 as const,
+  return {
+    v: 1,
     opId: maker.newId(),
     kind: request.kind,
     kindV: 1,
@@ -52,5 +54,14 @@ export async function makeOp<K extends OpKind>(maker: OpMaker, request: OpReques
     deps: [],
     body: said(OP_BODIES[request.kind].parse(request.body)),
   };
-  return { ...bare, bodyHash: await maker.sha256(hashedText(bare)) };
+}
+
+/** Adds the body hash. This must happen before a transaction is opened, which would end while it waits for it. */
+export async function sealOp({ sha256 }: Pick<OpMaker, 'sha256'>, draft: OpenDraft): Promise<OpDraft> {
+  return { ...draft, bodyHash: await sha256(hashedText(draft)) };
+}
+
+/** Begins and seals an operation. */
+export function makeOp<K extends OpKind>(maker: OpMaker, request: OpRequest<K>): Promise<OpDraft> {
+  return sealOp(maker, beginOp(maker, request));
 }

@@ -1,9 +1,18 @@
 import { ME_ANSWER } from './answer-shapes';
 import { askOffice } from './ask-office';
-import { type DeviceDatabase, type KnownPerson, lastPerson, rememberPerson } from './device-database';
+import {
+  type DeviceDatabase,
+  type KnownPerson,
+  lastPerson,
+  leavingKey,
+  noteLeft,
+  personKey,
+  rememberPerson,
+} from './device-database';
 import { type Network, REQUEST_TIMEOUT_MS } from './network';
 import type { PhoneClock } from './phone-clock';
 import type { Person } from './session-view';
+import { signOutAtOffice } from './sign-out';
 
 /** Whose records to open, and what the office said. */
 export type Opening =
@@ -33,17 +42,29 @@ async function whoIsSignedIn(ports: OpeningPorts): Promise<Person | null | undef
   return { teamId, teamName, zone, userId: user.id, displayName: user.name, role, members };
 }
 
+/** Ends the session of a person who left this phone with no signal. Somebody else's session is left alone. */
+async function finishLeaving(
+  ports: OpeningPorts,
+  signedIn: Person | null | undefined,
+): Promise<Person | null | undefined> {
+  const leaving = await leavingKey(ports.device);
+  if (!signedIn || leaving === null) return signedIn;
+  if (leaving === personKey(signedIn) && !(await signOutAtOffice(ports.network))) return undefined;
+  await noteLeft(ports.device);
+  return leaving === personKey(signedIn) ? null : signedIn;
+}
+
 /**
  * Finds out whose records to open. The office decides who is signed in; without it the last person of this phone goes
  * on. Somebody else's records are never opened: each person has a database of their own.
  */
 export async function openSession(ports: OpeningPorts): Promise<Opening> {
   const last = await lastPerson(ports.device);
-  const signedIn = await whoIsSignedIn(ports);
+  const signedIn = await finishLeaving(ports, await whoIsSignedIn(ports));
   if (signedIn) {
-    const same = last?.teamId === signedIn.teamId && last.userId === signedIn.userId;
+    const former = await ports.device.people.get(personKey(signedIn));
     const person = await rememberPerson(ports.device, signedIn);
-    return { kind: 'confirmed', person, formerRole: same ? last.role : null };
+    return { kind: 'confirmed', person, formerRole: former?.role ?? null };
   }
   if (!last) return { kind: 'nobody', reachable: signedIn === null };
   return { kind: signedIn === null ? 'expired' : 'offline', person: last };

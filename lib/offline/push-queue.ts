@@ -28,7 +28,11 @@ async function setAside(ports: DrainPorts, meta: StoreMeta, { key }: LocalOp): P
 }
 
 /** Narrows down which operation of a batch the office fails over. */
-async function blame(ports: DrainPorts, batch: readonly LocalOp[], at: { meta: StoreMeta; pace: PushPace }): Promise<Sent> {
+async function blame(
+  ports: DrainPorts,
+  batch: readonly LocalOp[],
+  at: { meta: StoreMeta; pace: PushPace },
+): Promise<Sent> {
   const [first] = batch;
   if (!first || batch.length > 1) return { pace: slower(at.pace, batch.length), settled: 0, end: null };
   const end = await setAside(ports, at.meta, first);
@@ -36,7 +40,11 @@ async function blame(ports: DrainPorts, batch: readonly LocalOp[], at: { meta: S
 }
 
 /** Sends one batch and settles what the office says about it. */
-async function sendBatch(ports: DrainPorts, batch: readonly LocalOp[], at: { meta: StoreMeta; pace: PushPace }): Promise<Sent> {
+async function sendBatch(
+  ports: DrainPorts,
+  batch: readonly LocalOp[],
+  at: { meta: StoreMeta; pace: PushPace },
+): Promise<Sent> {
   const { meta, pace } = at;
   const { verdict, now, skewMs } = await askOffice(ports, pushRequest(batch, meta), PUSH_ANSWER);
   if (verdict.kind === 'ok') {

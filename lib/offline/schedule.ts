@@ -1,6 +1,7 @@
 import type { Random } from '@/lib/kit/random';
 import type { Drain } from './drain';
 import type { DrainEnd } from './drain-ports';
+import type { Trouble } from './sync-status';
 import { type Timers, sleep } from './timers';
 
 /** Something that may mean the network is back. */
@@ -61,7 +62,16 @@ export function startSchedule(ports: SchedulePorts): Schedule {
   const alarm = waker(ports.timers);
   let stopped = false;
   let failures = 0;
+  let trouble: Trouble | undefined;
   let wish = { all: false };
+
+  /** Another kind of trouble starts anew: an office that fails is at least one that can be reached. */
+  function countFailure(end: DrainEnd): void {
+    const now = end.kind === 'again' ? end.trouble : undefined;
+    const before = now === trouble ? failures : 0;
+    failures = now === undefined ? 0 : before + 1;
+    trouble = now;
+  }
 
   /** Until something waits, or it is time for news. */
   async function idle(): Promise<void> {
@@ -93,7 +103,7 @@ export function startSchedule(ports: SchedulePorts): Schedule {
       const asked = wish;
       wish = { all: false };
       const end = await ports.drain(asked);
-      failures = end.kind === 'again' ? failures + 1 : 0;
+      countFailure(end);
       ports.ended(end);
       if (!alarm.isAwake()) await rest(end).catch(() => alarm.sleep(TICK_MS));
     }

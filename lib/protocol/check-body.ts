@@ -56,6 +56,8 @@ export function checkBody(kind: OpKind, op: Bodied): OpCode | null {
   const parsed = OP_BODIES[kind].safeParse(op.body);
   const further = FURTHER[kind]?.(op) ?? null;
   if (parsed.success) return further;
-  const codes = new Set([...parsed.error.issues.map(codeOfIssue), further]);
+  // The schema knows a field's value only roughly; what its own schema said is more exact.
+  const issues = further ? parsed.error.issues.filter((issue) => issue.path[0] !== 'value') : parsed.error.issues;
+  const codes = new Set([...issues.map(codeOfIssue), further]);
   return BY_WEIGHT.find((code) => codes.has(code)) ?? 'value';
 }

@@ -5,7 +5,6 @@ import type { OpCode } from './op-codes';
 const LONE_SURROGATE = /[\ud800-\udfff]/u;
 
 /** Control characters other than newline and tab: they break CSV and every screen. */
-// eslint-disable-next-line no-control-regex -- finding them is the purpose
 const CONTROL = /[\u0000-\u0008\u000b-\u001f]/;
 
 /** Is this text without lone surrogates and control characters? */

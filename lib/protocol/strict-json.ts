@@ -15,7 +15,6 @@ export interface StrictJson {
 }
 
 const NUMBER = /-?(?:0|[1-9]\d*)(?:\.\d+)?(?:[eE][+-]?\d+)?/y;
-// eslint-disable-next-line no-control-regex -- RFC 8259: a string holds no raw control character
 const STRING = /"(?:[^"\\\u0000-\u001f]|\\(?:["\\/bfnrt]|u[0-9a-fA-F]{4}))*"/y;
 const SPACE = /[ \t\n\r]*/y;
 const WORDS: readonly [string, Json][] = [

@@ -5,7 +5,7 @@ import { join, resolve } from 'node:path';
 
 /** Where this run keeps everything it leaves behind. */
 export function dataDir(): string {
-  return resolve(process.env.DATA_DIR ?? '.data');
+  return resolve(/*turbopackIgnore: true*/ process.env.DATA_DIR ?? '.data');
 }
 
 /** The port of the web server. */
@@ -36,13 +36,15 @@ export function demoWanted(): boolean {
 /** Reads a small secret file of the data folder; null when it does not exist. */
 export function readDataFile(name: string): string | null {
   const path = join(dataDir(), name);
-  return existsSync(path) ? readFileSync(path, 'utf8').trim() : null;
+  return existsSync(/*turbopackIgnore: true*/ path)
+    ? readFileSync(/*turbopackIgnore: true*/ path, 'utf8').trim()
+    : null;
 }
 
 /** Writes a file of the data folder that only its owner may read. */
 export function writeDataFile(name: string, text: string): void {
-  mkdirSync(dataDir(), { recursive: true });
-  writeFileSync(join(dataDir(), name), `${text}\n`, { mode: 0o600 });
+  mkdirSync(/*turbopackIgnore: true*/ dataDir(), { recursive: true });
+  writeFileSync(/*turbopackIgnore: true*/ join(dataDir(), name), `${text}\n`, { mode: 0o600 });
 }
 
 /**

@@ -23,8 +23,8 @@ function stored(name: string) {
       include: [`tests/${name}/**/*.test.ts`],
       setupFiles: [guard, ownDatabase],
       globalSetup: ['tests/support/database-up.ts'],
-      testTimeout: long ? 3_600_000 : 30_000,
-      hookTimeout: 60_000,
+      testTimeout: long ? 3_600_000 : 60_000,
+      hookTimeout: 120_000,
     },
   };
 }

@@ -1,17 +1,23 @@
 import type { ReactElement } from 'react';
+import { Disclosure } from '@/components/ui/disclosure';
 import { Notice } from '@/components/ui/notice';
 
 /** What to settle before going near a nest. The programme's rules and local law come first. */
 export function NearNestCard(): ReactElement {
   return (
     <Notice tone="warn" title="Before you go near">
-      <ul className="ml-5 list-disc">
-        <li>She can sting if the nest is touched. Keep other people 3 m away.</li>
-        <li>Who had a reaction beyond the sting itself, ever, does not come near.</li>
-        <li>Nobody on a ladder alone. No reading on a ladder: come down first.</li>
-        <li>Overhead wires within 3 m, spray seen or smelt, lightning, rain: stop the visit.</li>
-        <li>No written yes of the owner, no permit, or a species that may be introduced: stop the visit.</li>
-      </ul>
+      <p>She can sting if the nest is touched. Keep other people 3 m away. No reading on a ladder.</p>
+      <Disclosure summary="When to stop the visit" className="mt-2">
+        <ul className="ml-5 list-disc">
+          <li>Somebody here, you too, has had a reaction beyond the sting itself, or is not sure.</li>
+          <li>You would be on a ladder alone, or have no way to call for help.</li>
+          <li>Overhead wires within 3 m. Traffic you cannot keep off.</li>
+          <li>Spray seen, smelt or told of in the last week.</li>
+          <li>Lightning, rain, strong wind.</li>
+          <li>No written yes of the owner, or a permit is missing.</li>
+          <li>A species that is or may be introduced, or unknown. It is not moved.</li>
+        </ul>
+      </Disclosure>
       <p className="mt-2 text-quiet">
         Your programme’s stop rules, local law and medical direction come before this list.
       </p>

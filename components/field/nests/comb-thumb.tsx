@@ -8,7 +8,11 @@ export function CombThumb({ marks }: { marks: readonly CombCellView[] }): ReactE
   if (marks.length === 0) return null;
   const box = boxAround(marks);
   return (
-    <svg aria-hidden="true" className="h-24 w-24 shrink-0" viewBox={`${box.x} ${box.y} ${box.width} ${box.height}`}>
+    <svg
+      aria-hidden="true"
+      className="h-24 w-24 shrink-0 self-center"
+      viewBox={`${box.x} ${box.y} ${box.width} ${box.height}`}
+    >
       {marks.map((mark) => (
         <CombCell
           key={cellKey(mark)}

@@ -46,7 +46,7 @@ function CardFrame({ nest, today, picture, children }: CardFrameProps): ReactEle
     <li>
       <a
         href={fieldHref({ kind: 'nest', id: nest.id })}
-        className="flex h-full min-h-key items-center gap-4 rounded-xl border-3 border-ink bg-paper p-4 text-ink no-underline hover:bg-wash"
+        className="flex h-full min-h-key items-start gap-4 rounded-xl border-3 border-ink bg-paper p-4 text-ink no-underline hover:bg-wash"
       >
         <span className="min-w-0 flex-1 [overflow-wrap:anywhere]">
           <span className="block text-[1.375rem] leading-snug font-bold">{nest.name ?? nest.code}</span>

@@ -26,5 +26,5 @@ export function findNests(nests: readonly NestSummary[], words: string): NestSum
 
 /** What a nest is called: its name and code, or the code alone. */
 export function nestTitle({ code, name }: Pick<NestSummary, 'code' | 'name'>): string {
-  return name ? `${name} · ${code}` : code;
+  return name ? `${name} ·\u00a0${code}` : code;
 }

@@ -14,18 +14,30 @@ interface ChoicesProps<T extends string> {
   choices: readonly Choice<T>[];
   value: T;
   onChange: (value: T) => void;
+  /** Beside each other in three columns, for short titles. */
+  inline?: boolean;
 }
 
+const LOOK =
+  'flex min-h-field items-center rounded-xl border-3 border-edge py-2 has-checked:border-main has-checked:bg-main-wash ' +
+  'has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-main';
+
 /** One of a few, each as large as a gloved finger; the chosen one bears a mark and a thick edge, not colour alone. */
-export function Choices<T extends string>({ legend, choices, value, onChange }: ChoicesProps<T>): ReactElement {
+export function Choices<T extends string>({
+  legend,
+  choices,
+  value,
+  onChange,
+  inline = false,
+}: ChoicesProps<T>): ReactElement {
   const name = useId();
   return (
-    <fieldset className="flex flex-col gap-gap">
+    <fieldset className={`grid gap-gap ${inline ? 'grid-cols-3' : ''}`}>
       <legend className="mb-2 font-bold">{legend}</legend>
       {choices.map((choice) => (
         <label
           key={choice.value}
-          className="flex min-h-field items-center gap-4 rounded-xl border-3 border-edge px-4 py-2 has-checked:border-main has-checked:bg-main-wash has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-main"
+          className={`${LOOK} ${inline ? 'justify-center gap-2 px-1 leading-tight' : 'gap-4 px-4'}`}
         >
           <input
             type="radio"

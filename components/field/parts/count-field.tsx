@@ -16,7 +16,11 @@ export function CountField({ value, onChange }: CountFieldProps): ReactElement {
   const id = useId();
   const step = (by: number): void => onChange(readCount(String((value ?? 0) + by)));
   return (
-    <Field id={id} label="How many cells do you count?" hint="Can stay blank. The walk ends at this number.">
+    <Field
+      id={id}
+      label="How many cells do you count?"
+      hint={<span className="text-field">Can stay blank. The walk ends at this number.</span>}
+    >
       {(control) => (
         <div className="flex gap-gap">
           <FieldButton aria-label="One less" onClick={() => step(-1)} className="min-w-field text-2xl">

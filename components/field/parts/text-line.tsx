@@ -29,7 +29,7 @@ export function TextLine({
   type = 'text',
 }: TextLineProps): ReactElement {
   return (
-    <Field id={id} label={label} hint={hint} required={required} error={error}>
+    <Field id={id} label={label} hint={<span className="text-field">{hint}</span>} required={required} error={error}>
       {(control) => (
         <Input
           {...control}

@@ -19,7 +19,7 @@ export function ReadingMap({ reading }: { reading: ReadingView }): ReactElement 
   if (reading.marks.length === 0) return <p>No cell has a mark yet.</p>;
   const words = [countWords(reading.tally.cellsTotal, 'cell'), ...tallyWords(reading.tally)].join(', ');
   return (
-    <div className="flex flex-col gap-3">
+    <div className="flex flex-col gap-3 [&_.comb-label]:text-field">
       <CombPicture cells={cellsOfMarks(reading.marks)} label={`Comb: ${words}`} cellSize={46} />
       <TallyLine tally={reading.tally} />
     </div>

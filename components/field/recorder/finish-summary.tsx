@@ -30,6 +30,7 @@ function useSubmit(submit: () => Promise<void>) {
     setState('saving');
     try {
       await submit();
+      window.scrollTo(0, 0);
       setState('ready');
     } catch {
       setState('failed');

@@ -29,7 +29,9 @@ function NoteField({ desk }: { desk: Desk }): ReactElement {
     <Field
       id="cell-note"
       label="Note"
-      hint={mark ? undefined : 'It is saved with the state you press next for this cell.'}
+      hint={
+        mark ? undefined : <span className="text-field">It is saved with the state you press next for this cell.</span>
+      }
     >
       {(control) => (
         <>

@@ -20,7 +20,7 @@ interface RecorderCombProps {
 
 /** The labels of the frame lie over the corners of the picture: on a phone every row of pixels is a row of cells. */
 const LABELS =
-  'h-full [&>.comb-label]:absolute [&>.comb-label]:z-1 [&>.comb-label]:bg-paper/85 [&>.comb-label]:px-1 ' +
+  'h-full [&>.comb-label]:text-field [&>.comb-label]:absolute [&>.comb-label]:z-1 [&>.comb-label]:bg-paper/85 [&>.comb-label]:px-1 ' +
   '[&>.comb-label:first-child]:top-0 [&>.comb-label:first-child]:left-0 ' +
   '[&>.comb-label:last-child]:bottom-0 [&>.comb-label:last-child]:left-0';
 
@@ -37,7 +37,7 @@ export function RecorderComb({ desk, title, whole, looking, onPress }: RecorderC
     onPress(place);
   };
   return (
-    <div className="relative min-h-36 flex-1 lg:min-h-0">
+    <div className="relative min-h-36 flex-1 has-[[role=alert]]:min-h-56 max-[359px]:has-[[role=alert]]:min-h-72 lg:min-h-0">
       <div className="absolute inset-0">
         <CombDiagram
           cells={cells}

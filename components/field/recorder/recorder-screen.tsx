@@ -44,6 +44,10 @@ export function RecorderScreen({ recorder }: { recorder: Recorder }): ReactEleme
   const desk = useDesk(recorder);
   const { label, reader } = useNestLabel(view.nest);
   const [finishing, setFinishing] = useState(false);
+  const turnTo = (summary: boolean): void => {
+    setFinishing(summary);
+    window.scrollTo(0, 0);
+  };
   useWakeLock();
   useCounted(recorder);
   return (
@@ -56,9 +60,9 @@ export function RecorderScreen({ recorder }: { recorder: Recorder }): ReactEleme
     >
       {reader}
       {finishing ? (
-        <FinishSummary desk={desk} label={label} onBack={() => setFinishing(false)} />
+        <FinishSummary desk={desk} label={label} onBack={() => turnTo(false)} />
       ) : (
-        <RecorderDesk desk={desk} title={label.title} onFinish={() => setFinishing(true)} />
+        <RecorderDesk desk={desk} title={label.title} onFinish={() => turnTo(true)} />
       )}
     </FieldFrame>
   );

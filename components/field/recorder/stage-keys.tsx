@@ -39,7 +39,9 @@ function StageKey({ state, chosen, count, onPress }: StageKeyProps): ReactElemen
       onClick={() => onPress(state)}
       className="relative flex h-[clamp(5.625rem,11.4dvh,7.5rem)] min-w-0 touch-manipulation flex-col overflow-hidden rounded-xl border-3 border-ink bg-paper font-bold select-none active:border-main active:bg-main-wash aria-pressed:outline-4 aria-pressed:-outline-offset-1 aria-pressed:outline-main"
     >
-      <span className={`comb-cell cell-${state} flex w-full flex-1 items-center justify-center bg-[var(--cell)]`}>
+      <span
+        className={`comb-cell cell-${state} flex w-full flex-1 items-center justify-center bg-[var(--cell)] max-[359px]:[&>svg]:size-9`}
+      >
         <CellGlyph state={state} size={52} />
       </span>
       {count > 0 && (
@@ -50,7 +52,9 @@ function StageKey({ state, chosen, count, onPress }: StageKeyProps): ReactElemen
           {count}
         </span>
       )}
-      <span className="w-full border-t-3 border-ink py-0.5 text-xl leading-tight">{KEY_WORDS[state]}</span>
+      <span className="w-full border-t-3 border-ink py-0.5 text-xl leading-tight max-[359px]:text-lg">
+        {KEY_WORDS[state]}
+      </span>
     </button>
   );
 }

@@ -19,7 +19,9 @@ export function ToggleKey({ pressed, onPress, sign, children }: ToggleKeyProps):
       onClick={onPress}
       className="flex min-h-field min-w-0 touch-manipulation items-center justify-center gap-1 rounded-xl border-3 border-dashed border-ink bg-paper px-1 font-bold select-none active:bg-main-wash aria-pressed:border-solid aria-pressed:bg-ink aria-pressed:text-paper"
     >
-      {pressed ? <span aria-hidden="true">✓</span> : sign}
+      <span aria-hidden="true" className="max-[359px]:hidden">
+        {pressed ? '✓' : sign}
+      </span>
       {children}
     </button>
   );

@@ -15,7 +15,7 @@ import { SOURCES } from '@/components/field/words/reading-words';
 import { useCommands } from '@/lib/offline/hooks/use-commands';
 import type { ReadingSummary, VisitView } from '@/lib/offline/nest-view';
 
-const SOURCE_CHOICES = SOURCES.map(({ source, title, hint }) => ({ value: source, title, hint }));
+const SOURCE_CHOICES = SOURCES.map(({ source, title }) => ({ value: source, title }));
 
 interface StartReadingProps {
   visit: VisitView;
@@ -51,7 +51,7 @@ export function StartReading({ visit, open, onClose }: StartReadingProps): React
     <Sheet open={open} title="Start reading" onClose={onClose}>
       <div className="flex flex-col gap-6">
         {source === 'phone' && <ComeDownCard />}
-        <Choices legend="What do you read from?" choices={SOURCE_CHOICES} value={source} onChange={setSource} />
+        <Choices inline legend="What do you read from?" choices={SOURCE_CHOICES} value={source} onChange={setSource} />
         <CountField value={counted} onChange={setCounted} />
         {state === 'failed' && <NotSavedNotice what="the reading" />}
         <FieldButton tone="main" onClick={() => void start(source, counted)} className="text-xl">

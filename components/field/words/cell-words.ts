@@ -30,7 +30,8 @@ export function cellLine({ current, marks, tally, expectedTotal }: RecorderView)
   const progress = progressWords(tally.cellsTotal, expectedTotal);
   if (!current) return progress;
   const mark = marks.get(cellKey(current));
-  return `ring ${ringOf(current)} · ${mark ? markWords(mark) : progress}`;
+  const ring = ringOf(current);
+  return `${ring === 0 ? 'pedicel cell' : `ring ${ring}`} · ${mark ? markWords(mark) : progress}`;
 }
 
 /** What the current cell held at the last visit; blank for a new cell, null when there was no earlier reading. */

@@ -16,10 +16,10 @@ export function purposeWord(purpose: VisitView['purpose']): string {
 
 /** Where the states of a reading come from, with the words on their keys. */
 export const SOURCES = [
-  { source: 'phone', title: 'The comb, here and now', hint: 'You see the cells.' },
-  { source: 'paper', title: 'A paper sheet', hint: 'You copy letters that were written down.' },
-  { source: 'photo', title: 'A photo', hint: 'You read the cells from a picture.' },
-] as const satisfies readonly { source: ReadingSummary['source']; title: string; hint: string }[];
+  { source: 'phone', title: 'The comb' },
+  { source: 'paper', title: 'Paper' },
+  { source: 'photo', title: 'A photo' },
+] as const satisfies readonly { source: ReadingSummary['source']; title: string }[];
 
 const SOURCE_WORDS: Readonly<Record<ReadingSummary['source'], string>> = {
   phone: 'at the comb',

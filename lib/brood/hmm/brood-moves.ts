@@ -3,7 +3,7 @@ import type { PhaseStage } from './stage-fit';
 import { type Move, type Transitions, transitions } from './transitions';
 
 /** The clocks of the model: development runs with temperature, the calendar does not, building has its own hazard. */
-export const CLOCKS = { development: 0, calendar: 1, building: 2 } as const;
+const CLOCKS = { development: 0, calendar: 1, building: 2 } as const;
 
 /** Rates per calendar day of what is not development. */
 export interface CellRates {
@@ -16,7 +16,11 @@ export interface CellRates {
 }
 
 /** Moves into a stage: to its first phase, or to its second where the first is skipped. */
-function entering(source: number, first: number, { stage, clock, rate }: { stage: PhaseStage; clock: number; rate: number }): Move[] {
+function entering(
+  source: number,
+  first: number,
+  { stage, clock, rate }: { stage: PhaseStage; clock: number; rate: number },
+): Move[] {
   const moves = [
     { source, target: first, clock, rate: rate * (1 - stage.skipFirst) },
     { source, target: first + 1, clock, rate: rate * stage.skipFirst },
@@ -31,7 +35,12 @@ function developing(states: BroodStates, generation: number, index: number): Mov
   const { phases, rate } = stage;
   const first = states.phase(generation, index);
   const clock = CLOCKS.development;
-  const within = Array.from({ length: phases - 1 }, (_, i) => ({ source: first + i, target: first + i + 1, clock, rate }));
+  const within = Array.from({ length: phases - 1 }, (_, i) => ({
+    source: first + i,
+    target: first + i + 1,
+    clock,
+    rate,
+  }));
   const last = first + phases - 1;
   const next = states.stages[index + 1];
   const out = next

@@ -20,7 +20,7 @@ export interface BroodStates {
 }
 
 /** How a brood ends: adult emerged, or lost as egg, larva or capped brood. */
-export interface BroodEnds {
+interface BroodEnds {
   emerged: number;
   lostEgg: number;
   lostLarva: number;
@@ -73,7 +73,10 @@ export function broodStates(stages: readonly PhaseStage[], generations: number):
 }
 
 /** Marks the states that `holds` accepts with 1, all others with 0. */
-export function stateSet({ count, keys, generationOf }: BroodStates, holds: (key: string, generation: number) => boolean): Float64Array {
+export function stateSet(
+  { count, keys, generationOf }: BroodStates,
+  holds: (key: string, generation: number) => boolean,
+): Float64Array {
   return Float64Array.from({ length: count }, (_, s) => (holds(keys[s] ?? '', generationOf[s] ?? 0) ? 1 : 0));
 }
 

@@ -7,7 +7,7 @@ import type { Start } from './stations';
 import { type SpeedPiece, keepMoves } from './transitions';
 
 /** What a cell model is made from. */
-export interface CellModelParts {
+interface CellModelParts {
   stages: readonly PhaseStage[];
   generations: number;
   rates: CellRates;
@@ -48,7 +48,10 @@ export function cellModel({ stages, generations, rates, pieces, confusion, t0, s
   return {
     states,
     chain: chainOf(moves, pieces),
-    broodChain: chainOf(keepMoves(moves, (source) => isOccupied(states.keys[source] ?? '')), pieces),
+    broodChain: chainOf(
+      keepMoves(moves, (source) => isOccupied(states.keys[source] ?? '')),
+      pieces,
+    ),
     confusion,
     start: { time: t0, mass },
   };

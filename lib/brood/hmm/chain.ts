@@ -23,7 +23,9 @@ interface Stretch {
 /** Neighbouring pieces with equal speeds as one. */
 function merged(pieces: readonly SpeedPiece[]): SpeedPiece[] {
   const sorted = [...pieces].sort((a, b) => a.from - b.from);
-  return sorted.filter(({ speeds }, i) => i === 0 || speeds.some((speed, clock) => speed !== sorted[i - 1]?.speeds[clock]));
+  return sorted.filter(
+    ({ speeds }, i) => i === 0 || speeds.some((speed, clock) => speed !== sorted[i - 1]?.speeds[clock]),
+  );
 }
 
 /** Cuts a span where the speeds change. Before the first piece its speeds hold already. */

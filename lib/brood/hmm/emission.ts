@@ -54,7 +54,10 @@ export function likelihoodOf(
   if (observation === null) return null;
   const classes = new Set(typeof observation === 'string' ? [observation] : observation);
   const byClass = new Map(
-    Object.entries(confusion).map(([name, row]) => [name, [...classes].reduce((sum, seen) => sum + (row[seen] ?? 0), 0)]),
+    Object.entries(confusion).map(([name, row]) => [
+      name,
+      [...classes].reduce((sum, seen) => sum + (row[seen] ?? 0), 0),
+    ]),
   );
   return Float64Array.from(classOf, (name) => byClass.get(name) ?? 0);
 }

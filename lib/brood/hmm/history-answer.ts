@@ -25,7 +25,10 @@ export interface HistoryAnswer {
 
 /** The visits of a record as stations of the chain. */
 export function visitStations({ states, confusion }: CellModel, { times, observations }: CellRecord): Station[] {
-  return times.map((time, i) => ({ time, likelihood: likelihoodOf(observations[i] ?? null, confusion, states.classes) }));
+  return times.map((time, i) => ({
+    time,
+    likelihood: likelihoodOf(observations[i] ?? null, confusion, states.classes),
+  }));
 }
 
 const IMPOSSIBLE: HistoryAnswer = {

@@ -1,4 +1,12 @@
-import { FieldError, type Fields, readList, readNumber, readObject, readText, readWhole } from '@/lib/brood/file-fields';
+import {
+  FieldError,
+  type Fields,
+  readList,
+  readNumber,
+  readObject,
+  readText,
+  readWhole,
+} from '@/lib/brood/file-fields';
 import { type CellModel, cellModel } from './cell-model';
 import { type Confusion, ConfusionError } from './emission';
 import { type PhaseStage, erlangStage, twoMomentStage } from './stage-fit';
@@ -6,8 +14,11 @@ import type { SpeedPiece } from './transitions';
 
 const CONFUSION = 'confusion_true_to_observed';
 const POSITIVE = { min: 1e-9, max: 1e9 };
-const HAZARD = { min: 0, max: 1e6 };
+
 const MOST_STATES = 5_000;
+/** Faster moves than this a day would need more ticks than any question is worth. */
+const FASTEST = 2_000;
+const HAZARD = { min: 0, max: FASTEST };
 
 /** Reads a list with one member a stage. */
 function readPerStage<T>(
@@ -62,12 +73,14 @@ function readStages(model: Fields): PhaseStage[] {
 function readPieces(value: unknown): SpeedPiece[] {
   const pieces = readList(value, 'model.rates', (item, field) => {
     const [from, rate, ...rest] = readList(item, field, (member, at) => readNumber(member, at));
-    if (from === undefined || rate === undefined || rest.length > 0) throw new FieldError(field, 'must be [fromDay, rate]');
+    if (from === undefined || rate === undefined || rest.length > 0)
+      throw new FieldError(field, 'must be [fromDay, rate]');
     return { from, speeds: [readNumber(rate, `${field}[1]`, HAZARD), 1, 1] };
   });
   if (pieces.length === 0) throw new FieldError('model.rates', 'must hold at least one [fromDay, rate]');
   pieces.forEach(({ from }, i) => {
-    if (from <= (pieces[i - 1]?.from ?? -Infinity)) throw new FieldError(`model.rates[${i}]`, 'must begin later than the one before');
+    if (from <= (pieces[i - 1]?.from ?? -Infinity))
+      throw new FieldError(`model.rates[${i}]`, 'must begin later than the one before');
   });
   return pieces;
 }
@@ -79,6 +92,14 @@ function readConfusion(value: unknown): Confusion {
     return [name, Object.fromEntries(entries.map(([seen, p]) => [seen, readNumber(p, `${field}.${name}.${seen}`)]))];
   });
   return Object.fromEntries(rows);
+}
+
+function refuseTooFast(stages: readonly PhaseStage[], pieces: readonly SpeedPiece[]): void {
+  const speed = Math.max(...pieces.map(({ speeds }) => speeds[0] ?? 0));
+  stages.forEach(({ rate }, i) => {
+    if (rate * speed > FASTEST)
+      throw new FieldError(`model.mean_std_days[${i}]`, `makes more than ${FASTEST} phases a day`);
+  });
 }
 
 /** Builds the model and names the member that a refusal is about. */
@@ -104,6 +125,8 @@ export function readModel(value: unknown): CellModel {
   const generations = readWhole(model.generations, 'model.generations', { min: 1, max: 20 });
   const phases = stages.reduce((sum, stage) => sum + stage.phases, 0);
   if (generations * phases > MOST_STATES) throw new FieldError('model.phases', `make more than ${MOST_STATES} states`);
+  const pieces = readPieces(model.rates);
+  refuseTooFast(stages, pieces);
   const hazard = (name: string) => readHazard(model[name], `model.${name}`);
   return build({
     stages,
@@ -113,7 +136,7 @@ export function readModel(value: unknown): CellModel {
       layFirst: hazard('hazard_built_empty_to_first_egg_per_day'),
       layNext: hazard('hazard_empty_to_next_egg_per_day'),
     },
-    pieces: readPieces(model.rates),
+    pieces,
     confusion: readConfusion(model[CONFUSION]),
     t0: model.t0 === undefined ? 0 : readNumber(model.t0, 'model.t0'),
     startKey: model.start_state === undefined ? 'N' : readText(model.start_state, 'model.start_state'),

@@ -14,7 +14,7 @@ export interface Start {
 }
 
 /** The forward pass. */
-export interface Filtered {
+interface Filtered {
   /** State probabilities at each station given everything up to it. */
   filtered: Float64Array[];
   /** Log-likelihood of everything seen; −∞ when it cannot have happened. */
@@ -61,7 +61,8 @@ export function valueBackward(chain: Chain, terminal: Float64Array, stations: re
   let value = terminal;
   let later: Station | undefined;
   for (const station of [...stations].reverse()) {
-    if (later) value = normalised(chain.backward(weigh(value, later.likelihood), { from: station.time, to: later.time }));
+    if (later)
+      value = normalised(chain.backward(weigh(value, later.likelihood), { from: station.time, to: later.time }));
     values.push(value);
     later = station;
   }

@@ -54,7 +54,11 @@ function tickValue({ moves, stay, go }: Uniformised, value: Float64Array, next: 
 
 type Tick = typeof tickMass;
 
-function poissonSum(chain: Uniformised, vector: Float64Array, { days, tick }: { days: number; tick: Tick }): Float64Array {
+function poissonSum(
+  chain: Uniformised,
+  vector: Float64Array,
+  { days, tick }: { days: number; tick: Tick },
+): Float64Array {
   if (days === 0 || chain.clock === 0) return vector.slice();
   const { first, weights } = poissonWeights(chain.clock * days);
   const sum = new Float64Array(vector.length);

@@ -1,5 +1,23 @@
 'use client';
+
+import { browserFieldApp } from '@/lib/offline/browser-field-app';
 import type { SessionView } from '@/lib/offline/session-view';
-export interface Session { view: SessionView; signOut(): Promise<void>; refresh(): Promise<void> }
+import { useStanding } from './use-standing';
+
+/** Who uses the field app, and what they can do about it. */
+export interface Session {
+  view: SessionView;
+  /** Leaves this phone; unsent records stay on it, closed. Works without signal. */
+  signOut(): Promise<void>;
+  /** Asks the office again who is signed in. */
+  refresh(): Promise<void>;
+}
+
+const signOut = () => browserFieldApp().signOut();
+const refresh = () => browserFieldApp().refresh();
+
 /** Who uses the field app: opens the right person's records, with or without signal. */
-export declare function useSession(): Session;
+export function useSession(): Session {
+  const { view } = useStanding();
+  return { view, signOut, refresh };
+}

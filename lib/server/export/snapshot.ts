@@ -10,6 +10,9 @@ export interface Snapshot {
   close(): Promise<void>;
 }
 
+/** A download whose reader has stalled loses its connection after so long; the others need it. */
+const MOST_IDLE_SECONDS = 300;
+
 /** Opens a snapshot: whatever is pushed or settled meanwhile, all its reads see the same rows. */
 export async function openSnapshot(ctx: TeamContext): Promise<Snapshot> {
   const db = exportDatabase();
@@ -18,9 +21,11 @@ export async function openSnapshot(ctx: TeamContext): Promise<Snapshot> {
   const close = async () => {
     if (!isOpen) return;
     isOpen = false;
-    await transaction.rollback();
+    // A connection that was lost cannot be rolled back; it is not put back into the pool either.
+    await transaction.rollback().catch(() => undefined);
   };
   try {
+    await db.sequelize.query(`SET SESSION idle_transaction_timeout = ${MOST_IDLE_SECONDS}`, { transaction });
     // Starts anew: Sequelize's own BEGIN would only fix the snapshot at the first read.
     await db.sequelize.query('START TRANSACTION WITH CONSISTENT SNAPSHOT, READ ONLY', { transaction });
   } catch (error) {

@@ -17,24 +17,34 @@ async function gather(parts: AsyncIterator<string>): Promise<{ text: string; don
 /**
  * A UTF-8 stream of texts that are only made when the reader asks for more.
  *
- * @param onEnd called once the last text was handed on, making one failed, or the reader went away.
+ * @param onEnd called once: after the last text, when making one failed, or when the reader went away.
  */
 export function textStream(parts: AsyncGenerator<string>, onEnd: (error?: unknown) => Promise<void>): ReadableStream<Uint8Array> {
   const encoder = new TextEncoder();
+  let isOver = false;
+  const end = async (error?: unknown) => {
+    if (isOver) return;
+    isOver = true;
+    await onEnd(error);
+  };
   return new ReadableStream({
     async pull(controller) {
       try {
         const { text, done } = await gather(parts);
+        // The reader may have gone away meanwhile; then nothing can be handed on any more.
+        if (isOver) return;
         if (text !== '') controller.enqueue(encoder.encode(text));
         if (!done) return;
-        await onEnd();
+        await end();
         controller.close();
       } catch (error) {
-        await onEnd(error);
+        await end(error);
         throw error;
       }
     },
     async cancel() {
+      isOver = true;
+      // Waits for the part that is being made, so that nothing is read on a connection that was given back.
       await parts.return(undefined);
       await onEnd();
     },

@@ -23,6 +23,9 @@ import { countRows } from './count-rows';
 /** Cells by state of the eight nests that were read on a visit of their own, by hand from the season's table. */
 const CELLS = { N01: 14, N02: 19, N03: 23, N06: 34, N07: 58, N09: 28, N10: 29, N11: 31, N12: 33 };
 
+/** A hundred pushes; a busy machine takes its time. */
+const PATIENCE_MS = 240_000;
+
 const contextOf = (team: TeamStory, person: Person) => memberContext(teamId(team), userId(person));
 const nestId = (code: string) => demoId(nestName({ code }));
 
@@ -37,7 +40,7 @@ describe('the demo season in a database', () => {
   beforeAll(async () => {
     expect(await loadDemoSeason((line) => heard.push(line))).toBe(true);
     imke = await contextOf(TARROW, IMKE);
-  });
+  }, PATIENCE_MS);
 
   it('tells each team as it loads it', () => {
     expect(heard).toEqual(['Tarrow County Underhang Trust: 12 nests', 'Ossle Saltmarsh Wasp Circle: 3 nests']);

@@ -5,8 +5,9 @@ import { spiral } from '@/lib/comb/walk';
 import type { BroodEstimate, DateRange, Spread } from '@/lib/brood/answer';
 import { estimateNest } from '@/lib/brood/estimate-nest';
 import type { BroodInput, BroodMark, BroodReading } from '@/lib/brood/input';
-import { passageCdf, passageSince, passageTo } from '@/lib/brood/passage';
+import { passageSince, passageTo } from '@/lib/brood/passage';
 import { equilibriumWeights, phaseChain } from '@/lib/brood/phase-chain';
+import { passageCdf } from '@/tests/unit/brood/passages';
 
 const DAY_MS = 86_400_000;
 const START = Date.parse('2026-05-15T09:00:00Z');

@@ -1,7 +1,9 @@
 import { v7 } from 'uuid';
 import type { CellState } from '@/lib/comb/states';
+import type { Op } from '@/lib/protocol/op';
 import { database } from '@/lib/server/db/database';
 import { toBinary, toBinaryOrNull } from '@/lib/server/db/uuid-binary';
+import { wireOp } from '@/tests/support/wire/wire-op';
 import type { TestTeam } from './make-team';
 
 /** What a test says about one mark. */
@@ -30,6 +32,7 @@ export interface ReadingInput {
   by?: string;
   openedAt?: string;
   submittedAt?: string | null;
+  aid?: string | null;
   marks?: readonly MarkInput[];
 }
 
@@ -41,22 +44,22 @@ async function takeSeqs(team: TestTeam, count: number): Promise<number> {
   return counter.seq - count + 1;
 }
 
-/** Log rows that stand only for the keys that marks and retractions need. */
-async function logRows(team: TestTeam, reading: string, kind: string, opIds: readonly string[]): Promise<number> {
-  const first = await takeSeqs(team, opIds.length);
-  const rows = opIds.map((opId, index) => ({
+/** The log's rows for marks or retractions of a reading; returns the place of the first. */
+async function logRows(team: TestTeam, reading: string, ops: readonly Op[]): Promise<number> {
+  const first = await takeSeqs(team, ops.length);
+  const rows = ops.map((op, index) => ({
     team_id: toBinary(team.teamId),
-    op_id: toBinary(opId),
+    op_id: toBinary(op.opId),
     seq: first + index,
-    kind,
+    kind: op.kind,
     nest_id: null,
     visit_id: null,
     reading_id: toBinary(reading),
     actor_id: toBinary(team.members.technician.userId),
     device_id: null,
     hlc: `1781602867120.${first + index}`,
-    op: '{}',
-    body_hash: Buffer.alloc(32),
+    op: JSON.stringify(op),
+    body_hash: Buffer.from(op.bodyHash, 'hex'),
     flags: '',
     received_at: new Date('2026-06-16T12:00:00Z'),
   }));
@@ -67,7 +70,8 @@ async function logRows(team: TestTeam, reading: string, kind: string, opIds: rea
 /** Puts marks into a reading, in order of their clocks; returns their operation ids. */
 export async function makeMarks(team: TestTeam, reading: string, marks: readonly MarkInput[]): Promise<string[]> {
   const ids = marks.map((mark) => mark.opId ?? v7());
-  const first = await logRows(team, reading, 'cell.mark', ids);
+  const ops = marks.map(({ opId: _, at: __, ...body }, index) => wireOp({ kind: 'cell.mark', opId: ids[index], reading, body }));
+  const first = await logRows(team, reading, ops);
   await database().models.Mark.bulkCreate(
     marks.map((mark, index) => ({
       team_id: toBinary(team.teamId),
@@ -94,7 +98,7 @@ export async function makeMarks(team: TestTeam, reading: string, marks: readonly
 /** Takes a mark back. */
 export async function makeRetraction(team: TestTeam, reading: string, target: string): Promise<void> {
   const opId = v7();
-  const seq = await logRows(team, reading, 'cell.retract', [opId]);
+  const seq = await logRows(team, reading, [wireOp({ kind: 'cell.retract', opId, reading, body: { target } })]);
   await database().models.Retraction.create({
     team_id: toBinary(team.teamId),
     op_id: toBinary(opId),
@@ -116,7 +120,7 @@ export async function makeReading(team: TestTeam, input: ReadingInput): Promise<
     visit_id: toBinary(input.visit),
     kind,
     source: kind === 'field' ? 'phone' : 'photo',
-    aid: null,
+    aid: input.aid ?? null,
     light: null,
     opened_by: toBinary(input.by ?? (kind === 'field' ? technician : reviewer).userId),
     opened_at: new Date(openedAt),

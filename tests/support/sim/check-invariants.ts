@@ -75,7 +75,10 @@ function checkOne(run: Run, { opId, bodyHash, disk }: SavedOp): Violation | null
   const row = onDisk(disk, opId, bodyHash);
   const stays = row?.state === 'suspect' || row?.state === 'refused';
   if (stays && NOT_FOR_THE_OFFICE.test(reasonOf(row))) return null;
-  return { invariant: run.restores > 0 ? 'I10' : 'I2', what: `lost: ${opId} (${row?.kind ?? 'gone'} ${row?.state ?? ''})` };
+  return {
+    invariant: run.restores > 0 ? 'I10' : 'I2',
+    what: `lost: ${opId} (${row?.kind ?? 'gone'} ${row?.state ?? ''})`,
+  };
 }
 
 function checkDelivered(run: Run): Violation[] {
@@ -89,7 +92,12 @@ function checkDelivered(run: Run): Violation[] {
 function checkSame({ server }: Run, { disk }: SimPhone): Violation[] {
   const { meta } = disk;
   if (meta?.epoch !== server.epoch || meta.cursor !== server.data.log.length) {
-    return [{ invariant: 'I9', what: `stands at ${meta?.epoch}:${meta?.cursor}, the office at ${server.epoch}:${server.data.log.length}` }];
+    return [
+      {
+        invariant: 'I9',
+        what: `stands at ${meta?.epoch}:${meta?.cursor}, the office at ${server.epoch}:${server.data.log.length}`,
+      },
+    ];
   }
   const known = new Map(server.data.log.map((row): [string, PullRow] => [row.opId, row]));
   return [...disk.ops.values()]

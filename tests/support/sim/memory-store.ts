@@ -35,12 +35,38 @@ export function memoryStore(disk: MemoryDisk, run: DiskRun = steadyDisk): Store 
       }),
     found: (meta) => run(() => (disk.meta ??= meta)),
     readMeta: () => run(() => disk.meta),
-    queued: (limit) => run(() => disk.select((row) => row.state === 'queued', (row) => row.n, limit)),
-    inState: (state, limit) => run(() => disk.select((row) => row.state === state, (row) => row.n, limit)),
+    queued: (limit) =>
+      run(() =>
+        disk.select(
+          (row) => row.state === 'queued',
+          (row) => row.n,
+          limit,
+        ),
+      ),
+    inState: (state, limit) =>
+      run(() =>
+        disk.select(
+          (row) => row.state === state,
+          (row) => row.n,
+          limit,
+        ),
+      ),
     heldAfter: (key, limit) =>
-      run(() => disk.select((row) => row.state === 'held' && row.key > key, (row) => row.key, limit)),
+      run(() =>
+        disk.select(
+          (row) => row.state === 'held' && row.key > key,
+          (row) => row.key,
+          limit,
+        ),
+      ),
     heldUpTo: (seq, limit) =>
-      run(() => disk.select((row) => row.state === 'held' && row.seq > 0 && row.seq <= seq, (row) => row.seq, limit)),
+      run(() =>
+        disk.select(
+          (row) => row.state === 'held' && row.seq > 0 && row.seq <= seq,
+          (row) => row.seq,
+          limit,
+        ),
+      ),
     counts: () => run(() => countOps(disk)),
     opsOfReading: (reading) => run(() => all().filter((row) => row.reading === reading)),
     opsOfNest: (nest) => run(() => all().filter((row) => row.nest === nest)),

@@ -186,7 +186,7 @@ export class ModelServer {
   }
 
   private unpark(user: string): void {
-    for (let moved = true; moved; ) {
+    for (let moved = true; moved;) {
       moved = false;
       for (const [key, { op, r }] of this.data.aside) {
         if (r !== 'parked' || this.misses(op) || this.row(op.opId)) continue;

@@ -58,7 +58,16 @@ export class SimTab implements Process {
     const raw = { ...memoryStore(disk, connection.run), reopen: connection.reopen };
     this.store = watchStore(raw, timers);
     const network = simNetwork({ world, weather, server, process: this, user, sent });
-    const base = { store: this.store, clock, timers, network, lock: noWebLock, holder: world.id(), label: 'phone' };
+    const base = {
+      store: this.store,
+      clock,
+      timers,
+      network,
+      lock: noWebLock,
+      holder: world.id(),
+      label: 'phone',
+      enrols: true,
+    };
     this.ports = { ...base, report: () => undefined, keepDevice: () => world.wait(this, 5) };
     this.maker = { clock, newId: () => around.newId(this), sha256, skewMs: () => disk.meta?.skewMs ?? null };
   }

@@ -138,7 +138,8 @@ class Run {
     const { world } = this;
     world.later(world.between(500, 9_000), () => {
       if (!tab.alive || world.time > STORM_MS - 2_000) return;
-      if (phone.disk.meta && world.time >= tab.frozenUntil) void tab.record(nextDeed(world, phone.disk, this.weather.poison));
+      if (phone.disk.meta && world.time >= tab.frozenUntil)
+        void tab.record(nextDeed(world, phone.disk, this.weather.poison));
       this.deeds(phone, tab);
     });
   }
@@ -238,7 +239,8 @@ class Run {
 
   private mustBeEmpty(disk: MemoryDisk): void {
     const left = [...disk.ops.values()].filter((row) => row.state === 'queued');
-    for (const row of left) this.violations.push({ invariant: 'I12', what: `still queued after heal: ${row.kind} ${row.key}` });
+    for (const row of left)
+      this.violations.push({ invariant: 'I12', what: `still queued after heal: ${row.kind} ${row.key}` });
   }
 }
 

@@ -59,7 +59,9 @@ export class World {
   id(): string {
     let hex = '';
     while (hex.length < 32) hex += this.below(65_536).toString(16).padStart(4, '0');
-    return [hex.slice(0, 8), hex.slice(8, 12), `7${hex.slice(13, 16)}`, `8${hex.slice(17, 20)}`, hex.slice(20)].join('-');
+    return [hex.slice(0, 8), hex.slice(8, 12), `7${hex.slice(13, 16)}`, `8${hex.slice(17, 20)}`, hex.slice(20)].join(
+      '-',
+    );
   }
 
   /** Makes something happen after `ms`. */

@@ -3,6 +3,7 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, describe, expect, it } from 'vitest';
+import vectors from '@/tests/fixtures/brood/brood-hmm.json';
 
 const folder = mkdtempSync(join(tmpdir(), 'brood-command-'));
 afterAll(() => rmSync(folder, { recursive: true }));
@@ -28,6 +29,15 @@ describe('the brood command', { timeout: 30_000 }, () => {
     const answer = JSON.parse(stdout) as { inputDigest: string; cells: unknown[] };
     expect(answer.cells).toHaveLength(1);
     expect(answer.inputDigest).toMatch(/^[0-9a-f]{64}$/);
+  });
+
+  it('prints the answers to a histories file as JSON', () => {
+    const histories = [{ name: 'single egg', times: [20], obs: ['egg'] }];
+    const { status, stdout } = run(JSON.stringify({ model: vectors.model, histories }), '--histories');
+    expect(status).toBe(0);
+    const [row] = (JSON.parse(stdout) as { histories: { name: string; loglik: number }[] }).histories;
+    expect(row?.name).toBe('single egg');
+    expect(Math.abs((row?.loglik ?? NaN) - (vectors.cases[0]?.loglik ?? NaN))).toBeLessThan(1e-8);
   });
 
   it('leaves with 2 and one line naming the field when the file is malformed', () => {

@@ -1,8 +1,9 @@
 import { describe, expect, it } from 'vitest';
 import facts from '@/tests/fixtures/brood/duration-facts.json';
 import { elapsedMoments } from '@/lib/brood/moments';
-import { passageCdf, passageSince, passageTo, stageOccupancy } from '@/lib/brood/passage';
+import { passageSince, passageTo } from '@/lib/brood/passage';
 import { equilibriumWeights, phaseChain } from '@/lib/brood/phase-chain';
+import { passageCdf, stageOccupancy } from './passages';
 
 const ONE = [{ rate: 1, weight: 1 }];
 

@@ -77,7 +77,13 @@ export default async function ReadingPage({ params }: ReadingPageProps): Promise
         />
       ) : (
         <div className="max-w-[30rem]">
-          <CombInspector cells={cells} label={label} cellSize={size} lines={cellLines(reading.marks, [], year)} tells="its marks and note" />
+          <CombInspector
+            cells={cells}
+            label={label}
+            cellSize={size}
+            lines={cellLines(reading.marks, [], year)}
+            tells="its marks and note"
+          />
           <CombKey cells={cells} className="mt-3" />
         </div>
       )}

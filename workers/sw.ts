@@ -1,0 +1,34 @@
+import { clientsClaim } from 'workbox-core';
+import {
+  type PrecacheEntry,
+  cleanupOutdatedCaches,
+  createHandlerBoundToURL,
+  precacheAndRoute,
+} from 'workbox-precaching';
+import { NavigationRoute, registerRoute } from 'workbox-routing';
+import { answerFromEarlierShell, isBuiltFile, keepEarlierShell } from './earlier-shell';
+
+declare const self: ServiceWorkerGlobalScope & { __WB_MANIFEST: (PrecacheEntry | string)[] };
+
+/** Every path of the phone app is the one page that was built ahead. */
+const FIELD_PATHS = /^\/field(?:\/|$)/;
+
+// Before the new files are stored, so that a page of the version before still finds its own.
+self.addEventListener('install', (event) => event.waitUntil(keepEarlierShell()));
+
+precacheAndRoute(self.__WB_MANIFEST, {
+  cleanURLs: false,
+  directoryIndex: '',
+  ignoreURLParametersMatching: [/^utm_/, /^dpl$/],
+});
+cleanupOutdatedCaches();
+registerRoute(new NavigationRoute(createHandlerBoundToURL('/field'), { allowlist: [FIELD_PATHS] }));
+registerRoute(({ url, sameOrigin }) => sameOrigin && isBuiltFile(url), answerFromEarlierShell);
+
+// The new version takes over when a person asks for it, never by itself: somebody may be reading a comb.
+self.addEventListener('message', (event) => {
+  const data: unknown = event.data;
+  if (typeof data === 'object' && data !== null && 'type' in data && data.type === 'SKIP_WAITING')
+    void self.skipWaiting();
+});
+clientsClaim();
