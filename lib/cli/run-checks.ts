@@ -1,5 +1,5 @@
 import { join } from 'node:path';
-import { type CheckStep, CHECK_STEPS } from './check-steps';
+import { type CheckStep, CHECK_LANES } from './check-steps';
 import { runChild } from './child';
 import type { CommandContext } from './run-command';
 import { type Counts, NOTHING, addCounts } from './counts';
@@ -19,12 +19,17 @@ async function passes({ name, script, args }: CheckStep, { progress, signal }: C
   return code === 0;
 }
 
-/** Runs every check, the rest too after one has failed; each counts as one. */
-export async function runChecks(context: CommandContext, steps: readonly CheckStep[] = CHECK_STEPS): Promise<Counts> {
+async function runLane(lane: readonly CheckStep[], context: CommandContext): Promise<Counts> {
   let counts = NOTHING;
-  for (const step of steps) {
+  for (const step of lane) {
     const passed = await passes(step, context);
     counts = addCounts(counts, { passed: passed ? 1 : 0, failed: passed ? 0 : 1 });
   }
   return counts;
+}
+
+/** Runs every check, the rest too after one has failed; each counts as one. */
+export async function runChecks(context: CommandContext, lanes = CHECK_LANES): Promise<Counts> {
+  const counts = await Promise.all(lanes.map((lane) => runLane(lane, context)));
+  return counts.reduce(addCounts, NOTHING);
 }

@@ -8,7 +8,7 @@ import { parseWall } from './wall-time';
 const wallText = z.string().refine((text) => parseWall(text).ok);
 
 /** The fields with a meaning of their own. Other fields are kept as they come, for a later version to read. */
-export const ENTITY_FIELDS = {
+const ENTITY_FIELDS = {
   nest: { code: nameText.min(1), name: nameText.nullable(), taxon: nameText.nullable(), place: placeValue.nullable() },
   visit: { purpose: z.enum(['take-down', 'check', 'lab', 'other']), startedAt: wallText },
   reading: { aid: nameText.nullable(), light: nameText.nullable() },

@@ -14,7 +14,12 @@ const base = z.union([z.null(), id, z.array(id).max(20)]);
 
 /** The body of every kind of operation, version 1. Unknown members are refused. */
 export const OP_BODIES = {
-  'nest.open': z.strictObject({ code: name.min(1), name: name.nullish(), taxon: name.nullish(), place: place.nullish() }),
+  'nest.open': z.strictObject({
+    code: name.min(1),
+    name: name.nullish(),
+    taxon: name.nullish(),
+    place: place.nullish(),
+  }),
   'visit.open': z.strictObject({ purpose: z.enum(['take-down', 'check', 'lab', 'other']), startedAt: z.string() }),
   'reading.open': z.strictObject({
     kind: z.enum(['field', 'second']),

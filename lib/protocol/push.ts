@@ -7,7 +7,13 @@ export const PUSH_OUTCOMES = ['applied', 'duplicate', 'parked', 'quarantined', '
 export type PushOutcome = (typeof PUSH_OUTCOMES)[number];
 
 /** The outcomes after which the server holds the operation, so the phone may move it out of its queue. */
-export const HELD_OUTCOMES: ReadonlySet<PushOutcome> = new Set(['applied', 'duplicate', 'parked', 'quarantined', 'conflict']);
+export const HELD_OUTCOMES: ReadonlySet<PushOutcome> = new Set([
+  'applied',
+  'duplicate',
+  'parked',
+  'quarantined',
+  'conflict',
+]);
 
 /** The answer about one operation; results follow the order of the request. */
 export interface PushResult {

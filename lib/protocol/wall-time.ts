@@ -50,7 +50,9 @@ function isTimeOfDay(hour: number, minute: number, second: number): boolean {
 export function parseWall(text: string): Result<WallTime, 'time' | 'tz'> {
   const match = text.length <= MAX_LENGTH ? DATE_TIME.exec(text) : null;
   if (!match) return err('time');
-  const [year = 0, month = 0, day = 0, hour = 0, minute = 0, second = 0] = match.slice(1, 7).map((part) => Number(part ?? 0));
+  const [year = 0, month = 0, day = 0, hour = 0, minute = 0, second = 0] = match
+    .slice(1, 7)
+    .map((part) => Number(part ?? 0));
   if (!isDate(year, month, day) || !isTimeOfDay(hour, minute, second)) return err('time');
   const zone = OFFSET_AND_ZONE.exec(text.slice(match[0].length));
   const offset = zone?.[1] === undefined ? 0 : offsetMinutes(zone[1]);

@@ -129,8 +129,8 @@ test.describe('the main job', () => {
       for (const [cell, state] of [[0, 'large larva'], [10, 'capped'], [59, 'egg']] as const) {
         await correctCell(page, cell, state);
       }
-      await page.getByRole('button', { name: /^Save 3 corrections/ }).click();
-      await expect(page.getByText(/3 corrections saved|saved as version 1/i).first()).toBeVisible();
+      await page.getByRole('button', { name: 'Settle 3 cells' }).click();
+      await expect(page.getByRole('heading', { name: `Final reading of ${code}` })).toBeVisible();
       await lab.close();
     });
 
@@ -157,8 +157,8 @@ test.describe('the main job', () => {
 });
 
 async function correctCell(page: Page, cell: number, state: string): Promise<void> {
-  await page.getByRole('button', { name: new RegExp(`^cell ${cell}, `) }).first().click();
-  await page.getByLabel(/^New state/).selectOption({ label: state });
-  await page.getByLabel(/^Reason/).fill('Seen in the photo.');
-  await page.getByRole('button', { name: /^Add/ }).click();
+  await page.getByRole('gridcell', { name: new RegExp(`^cell ${cell}, `) }).click();
+  await page.getByRole('radio', { name: state }).check();
+  await page.getByLabel('Reason').fill('Seen in the photo.');
+  await page.getByRole('button', { name: 'Add to the list' }).click();
 }

@@ -76,7 +76,8 @@ export function authOptions(address: string): AuthOptions {
       },
     },
     logger: {
-      error: (code, metadata) => log({ event: 'next-auth', code, error: metadata instanceof Error ? metadata.name : null }),
+      error: (code, metadata) =>
+        log({ event: 'next-auth', code, error: metadata instanceof Error ? metadata.name : null }),
       warn: (code) => log({ event: 'next-auth', code }),
       debug: () => undefined,
     },

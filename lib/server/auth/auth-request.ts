@@ -29,7 +29,7 @@ const ACTIONS: Readonly<Record<string, readonly string[]>> = {
  *
  * @throws HttpProblem `method` when another method would do, `not-found` otherwise.
  */
-export function checkAction(method: string, parts: readonly string[]): void {
+function checkAction(method: string, parts: readonly string[]): void {
   const action = parts.join('/');
   if (ACTIONS[method]?.includes(action)) return;
   const known = Object.values(ACTIONS).some((actions) => actions.includes(action));

@@ -10,8 +10,7 @@ export const PASSWORD_LENGTH = { min: 15, max: 256 } as const;
 const argon2 = () => import('@node-rs/argon2');
 
 /** A hash that no password opens, for spending the same time on an account that does not exist. */
-const NOBODY =
-  '$argon2id$v=19$m=19456,t=2,p=1$OKaR7/j/W2cLXF9AQUAlpQ$H9KqixIYWpR9uLpovIJb8jS5TUiC1nzQyNMYu1w76IQ';
+const NOBODY = '$argon2id$v=19$m=19456,t=2,p=1$OKaR7/j/W2cLXF9AQUAlpQ$H9KqixIYWpR9uLpovIJb8jS5TUiC1nzQyNMYu1w76IQ';
 
 /** Is the password too long to be hashed? Nothing is ever cut off. */
 export function isTooLong(password: string): boolean {

@@ -21,7 +21,7 @@ const ACCOUNTS: Record<DatabaseRole, { user: string; passwordFile: string }> = {
 };
 
 /** The name of the database this process works on. */
-export function databaseName(): string {
+function databaseName(): string {
   return process.env.DB_NAME ?? 'undereave';
 }
 

@@ -6,20 +6,18 @@ const RETRY_ERRNOS: ReadonlySet<number> = new Set([1213, 1205, 1020, 1047]);
 /** Too many connections, server shutting down, connection killed, disk or table full, read-only. */
 const UNAVAILABLE_ERRNOS: ReadonlySet<number> = new Set([1040, 1053, 1226, 1927, 1021, 1114, 1290, 1836, 3024, 1969]);
 
-/** Errors of Sequelize's pool and of the socket, which carry no useful number. */
-const CONNECTION_NAMES = /^SequelizeConnection|^SequelizeHostNotFound/;
+/** No connection could be had at all: nothing has begun, so asking again at once would only queue up. */
+const NO_CONNECTION = /^SequelizeConnection|^SequelizeHostNotFound/;
+
+/** The connection broke while it was in use. */
 const LOST_CODES: ReadonlySet<string> = new Set([
   'ECONNRESET',
-  'ECONNREFUSED',
   'EPIPE',
-  'ETIMEDOUT',
   'ER_CMD_CONNECTION_CLOSED',
   'ER_SOCKET_UNEXPECTED_CLOSE',
   'ER_CONNECTION_ALREADY_CLOSED',
   'ER_SOCKET_TIMEOUT',
   'ER_UNEXPECTED_PACKET',
-  'ER_GET_CONNECTION_TIMEOUT',
-  'PROTOCOL_CONNECTION_LOST',
 ]);
 
 /** The error the connector reported, beneath Sequelize's wrapping. */
@@ -41,7 +39,7 @@ export function errnoOf(error: unknown): number | null {
 function isConnectionLost(error: unknown): boolean {
   if (!(error instanceof Error)) return false;
   const code: unknown = Reflect.get(causeOf(error), 'code');
-  return CONNECTION_NAMES.test(error.name) || (typeof code === 'string' && LOST_CODES.has(code));
+  return typeof code === 'string' && LOST_CODES.has(code);
 }
 
 /** Is it worth running the whole transaction again? */
@@ -53,10 +51,6 @@ export function isRetryable(error: unknown): boolean {
 /** Is the database away or full, so that the client should come back later? */
 export function isUnavailable(error: unknown): boolean {
   const errno = errnoOf(error);
-  return isRetryable(error) || (errno !== null && UNAVAILABLE_ERRNOS.has(errno));
-}
-
-/** Did a row with this key exist already? */
-export function isDuplicateKey(error: unknown): boolean {
-  return errnoOf(error) === 1062;
+  if (isRetryable(error) || (errno !== null && UNAVAILABLE_ERRNOS.has(errno))) return true;
+  return error instanceof Error && NO_CONNECTION.test(error.name);
 }

@@ -24,7 +24,12 @@ export async function deviceOf(request: Request, ctx: TeamContext, nowMs: number
   if (deviceId === null) return null;
   const device = isUuidText(deviceId)
     ? await database().models.Device.findOne({
-        where: { team_id: toBinary(ctx.teamId), id: toBinary(deviceId), user_id: toBinary(ctx.userId), revoked_at: null },
+        where: {
+          team_id: toBinary(ctx.teamId),
+          id: toBinary(deviceId),
+          user_id: toBinary(ctx.userId),
+          revoked_at: null,
+        },
       })
     : null;
   if (!device) throw new HttpProblem('device-revoked');

@@ -28,6 +28,14 @@ export function methods(handlers: Partial<Record<Exclude<Method, 'HEAD'>, RouteH
   const given: Partial<MethodHandlers> = handlers.GET ? { ...handlers, HEAD: headOf(handlers.GET) } : handlers;
   const allow = METHODS.filter((method) => given[method]).join(', ');
   const refuse: RouteHandler = async () => problemResponse('method', newId(), { headers: { Allow: allow } });
-  const { GET = refuse, HEAD = refuse, POST = refuse, PUT = refuse, PATCH = refuse, DELETE = refuse, OPTIONS = refuse } = given;
+  const {
+    GET = refuse,
+    HEAD = refuse,
+    POST = refuse,
+    PUT = refuse,
+    PATCH = refuse,
+    DELETE = refuse,
+    OPTIONS = refuse,
+  } = given;
   return { GET, HEAD, POST, PUT, PATCH, DELETE, OPTIONS };
 }

@@ -23,7 +23,10 @@ export function queryParams<Name extends string>(url: string, allowed: readonly 
  *
  * @throws HttpProblem `limit` when the text is not a whole number.
  */
-export function clampedInteger(text: string | undefined, range: { min: number; max: number; otherwise: number }): number {
+export function clampedInteger(
+  text: string | undefined,
+  range: { min: number; max: number; otherwise: number },
+): number {
   if (text === undefined) return range.otherwise;
   if (!/^-?\d{1,15}$/.test(text)) throw new HttpProblem('limit');
   return Math.min(range.max, Math.max(range.min, Number(text)));

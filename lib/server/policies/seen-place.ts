@@ -12,7 +12,7 @@ export interface SeenPlace {
 const GRID_PER_DEGREE = 100;
 
 /** Is this role shown the exact place of a nest? Researchers see its grid cell. */
-export function seesExactPlaces(role: Role): boolean {
+function seesExactPlaces(role: Role): boolean {
   return role !== 'researcher';
 }
 

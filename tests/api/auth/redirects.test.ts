@@ -37,7 +37,9 @@ describe('where a sign-in leads (B70)', () => {
     const form = await new Browser().signIn(account.email, PASSWORD, { form: { callbackUrl } });
     expect(form.status).toBe(200);
     expect(new URL(((await form.json()) as { url: string }).url).origin).toBe(OWN);
-    const query = await new Browser().call('GET', 'signin', { query: `?callbackUrl=${encodeURIComponent(callbackUrl)}` });
+    const query = await new Browser().call('GET', 'signin', {
+      query: `?callbackUrl=${encodeURIComponent(callbackUrl)}`,
+    });
     expect(query.status).toBe(302);
     const location = new URL(query.headers.get('location') ?? '', OWN);
     expect([location.origin, location.pathname]).toEqual([OWN, '/sign-in']);
@@ -56,15 +58,15 @@ describe('where a sign-in leads (B70)', () => {
 
 describe('other addresses under /api/auth', () => {
   it.each([
-    ['GET', 'nothing', 404, 'not-found'],
-    ['GET', 'callback/credentials', 405, 'method'],
-    ['GET', 'callback/evil', 404, 'not-found'],
-    ['POST', 'signin/credentials', 404, 'not-found'],
-    ['POST', '_log', 404, 'not-found'],
-    ['PUT', 'session', 405, 'method'],
-  ] as const)('%s %s is a problem, not a failure', async (method, path, status, code) => {
+    ['GET', 'nothing', [404, 'not-found']],
+    ['GET', 'callback/credentials', [405, 'method']],
+    ['GET', 'callback/evil', [404, 'not-found']],
+    ['POST', 'signin/credentials', [404, 'not-found']],
+    ['POST', '_log', [404, 'not-found']],
+    ['PUT', 'session', [405, 'method']],
+  ] as const)('%s %s is a problem, not a failure', async (method, path, expected) => {
     const form = method === 'GET' ? undefined : { x: '1' };
-    expect(await problemOf(await new Browser().call(method, path, { form }))).toEqual([status, code]);
+    expect(await problemOf(await new Browser().call(method, path, { form }))).toEqual(expected);
   });
 
   it.each(['csrf', 'providers', 'session', 'signin', 'signout', 'error'])('GET %s answers', async (path) => {
@@ -73,20 +75,31 @@ describe('other addresses under /api/auth', () => {
     expect(response.headers.get('cache-control')).toBe('no-store');
   });
 
-  it.each([
-    ['a text', 'text/plain', 'x', 415, 'content-type'],
-    ['JSON cut off', 'application/json', '{', 400, 'json'],
-    ['a JSON list', 'application/json', '[]', 400, 'shape'],
-    ['an e-mail that is a list', 'application/json', '{"email":["a","b"]}', 400, 'shape'],
-    ['a password twice', 'application/x-www-form-urlencoded', 'password=a&password=b', 400, 'dup-param'],
-    ['17 KB', 'application/x-www-form-urlencoded', 'x'.repeat(17_000), 413, 'body'],
-  ])('a sign-in with %s is refused', async (_what, type, body, status, code) => {
-    const response = await new Browser().call('POST', 'callback/credentials', { body, headers: { 'content-type': type } });
-    expect(await problemOf(response)).toEqual([status, code]);
+  it.each<[string, { type: string; body: string }, [number, string]]>([
+    ['a text', { type: 'text/plain', body: 'x' }, [415, 'content-type']],
+    ['JSON cut off', { type: 'application/json', body: '{' }, [400, 'json']],
+    ['a JSON list', { type: 'application/json', body: '[]' }, [400, 'shape']],
+    ['an e-mail that is a list', { type: 'application/json', body: '{"email":["a","b"]}' }, [400, 'shape']],
+    [
+      'a password twice',
+      { type: 'application/x-www-form-urlencoded', body: 'password=a&password=b' },
+      [400, 'dup-param'],
+    ],
+    ['17 KB', { type: 'application/x-www-form-urlencoded', body: 'x'.repeat(17_000) }, [413, 'body']],
+  ])('a sign-in with %s is refused', async (_what, { type, body }, expected) => {
+    const response = await new Browser().call('POST', 'callback/credentials', {
+      body,
+      headers: { 'content-type': type },
+    });
+    expect(await problemOf(response)).toEqual(expected);
   });
 
   it('requests of other sites are refused (B71)', async () => {
-    const foreign: Record<string, string>[] = [{ origin: 'https://evil.example' }, { 'sec-fetch-site': 'cross-site' }, { origin: 'null' }];
+    const foreign: Record<string, string>[] = [
+      { origin: 'https://evil.example' },
+      { 'sec-fetch-site': 'cross-site' },
+      { origin: 'null' },
+    ];
     for (const headers of foreign) {
       const response = await new Browser().call('POST', 'callback/credentials', { form: {}, headers });
       expect(await problemOf(response)).toEqual([403, 'csrf']);

@@ -1,4 +1,4 @@
-import { EncryptJWT, SignJWT } from 'jose';
+import { createHmac } from 'node:crypto';
 import { encode } from 'next-auth/jwt';
 import { v7 } from 'uuid';
 import { beforeAll, describe, expect, it, vi } from 'vitest';
@@ -63,7 +63,10 @@ describe('a session', () => {
 
   it('is refused with the next request after the account was disabled or left the team (F58)', async () => {
     const [disabled, left] = [await signedIn(), await signedIn()];
-    await database().models.User.update({ disabled_at: new Date() }, { where: { id: toBinary(disabled.account.userId) } });
+    await database().models.User.update(
+      { disabled_at: new Date() },
+      { where: { id: toBinary(disabled.account.userId) } },
+    );
     await (await sessionOf(left.account)).destroy();
     expect((await me(disabled.cookie)).status).toBe(401);
     expect((await me(left.cookie)).status).toBe(401);
@@ -80,7 +83,11 @@ describe('a session', () => {
   it('with several memberships is in the first team by name', async () => {
     const account = await makeAccount(team.teamId);
     const earlier = await makeTeam({ name: 'Ander' });
-    await database().models.Membership.create({ team_id: toBinary(earlier.teamId), user_id: toBinary(account.userId), role: 'reviewer' });
+    await database().models.Membership.create({
+      team_id: toBinary(earlier.teamId),
+      user_id: toBinary(account.userId),
+      role: 'reviewer',
+    });
     const browser = new Browser();
     await browser.signIn(account.email, PASSWORD);
     expect(await (await me(browser.jar.header())).json()).toMatchObject({ team: { name: 'Ander' }, role: 'reviewer' });
@@ -105,7 +112,10 @@ describe('a session', () => {
 
   it('is shown by next-auth as name and end, nothing else; an ended one as nothing', async () => {
     const { browser, cookie } = await signedIn();
-    expect(await (await browser.call('GET', 'session')).json()).toEqual({ expires: expect.any(String) as string, user: { name: 'Senna' } });
+    expect(await (await browser.call('GET', 'session')).json()).toEqual({
+      expires: expect.any(String) as string,
+      user: { name: 'Senna' },
+    });
     await browser.signOut();
     const replay = await new Browser().call('GET', 'session', { headers: { cookie } });
     expect(await replay.json()).toEqual({});
@@ -132,11 +142,12 @@ describe('a forged session token (B72)', () => {
     const token = await claims();
     await refused(await encode({ token, secret: 'another secret altogether' }));
     await refused(await encode({ token, secret: authSecret(), maxAge: -60 }));
-    const key = new TextEncoder().encode(authSecret().padEnd(32, '0').slice(0, 32));
-    await refused(await new SignJWT(token).setProtectedHeader({ alg: 'HS256' }).sign(key));
-    await refused(await new EncryptJWT(token).setProtectedHeader({ alg: 'dir', enc: 'A256GCM' }).encrypt(key));
-    const none = [{ alg: 'none' }, token].map((part) => Buffer.from(JSON.stringify(part)).toString('base64url')).join('.');
-    await refused(`${none}.`);
+    const signed = (alg: string) =>
+      [{ alg }, token].map((part) => Buffer.from(JSON.stringify(part)).toString('base64url')).join('.');
+    await refused(`${signed('none')}.`);
+    await refused(
+      `${signed('HS256')}.${createHmac('sha256', authSecret()).update(signed('HS256')).digest('base64url')}`,
+    );
     await refused('');
     await refused('%%%');
   });
@@ -145,6 +156,8 @@ describe('a forged session token (B72)', () => {
     const { sid } = await claims();
     const other = await makeTeam({ name: 'Ossle' });
     const sessionId = sid.split('.')[1] ?? '';
-    await refused(await encode({ token: { sub: v7(), sid: formatSid({ teamId: other.teamId, sessionId }) }, secret: authSecret() }));
+    await refused(
+      await encode({ token: { sub: v7(), sid: formatSid({ teamId: other.teamId, sessionId }) }, secret: authSecret() }),
+    );
   });
 });

@@ -93,7 +93,9 @@ describe('signing in', () => {
         const csrfToken = await browser.csrfToken();
         const email = kind === 'known' ? account.email : `nobody${round}@test.example`;
         const start = performance.now();
-        await browser.call('POST', 'callback/credentials', { form: { csrfToken, email, password: 'wrong password here', json: 'true' } });
+        await browser.call('POST', 'callback/credentials', {
+          form: { csrfToken, email, password: 'wrong password here', json: 'true' },
+        });
         times[kind].push(performance.now() - start);
       }
     }
@@ -104,24 +106,29 @@ describe('signing in', () => {
 
   it('without the form’s token opens nothing', async () => {
     const browser = new Browser();
-    const response = await browser.call('POST', 'callback/credentials', { form: { email: account.email, password: PASSWORD, json: 'true' } });
+    const response = await browser.call('POST', 'callback/credentials', {
+      form: { email: account.email, password: PASSWORD, json: 'true' },
+    });
     expect(await response.text()).toContain('csrf=true');
     expect((await me(browser.jar.header())).status).toBe(401);
   });
 
-  it.each([
-    ['a password of 257 characters', () => ({ password: 'x'.repeat(257) }), 400, 'shape'],
-    ['a password of 4,096 characters', () => ({ password: 'x'.repeat(4_096) }), 400, 'shape'],
-    ['a password of 1 MB', () => ({ password: 'x'.repeat(1_000_000) }), 413, 'body'],
-    ['an e-mail with a line break (B69)', () => ({ email: 'a@b.example\r\nBcc: x' }), 400, 'shape'],
-    ['an e-mail of 300 characters', () => ({ email: `${'a'.repeat(300)}@b.example` }), 400, 'shape'],
-  ])('refuses %s before any hashing (B67)', async (_what, form, status, code) => {
-    expect(await problemOf(await new Browser().signIn(account.email, PASSWORD, { form: form() }))).toEqual([status, code]);
+  it.each<[string, () => Record<string, string>, [number, string]]>([
+    ['a password of 257 characters', () => ({ password: 'x'.repeat(257) }), [400, 'shape']],
+    ['a password of 4,096 characters', () => ({ password: 'x'.repeat(4_096) }), [400, 'shape']],
+    ['a password of 1 MB', () => ({ password: 'x'.repeat(1_000_000) }), [413, 'body']],
+    ['an e-mail with a line break (B69)', () => ({ email: 'a@b.example\r\nBcc: x' }), [400, 'shape']],
+    ['an e-mail of 300 characters', () => ({ email: `${'a'.repeat(300)}@b.example` }), [400, 'shape']],
+  ])('refuses %s before any hashing (B67)', async (_what, form, expected) => {
+    expect(await problemOf(await new Browser().signIn(account.email, PASSWORD, { form: form() }))).toEqual(expected);
   });
 
   it('takes a password of 256 characters, emoji and outer spaces as they are (B67)', async () => {
     const password = ` ${'😀'.repeat(254)} `;
-    await database().models.User.update({ password_hash: await hashPassword(password) }, { where: { id: toBinary(account.userId) } });
+    await database().models.User.update(
+      { password_hash: await hashPassword(password) },
+      { where: { id: toBinary(account.userId) } },
+    );
     expect((await new Browser().signIn(account.email, password.trim())).status).toBe(401);
     expect((await new Browser().signIn(account.email, password.slice(0, -1))).status).toBe(401);
     expect((await new Browser().signIn(account.email, password)).status).toBe(200);
@@ -173,8 +180,12 @@ describe('guessing (B80)', () => {
     const { v7 } = await import('uuid');
     const subject = createHash('sha256').update('address:direct').digest();
     const at = new Date();
-    await database().models.LoginAttempt.bulkCreate(Array.from({ length: 300 }, () => ({ id: toBinary(v7()), subject, failed: true, at })));
-    const response = await new Browser().signIn(account.email, PASSWORD, { headers: { 'x-forwarded-for': '203.0.113.7' } });
+    await database().models.LoginAttempt.bulkCreate(
+      Array.from({ length: 300 }, () => ({ id: toBinary(v7()), subject, failed: true, at })),
+    );
+    const response = await new Browser().signIn(account.email, PASSWORD, {
+      headers: { 'x-forwarded-for': '203.0.113.7' },
+    });
     expect(await problemOf(response)).toEqual([429, 'too-many']);
   });
 
@@ -184,6 +195,8 @@ describe('guessing (B80)', () => {
     const { v7 } = await import('uuid');
     const subject = createHash('sha256').update(`account:${email}`).digest();
     const at = new Date();
-    await database().models.LoginAttempt.bulkCreate(Array.from({ length: count }, () => ({ id: toBinary(v7()), subject, failed: true, at })));
+    await database().models.LoginAttempt.bulkCreate(
+      Array.from({ length: count }, () => ({ id: toBinary(v7()), subject, failed: true, at })),
+    );
   }
 });

@@ -29,9 +29,10 @@ afterAll(() => exportDatabase().sequelize.close());
 /** Counts the statements of downloads from now on. */
 function countStatements(): { count: number } {
   const spy = vi.spyOn(exportDatabase().sequelize, 'query');
+  const before = spy.mock.calls.length;
   return {
     get count() {
-      return spy.mock.calls.length;
+      return spy.mock.calls.length - before;
     },
   };
 }

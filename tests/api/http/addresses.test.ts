@@ -27,12 +27,15 @@ describe.each([
   ['me', meRoute, ['GET']],
   ['health', healthRoute, ['GET']],
 ] as const)('%s', (_name, route, allowed) => {
-  it.each(METHODS.filter((method) => !(allowed as readonly string[]).includes(method)))('answers %s with 405 and what it takes (B75)', async (method) => {
-    const response = await callApi(route, method, { as: team.members.technician });
-    expect(response.headers.get('allow')?.split(', ')).toEqual(expect.arrayContaining([...allowed]));
-    expect(response.headers.get('access-control-allow-origin')).toBeNull();
-    expect(await problemOf(response)).toEqual([405, 'method']);
-  });
+  it.each(METHODS.filter((method) => !(allowed as readonly string[]).includes(method)))(
+    'answers %s with 405 and what it takes (B75)',
+    async (method) => {
+      const response = await callApi(route, method, { as: team.members.technician });
+      expect(response.headers.get('allow')?.split(', ')).toEqual(expect.arrayContaining([...allowed]));
+      expect(response.headers.get('access-control-allow-origin')).toBeNull();
+      expect(await problemOf(response)).toEqual([405, 'method']);
+    },
+  );
 });
 
 describe('an address that does not exist', () => {
@@ -40,7 +43,11 @@ describe('an address that does not exist', () => {
     const response = await unknownRoute[method]();
     expect(response.status).toBe(404);
     expect(response.headers.get('content-type')).toBe('application/problem+json');
-    expect(await response.json()).toMatchObject({ type: 'urn:undereave:problem:not-found', code: 'not-found', status: 404 });
+    expect(await response.json()).toMatchObject({
+      type: 'urn:undereave:problem:not-found',
+      code: 'not-found',
+      status: 404,
+    });
   });
 });
 
@@ -49,7 +56,11 @@ describe('every answer', () => {
     const problem = await callApi(meRoute, 'GET');
     const { requestId } = (await problem.clone().json()) as { requestId: string };
     expect(isUuidText(requestId)).toBe(true);
-    for (const response of [problem, await callApi(meRoute, 'GET', { as: team.members.researcher }), await callApi(healthRoute, 'GET')]) {
+    for (const response of [
+      problem,
+      await callApi(meRoute, 'GET', { as: team.members.researcher }),
+      await callApi(healthRoute, 'GET'),
+    ]) {
       expect(response.headers.get('cache-control')).toBe('no-store');
       expect(response.headers.get('x-content-type-options')).toBe('nosniff');
     }
@@ -66,8 +77,14 @@ describe('GET /api/me', () => {
   it('names the person, the team and everyone in it, for every role', async () => {
     for (const member of Object.values(team.members)) {
       const answer = (await (await callApi(meRoute, 'GET', { as: member })).json()) as MeResponse;
-      expect(answer).toMatchObject({ user: { id: member.userId, name: member.name }, role: member.role, team: { id: team.teamId } });
-      expect(new Set(answer.members.map(({ id }) => id))).toEqual(new Set(Object.values(team.members).map(({ userId }) => userId)));
+      expect(answer).toMatchObject({
+        user: { id: member.userId, name: member.name },
+        role: member.role,
+        team: { id: team.teamId },
+      });
+      expect(new Set(answer.members.map(({ id }) => id))).toEqual(
+        new Set(Object.values(team.members).map(({ userId }) => userId)),
+      );
     }
   });
 
@@ -76,6 +93,9 @@ describe('GET /api/me', () => {
     const answer = await (await callApi(meRoute, 'GET', { as: team.members.technician })).text();
     expect(answer).not.toContain('canary');
     expect(answer).not.toContain(other.teamId);
-    expect(await problemOf(await callApi(meRoute, 'GET', { as: team.members.technician, query: 'team=1' }))).toEqual([400, 'param']);
+    expect(await problemOf(await callApi(meRoute, 'GET', { as: team.members.technician, query: 'team=1' }))).toEqual([
+      400,
+      'param',
+    ]);
   });
 });

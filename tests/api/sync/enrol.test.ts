@@ -26,8 +26,15 @@ describe('an enrolment', () => {
     expect(Buffer.from(first?.deviceKey ?? '', 'base64url')).toHaveLength(32);
     expect(first?.deviceId).not.toBe(second?.deviceId);
     expect(first?.deviceKey).not.toBe(second?.deviceKey);
-    const row = await database().models.Device.findOne({ where: { id: toBinary(first?.deviceId ?? '') }, rejectOnEmpty: true });
-    expect(row).toMatchObject({ label: 'Pixel 7 of Senna', revoked_at: null, user_id: toBinary(team.members.technician.userId) });
+    const row = await database().models.Device.findOne({
+      where: { id: toBinary(first?.deviceId ?? '') },
+      rejectOnEmpty: true,
+    });
+    expect(row).toMatchObject({
+      label: 'Pixel 7 of Senna',
+      revoked_at: null,
+      user_id: toBinary(team.members.technician.userId),
+    });
   });
 
   it.each<[unknown, number, string]>([
@@ -43,7 +50,9 @@ describe('an enrolment', () => {
   });
 
   it('is for those who record at the nest or in the lab', async () => {
-    const statuses = await Promise.all(Object.values(team.members).map(async (as) => [as.role, (await enrol({ label: 'x' }, as)).status]));
+    const statuses = await Promise.all(
+      Object.values(team.members).map(async (as) => [as.role, (await enrol({ label: 'x' }, as)).status]),
+    );
     expect(new Map(statuses as [string, number][])).toEqual(
       new Map([
         ['technician', 200],

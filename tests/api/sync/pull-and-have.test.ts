@@ -22,20 +22,35 @@ beforeAll(async () => {
   await push(phone, ops);
 });
 
-const get = (query: string, as = phone.member) => callApi(pullRoute, 'GET', { as, query, headers: as === phone.member ? phone.headers : {} });
+const get = (query: string, as = phone.member) =>
+  callApi(pullRoute, 'GET', { as, query, headers: as === phone.member ? phone.headers : {} });
 
 describe('a pull', () => {
   it('gives every operation as it came, in the order of the log, with what the office knows', async () => {
     const answer = await pull(phone);
     expect(answer).toMatchObject({ protocol: 1, epoch: 1, safeSeq: 0, next: '1:7', more: false });
-    const known = answer.rows.map(({ seq, actor, receivedAt, flags, ...op }) => ({ seq, actor, at: Number.isNaN(Date.parse(receivedAt)), flags, op }));
-    expect(known).toEqual(ops.map((op, index) => ({ seq: index + 1, actor: team.members.technician.userId, at: false, flags: expect.any(Array) as string[], op })));
+    const known = answer.rows.map(({ seq, actor, receivedAt, flags, ...op }) => ({
+      seq,
+      actor,
+      at: Number.isNaN(Date.parse(receivedAt)),
+      flags,
+      op,
+    }));
+    expect(known).toEqual(
+      ops.map((op, index) => ({
+        seq: index + 1,
+        actor: team.members.technician.userId,
+        at: false,
+        flags: expect.any(Array) as string[],
+        op,
+      })),
+    );
   });
 
   it('in pages joins up to the whole (I9)', async () => {
     const rows: PullRow[] = [];
     let cursor: string | null = null;
-    for (let more = true; more; ) {
+    for (let more = true; more;) {
       const page = await pull(phone, `limit=3${cursor === null ? '' : `&cursor=${cursor}`}`);
       rows.push(...page.rows);
       ({ next: cursor, more } = page);
@@ -97,7 +112,8 @@ describe('a pull', () => {
 });
 
 describe('“have you got these?”', () => {
-  const ask = (body: unknown, headers = phone.headers) => callApi(haveRoute, 'POST', { as: phone.member, body, headers });
+  const ask = (body: unknown, headers = phone.headers) =>
+    callApi(haveRoute, 'POST', { as: phone.member, body, headers });
 
   it('names what stands in the log, once each, in the order of the question', async () => {
     const [first, second] = ops;
@@ -128,7 +144,11 @@ describe('“have you got these?”', () => {
   });
 
   it('is not for a coordinator', async () => {
-    const response = await callApi(haveRoute, 'POST', { as: team.members.coordinator, body: { opIds: [] }, headers: phone.headers });
+    const response = await callApi(haveRoute, 'POST', {
+      as: team.members.coordinator,
+      body: { opIds: [] },
+      headers: phone.headers,
+    });
     expect(await problemOf(response)).toEqual([403, 'role']);
   });
 });

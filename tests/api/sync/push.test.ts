@@ -23,42 +23,58 @@ const stored = () => database().models.Op.count({ where: { team_id: toBinary(tea
 const nest = () => wireOp({ kind: 'nest.open', nest: v7(), body: { code: 'N1' } });
 const text = (ops: string) => `{"protocol":1,"schema":1,"epoch":1,"ops":${ops}}`;
 
-/** Bodies that are refused whole: sync.md section 6. */
-const REFUSED: readonly [what: string, body: unknown, headers: Record<string, string>, expected: [number, string]][] = [
-  ['B01 an empty body', '', {}, [400, 'empty']],
-  ['B01 white space', ' \n', {}, [400, 'empty']],
-  ['B02 no JSON', 'ops', {}, [400, 'json']],
-  ['B02 JSON cut off', '{"protocol":1,"ops":[', {}, [400, 'json']],
-  ['B03 a list', '[]', {}, [400, 'shape']],
-  ['B03 a text', '"push"', {}, [400, 'shape']],
-  ['B03 a number', '7', {}, [400, 'shape']],
-  ['B03 null', 'null', {}, [400, 'shape']],
-  ['B04 text/plain', pushBody([]), { 'content-type': 'text/plain' }, [415, 'content-type']],
-  ['B05 UTF-16', pushBody([]), { 'content-type': 'application/json; charset=utf-16' }, [415, 'content-type']],
-  ['B06 257 KB', text(`[${' '.repeat(MAX_BODY_BYTES)}]`), {}, [413, 'body']],
-  ['B06 a length of 1 GB', pushBody([]), { 'content-length': String(2 ** 30) }, [413, 'body']],
-  ['B07 gzip', pushBody([]), { 'content-encoding': 'gzip' }, [415, 'content-type']],
-  ['B08 nested 100,000 deep', '['.repeat(100_000), {}, [400, 'json']],
-  ['B09 a member twice', '{"protocol":1,"protocol":1}', {}, [400, 'dup-key']],
-  ['B09 a member of an operation twice', text('[{"opId":"a","opId":"b"}]'), {}, [400, 'dup-key']],
-  ['B10 __proto__ in the envelope', '{"__proto__":{"x":1},"protocol":1,"schema":1,"epoch":1,"ops":[]}', {}, [400, 'unknown-field']],
-  ['B10 constructor in the envelope', pushBody([], { constructor: { prototype: 1 } }), {}, [400, 'unknown-field']],
-  ['B11 a team in the envelope', pushBody([], { teamId: v7() }), {}, [400, 'unknown-field']],
-  ['B12 101 operations', pushBody(Array(101).fill(null)), {}, [413, 'batch']],
-  ['B25 NaN', text('[{"q":NaN}]'), {}, [400, 'json']],
-  ['B25 Infinity', text('[-Infinity]'), {}, [400, 'json']],
-  ['B26 an epoch of 1e309', '{"protocol":1,"schema":1,"epoch":1e309,"ops":[]}', {}, [400, 'shape']],
-  ['a protocol of 2', pushBody([], { protocol: 2 }), {}, [400, 'shape']],
-  ['no operations at all', { protocol: 1, schema: 1, epoch: 1 }, {}, [400, 'shape']],
-  ['operations that are no list', pushBody([], { ops: {} }), {}, [400, 'shape']],
-  ['an epoch in words', pushBody([], { epoch: '1' }), {}, [400, 'shape']],
-  ['B71 without X-Sync', pushBody([]), { 'x-sync': '0' }, [403, 'csrf']],
-  ['B71 from another origin', pushBody([]), { origin: 'https://evil.example' }, [403, 'csrf']],
-  ['B71 from another site', pushBody([]), { 'sec-fetch-site': 'cross-site' }, [403, 'csrf']],
+/** Bodies that are refused whole, by their number in the catalogue of bad input. */
+const REFUSED: readonly [
+  what: string,
+  sent: { body: unknown; headers?: Record<string, string> },
+  expected: [number, string],
+][] = [
+  ['B01 an empty body', { body: '' }, [400, 'empty']],
+  ['B01 white space', { body: ' \n' }, [400, 'empty']],
+  ['B02 no JSON', { body: 'ops' }, [400, 'json']],
+  ['B02 JSON cut off', { body: '{"protocol":1,"ops":[' }, [400, 'json']],
+  ['B03 a list', { body: '[]' }, [400, 'shape']],
+  ['B03 a text', { body: '"push"' }, [400, 'shape']],
+  ['B03 a number', { body: '7' }, [400, 'shape']],
+  ['B03 null', { body: 'null' }, [400, 'shape']],
+  ['B04 text/plain', { body: pushBody([]), headers: { 'content-type': 'text/plain' } }, [415, 'content-type']],
+  [
+    'B05 UTF-16',
+    { body: pushBody([]), headers: { 'content-type': 'application/json; charset=utf-16' } },
+    [415, 'content-type'],
+  ],
+  ['B06 257 KB', { body: text(`[${' '.repeat(MAX_BODY_BYTES)}]`) }, [413, 'body']],
+  ['B06 a length of 1 GB', { body: pushBody([]), headers: { 'content-length': String(2 ** 30) } }, [413, 'body']],
+  ['B07 gzip', { body: pushBody([]), headers: { 'content-encoding': 'gzip' } }, [415, 'content-type']],
+  ['B08 nested 100,000 deep', { body: '['.repeat(100_000) }, [400, 'json']],
+  ['B09 a member twice', { body: '{"protocol":1,"protocol":1}' }, [400, 'dup-key']],
+  ['B09 a member of an operation twice', { body: text('[{"opId":"a","opId":"b"}]') }, [400, 'dup-key']],
+  [
+    'B10 __proto__ in the envelope',
+    { body: '{"__proto__":{"x":1},"protocol":1,"schema":1,"epoch":1,"ops":[]}' },
+    [400, 'unknown-field'],
+  ],
+  [
+    'B10 constructor in the envelope',
+    { body: pushBody([], { constructor: { prototype: 1 } }) },
+    [400, 'unknown-field'],
+  ],
+  ['B11 a team in the envelope', { body: pushBody([], { teamId: v7() }) }, [400, 'unknown-field']],
+  ['B12 101 operations', { body: pushBody(Array(101).fill(null)) }, [413, 'batch']],
+  ['B25 NaN', { body: text('[{"q":NaN}]') }, [400, 'json']],
+  ['B25 Infinity', { body: text('[-Infinity]') }, [400, 'json']],
+  ['B26 an epoch of 1e309', { body: '{"protocol":1,"schema":1,"epoch":1e309,"ops":[]}' }, [400, 'shape']],
+  ['a protocol of 2', { body: pushBody([], { protocol: 2 }) }, [400, 'shape']],
+  ['no operations at all', { body: { protocol: 1, schema: 1, epoch: 1 } }, [400, 'shape']],
+  ['operations that are no list', { body: pushBody([], { ops: {} }) }, [400, 'shape']],
+  ['an epoch in words', { body: pushBody([], { epoch: '1' }) }, [400, 'shape']],
+  ['B71 without X-Sync', { body: pushBody([]), headers: { 'x-sync': '0' } }, [403, 'csrf']],
+  ['B71 from another origin', { body: pushBody([]), headers: { origin: 'https://evil.example' } }, [403, 'csrf']],
+  ['B71 from another site', { body: pushBody([]), headers: { 'sec-fetch-site': 'cross-site' } }, [403, 'csrf']],
 ];
 
 describe('a push that is refused whole', () => {
-  it.each(REFUSED)('%s', async (_what, body, headers, expected) => {
+  it.each(REFUSED)('%s', async (_what, { body, headers }, expected) => {
     const before = await stored();
     const response = await postPush(phone, body, headers);
     expect(response.headers.get('content-type')).toBe('application/problem+json');
@@ -69,7 +85,12 @@ describe('a push that is refused whole', () => {
 
   it('B02 with bytes that are no UTF-8', async () => {
     const bytes = new Uint8Array([0x22, 0xc3, 0x28, 0x22]);
-    const headers = { cookie: phone.member.cookie, 'x-sync': '1', 'content-type': 'application/json', ...phone.headers };
+    const headers = {
+      cookie: phone.member.cookie,
+      'x-sync': '1',
+      'content-type': 'application/json',
+      ...phone.headers,
+    };
     const request = new Request('http://127.0.0.1:3000/api/sync/v1/push', { method: 'POST', headers, body: bytes });
     expect(await problemOf(await pushRoute.POST(request))).toEqual([400, 'json']);
   });
@@ -82,7 +103,12 @@ describe('a push that is refused whole', () => {
         controller.enqueue(new Uint8Array(16_384).fill(0x20));
       },
     });
-    const headers = { cookie: phone.member.cookie, 'x-sync': '1', 'content-type': 'application/json', ...phone.headers };
+    const headers = {
+      cookie: phone.member.cookie,
+      'x-sync': '1',
+      'content-type': 'application/json',
+      ...phone.headers,
+    };
     const init = { method: 'POST', headers, body: endless, duplex: 'half' };
     const response = await pushRoute.POST(new Request('http://127.0.0.1:3000/api/sync/v1/push', init));
     expect(await problemOf(response)).toEqual([413, 'body']);
@@ -93,7 +119,12 @@ describe('a push that is refused whole', () => {
   it('names the epoch of the office when the phone has another (409)', async () => {
     const response = await postPush(phone, pushBody([nest()], { epoch: 7 }));
     expect(response.status).toBe(409);
-    expect(await response.json()).toMatchObject({ status: 409, code: 'epoch-mismatch', epoch: 1, requestId: expect.any(String) });
+    expect(await response.json()).toMatchObject({
+      status: 409,
+      code: 'epoch-mismatch',
+      epoch: 1,
+      requestId: expect.any(String),
+    });
   });
 });
 
@@ -101,16 +132,25 @@ describe('who may push', () => {
   it('needs a session (401), a right (403 role) and an enrolled device', async () => {
     const body = pushBody([]);
     const { coordinator, researcher, technician, technician2, reviewer } = team.members;
-    expect(await problemOf(await callApi(pushRoute, 'POST', { body, headers: phone.headers }))).toEqual([401, 'signin']);
+    expect(await problemOf(await callApi(pushRoute, 'POST', { body, headers: phone.headers }))).toEqual([
+      401,
+      'signin',
+    ]);
     for (const as of [coordinator, researcher]) {
-      expect(await problemOf(await callApi(pushRoute, 'POST', { as, body, headers: phone.headers }))).toEqual([403, 'role']);
+      expect(await problemOf(await callApi(pushRoute, 'POST', { as, body, headers: phone.headers }))).toEqual([
+        403,
+        'role',
+      ]);
     }
     expect(await problemOf(await callApi(pushRoute, 'POST', { as: technician, body }))).toEqual([400, 'device']);
     for (const device of ['phone', v7()]) {
       expect(await problemOf(await postPush(phone, body, { 'x-device': device }))).toEqual([403, 'device-revoked']);
     }
     for (const as of [technician2, reviewer]) {
-      expect(await problemOf(await callApi(pushRoute, 'POST', { as, body, headers: phone.headers }))).toEqual([403, 'device-revoked']);
+      expect(await problemOf(await callApi(pushRoute, 'POST', { as, body, headers: phone.headers }))).toEqual([
+        403,
+        'device-revoked',
+      ]);
     }
   });
 
@@ -154,8 +194,19 @@ describe('a push that is taken', () => {
 
   it('sets aside prototypes and further members inside an operation (B10, B11)', async () => {
     const op = JSON.stringify(nest());
-    const members = ['"__proto__":{"polluted":true}', '"constructor":{"prototype":{}}', '"teamId":"x"', '"actor":"x"', '"role":"x"', '"seq":1', '"reviewed":true'];
-    const response = await postPush(phone, text(`[${members.map((member) => op.replace('{', `{${member},`)).join(',')}]`));
+    const members = [
+      '"__proto__":{"polluted":true}',
+      '"constructor":{"prototype":{}}',
+      '"teamId":"x"',
+      '"actor":"x"',
+      '"role":"x"',
+      '"seq":1',
+      '"reviewed":true',
+    ];
+    const response = await postPush(
+      phone,
+      text(`[${members.map((member) => op.replace('{', `{${member},`)).join(',')}]`),
+    );
     const { results } = (await response.json()) as { results: { r: string; code: string }[] };
     expect(results.map(({ r, code }) => `${r} ${code}`)).toEqual(members.map(() => 'quarantined unknown-field'));
     expect('polluted' in {}).toBe(false);
@@ -164,7 +215,9 @@ describe('a push that is taken', () => {
   it('notes which device sent it, whatever the operation says', async () => {
     const op = nest();
     await push(phone, [op]);
-    const row = await database().models.Op.findOne({ where: { team_id: toBinary(team.teamId), op_id: toBinary(op.opId) } });
+    const row = await database().models.Op.findOne({
+      where: { team_id: toBinary(team.teamId), op_id: toBinary(op.opId) },
+    });
     expect(row?.device_id).toEqual(toBinary(phone.deviceId));
     expect(JSON.parse(row?.op ?? '{}')).toMatchObject({ deviceId: op.deviceId });
   });
@@ -174,7 +227,9 @@ describe('a push that is taken', () => {
     const note = `e\u0301 \u00e9 👩‍🔬 \u202eover <script>alert(1)</script> {{x}} \${y} ' OR 1=1-- "; DROP \u05d0\u200f`;
     const op = markOp(ids, { q: 0, r: 0, state: 'egg', note });
     expect(wordsOf((await push(phone, [...openingOps(ids, 'N3'), op])).results).at(-1)).toBe('applied');
-    const mark = await database().models.Mark.findOne({ where: { team_id: toBinary(team.teamId), op_id: toBinary(op.opId) } });
+    const mark = await database().models.Mark.findOne({
+      where: { team_id: toBinary(team.teamId), op_id: toBinary(op.opId) },
+    });
     expect(mark?.note).toBe(note);
   });
 });
@@ -185,7 +240,9 @@ describe('a device that never stops', () => {
     const { createHash } = await import('node:crypto');
     const subject = createHash('sha256').update(`push:${busy.deviceId}`).digest();
     const at = new Date();
-    await database().models.LoginAttempt.bulkCreate(Array.from({ length: 999 }, () => ({ id: toBinary(v7()), subject, failed: false, at })));
+    await database().models.LoginAttempt.bulkCreate(
+      Array.from({ length: 999 }, () => ({ id: toBinary(v7()), subject, failed: false, at })),
+    );
     expect((await postPush(busy, pushBody([]))).status).toBe(200);
     const refused = await postPush(busy, pushBody([]));
     expect(await problemOf(refused)).toEqual([429, 'too-many']);

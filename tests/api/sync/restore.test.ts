@@ -24,7 +24,10 @@ beforeEach(() => {
   vi.stubEnv('DATA_DIR', folder);
 });
 
-afterEach(() => rmSync(folder, { recursive: true }));
+afterEach(() => {
+  vi.unstubAllEnvs();
+  rmSync(folder, { recursive: true });
+});
 
 describe('a database restored from a backup', () => {
   it('on a new data folder is taken as it is, and its epoch written down', async () => {

@@ -47,7 +47,10 @@ describe('the audit chain (I22)', () => {
     const entries = await chain();
     expect(entries).toHaveLength(5);
     expect(verifies(entries)).toBe(true);
-    const counter = await database().models.TeamCounter.findOne({ where: { team_id: toBinary(team.teamId) }, rejectOnEmpty: true });
+    const counter = await database().models.TeamCounter.findOne({
+      where: { team_id: toBinary(team.teamId) },
+      rejectOnEmpty: true,
+    });
     expect(entries.at(-1)?.hash).toEqual(counter.audit_hash);
     expect(counter.audit_seq).toBe(5);
   });

@@ -23,12 +23,17 @@ beforeAll(async () => {
 
 async function rename(id: string, transaction: Transaction): Promise<void> {
   const replacements = [toBinary(id)];
-  await database().sequelize.query('UPDATE teams SET zone = zone, name = CONCAT(name, "!") WHERE id = ?', { replacements, transaction });
+  await database().sequelize.query('UPDATE teams SET zone = zone, name = CONCAT(name, "!") WHERE id = ?', {
+    replacements,
+    transaction,
+  });
 }
 
 /** A statement that the server answers with an error of this number. */
 async function fail(errno: number, transaction: Transaction): Promise<never> {
-  await database().sequelize.query(`SIGNAL SQLSTATE '45000' SET MYSQL_ERRNO = ${errno}, MESSAGE_TEXT = 'forced'`, { transaction });
+  await database().sequelize.query(`SIGNAL SQLSTATE '45000' SET MYSQL_ERRNO = ${errno}, MESSAGE_TEXT = 'forced'`, {
+    transaction,
+  });
   throw new Error('the statement should have failed');
 }
 
@@ -76,7 +81,9 @@ describe('a transaction', () => {
       if (tries < 3) await fail(errno, transaction);
     });
     expect(tries).toBe(3);
-    expect(await database().models.Taxon.count({ where: { team_id: toBinary(team.teamId), scientific_name: code } })).toBe(1);
+    expect(
+      await database().models.Taxon.count({ where: { team_id: toBinary(team.teamId), scientific_name: code } }),
+    ).toBe(1);
   });
 
   it('is run again after its connection was cut', async () => {
@@ -86,7 +93,10 @@ describe('a transaction', () => {
       tries += 1;
       await lockCounter(ctx, transaction);
       if (tries > 1) return;
-      const [row] = await database().sequelize.query<{ id: number }>('SELECT CONNECTION_ID() AS id', { type: QueryTypes.SELECT, transaction });
+      const [row] = await database().sequelize.query<{ id: number }>('SELECT CONNECTION_ID() AS id', {
+        type: QueryTypes.SELECT,
+        transaction,
+      });
       await database().sequelize.query(`KILL CONNECTION ${row?.id}`);
       await lockCounter(ctx, transaction);
     });

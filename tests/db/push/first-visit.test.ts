@@ -45,7 +45,13 @@ describe('a first visit', () => {
   it('fills nest, visit and reading', async () => {
     const { Nest, Visit, Reading } = database().models;
     const nest = await Nest.findOne({ where: inTeam(), rejectOnEmpty: true });
-    expect(nest).toMatchObject({ code: 'N12', name: 'N12 roof', taxon: 'Polistes fuscatus', lat: null, archived_at: null });
+    expect(nest).toMatchObject({
+      code: 'N12',
+      name: 'N12 roof',
+      taxon: 'Polistes fuscatus',
+      lat: null,
+      archived_at: null,
+    });
     expect(nest.opened_at).toEqual(new Date('2026-06-16T05:41:07.120-04:00'));
     const visit = await Visit.findOne({ where: inTeam(), rejectOnEmpty: true });
     expect(visit).toMatchObject({ purpose: 'take-down', started_at: new Date('2026-06-16T05:35:00-04:00') });
@@ -58,7 +64,9 @@ describe('a first visit', () => {
   it('keeps marks and what took them back', async () => {
     const { Mark, Retraction } = database().models;
     const marks = await Mark.findAll({ where: inTeam(), order: ['seq'] });
-    expect(marks.map(({ q, r, state, nectar, instar, note }) => ({ q, r, state, nectar: Boolean(nectar), instar, note }))).toEqual([
+    expect(
+      marks.map(({ q, r, state, nectar, instar, note }) => ({ q, r, state, nectar: Boolean(nectar), instar, note })),
+    ).toEqual([
       { q: 0, r: 0, state: 'egg', nectar: true, instar: null, note: 'wet' },
       { q: 0, r: -1, state: 'small', nectar: false, instar: 2, note: null },
     ]);

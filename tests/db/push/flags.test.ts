@@ -31,18 +31,34 @@ function nestAt(place: WireOpInput['body'] | null, more: Partial<WireOpInput> = 
   return wireOp({ kind: 'nest.open', nest: v7(), body: { code: 'N9', place }, ...more });
 }
 
-const time = (wall: string, mono = 1, skewMs: number | null = null) => ({ wall, mono, boot: '5f0c3a52-8a2f-4d0c-9f0a-0a6f5a1c2b3d', skewMs });
+const time = (wall: string, mono = 1, skewMs: number | null = null) => ({
+  wall,
+  mono,
+  boot: '5f0c3a52-8a2f-4d0c-9f0a-0a6f5a1c2b3d',
+  skewMs,
+});
 
 describe('flags', () => {
   it('clock: a doubtful clock is taken and flagged, never refused (B38, I20)', async () => {
-    const walls = ['2026-06-16T24:00:00-04:00', '0001-01-01T00:00:00Z', '9999-12-31T23:59:59-05:00', '2026-06-16T05:41:07', '2016-12-31T23:59:60Z', '2027-07-21T05:41:07-04:00'];
+    const walls = [
+      '2026-06-16T24:00:00-04:00',
+      '0001-01-01T00:00:00Z',
+      '9999-12-31T23:59:59-05:00',
+      '2026-06-16T05:41:07',
+      '2016-12-31T23:59:60Z',
+      '2027-07-21T05:41:07-04:00',
+    ];
     expect(await flagsOf(...walls.map((wall) => nestAt(null, { at: time(wall) })))).toEqual(walls.map(() => 'clock'));
     expect(await flagsOf(nestAt(null, { at: time('2026-06-16T05:41:07-04:00', 1, 840_000) }))).toEqual(['clock']);
   });
 
   it('mono: a monotonic reading that is negative or goes back (B40)', async () => {
     const wall = '2026-06-16T05:41:07-04:00';
-    const ops = [nestAt(null, { at: time(wall, -5) }), nestAt(null, { at: time(wall, 50) }), nestAt(null, { at: time(wall, 20) })];
+    const ops = [
+      nestAt(null, { at: time(wall, -5) }),
+      nestAt(null, { at: time(wall, 50) }),
+      nestAt(null, { at: time(wall, 20) }),
+    ];
     expect(await flagsOf(...ops)).toEqual(['mono', '', 'mono']);
   });
 
@@ -91,7 +107,9 @@ describe('flags', () => {
     const ids = await opened();
     const archive = wireOp({ kind: 'entity.archive', ...ids, reading: null, body: { entity: 'visit' } });
     expect(await flagsOf(archive, markOp(ids, { q: 0, r: 0, state: 'egg' }))).toEqual(['', 'archived']);
-    const visit = await database().models.Visit.findOne({ where: { team_id: toBinary(team.teamId), id: toBinary(ids.visit) } });
+    const visit = await database().models.Visit.findOne({
+      where: { team_id: toBinary(team.teamId), id: toBinary(ids.visit) },
+    });
     expect(visit?.archived_at).toEqual(new Date('2026-06-16T05:41:07.120-04:00'));
   });
 });

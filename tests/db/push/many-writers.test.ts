@@ -16,7 +16,9 @@ beforeAll(async () => {
 });
 
 function nests(count: number): Op[] {
-  return Array.from({ length: count }, (_, index) => wireOp({ kind: 'nest.open', nest: v7(), body: { code: `N${index}` } }));
+  return Array.from({ length: count }, (_, index) =>
+    wireOp({ kind: 'nest.open', nest: v7(), body: { code: `N${index}` } }),
+  );
 }
 
 async function log() {

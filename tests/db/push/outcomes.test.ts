@@ -26,8 +26,10 @@ const word = async (op: Op | Json, by?: TestMember) => wordsOf(await push([op], 
 const egg = (more: Partial<WireOpInput> = {}) => ({ ...markOp(ids, { q: 0, r: 0, state: 'egg' }), ...more });
 const about = (input: Partial<WireOpInput> & Pick<WireOpInput, 'kind'>) => wireOp({ ...ids, body: {}, ...input });
 const retract = (target: string) => about({ kind: 'cell.retract', body: { target } });
-const asideCount = (where: object = {}) => database().models.QuarantinedOp.count({ where: { team_id: toBinary(team.teamId), ...where } });
-const asideOf = (opId: string) => database().models.QuarantinedOp.findAll({ where: { team_id: toBinary(team.teamId), op_id: toBinary(opId) } });
+const asideCount = (where: object = {}) =>
+  database().models.QuarantinedOp.count({ where: { team_id: toBinary(team.teamId), ...where } });
+const asideOf = (opId: string) =>
+  database().models.QuarantinedOp.findAll({ where: { team_id: toBinary(team.teamId), op_id: toBinary(opId) } });
 
 describe('the same id again', () => {
   it('in one batch is applied once (B13)', async () => {
@@ -53,24 +55,46 @@ describe('ids that do not fit', () => {
   it('a visit of another nest is no visit of this one (entity)', async () => {
     const other = freshIds();
     await push(openingOps(other, 'N3'));
-    expect(await word(wireOp({ kind: 'reading.open', nest: ids.nest, visit: other.visit, reading: v7(), body: { kind: 'field', source: 'phone' } }))).toBe(
-      'quarantined entity',
-    );
+    expect(
+      await word(
+        wireOp({
+          kind: 'reading.open',
+          nest: ids.nest,
+          visit: other.visit,
+          reading: v7(),
+          body: { kind: 'field', source: 'phone' },
+        }),
+      ),
+    ).toBe('quarantined entity');
     expect(await word(markOp({ ...ids, visit: other.visit }, { q: 0, r: 0, state: 'egg' }))).toBe('quarantined entity');
     expect(await word(markOp({ ...ids, nest: other.nest }, { q: 0, r: 0, state: 'egg' }))).toBe('quarantined entity');
   });
 
   it('an operation has to name what it is about (entity)', async () => {
     expect(await word(wireOp({ kind: 'nest.open', body: { code: 'N4' } }))).toBe('quarantined entity');
-    expect(await word(wireOp({ kind: 'cell.retract', nest: ids.nest, body: { target: v7() } }))).toBe('quarantined entity');
-    expect(await word(wireOp({ kind: 'field.set', nest: ids.nest, body: { entity: 'visit', field: 'purpose', value: 'lab', base: null } }))).toBe(
+    expect(await word(wireOp({ kind: 'cell.retract', nest: ids.nest, body: { target: v7() } }))).toBe(
       'quarantined entity',
     );
-    expect(await word(wireOp({ kind: 'step.mark', body: { step: 'carry', phase: 'mark' } }))).toBe('quarantined entity');
+    expect(
+      await word(
+        wireOp({
+          kind: 'field.set',
+          nest: ids.nest,
+          body: { entity: 'visit', field: 'purpose', value: 'lab', base: null },
+        }),
+      ),
+    ).toBe('quarantined entity');
+    expect(await word(wireOp({ kind: 'step.mark', body: { step: 'carry', phase: 'mark' } }))).toBe(
+      'quarantined entity',
+    );
   });
 
   it('a reading may be opened by naming its visit alone', async () => {
-    expect(await word(wireOp({ kind: 'reading.open', visit: ids.visit, reading: v7(), body: { kind: 'field', source: 'paper' } }))).toBe('applied');
+    expect(
+      await word(
+        wireOp({ kind: 'reading.open', visit: ids.visit, reading: v7(), body: { kind: 'field', source: 'paper' } }),
+      ),
+    ).toBe('applied');
   });
 });
 
@@ -82,7 +106,9 @@ describe('what has not arrived', () => {
   it('an unknown dependency, target or base parks it', async () => {
     expect(await word(about({ kind: 'reading.submit', deps: [v7()] }))).toBe('parked deps');
     expect(await word(retract(v7()))).toBe('parked deps');
-    expect(await word(about({ kind: 'field.set', body: { entity: 'nest', field: 'name', value: 'x', base: v7() } }))).toBe('parked deps');
+    expect(
+      await word(about({ kind: 'field.set', body: { entity: 'nest', field: 'name', value: 'x', base: v7() } })),
+    ).toBe('parked deps');
   });
 
   it('parked again it is kept once, however it is spelled', async () => {
@@ -96,7 +122,10 @@ describe('what has not arrived', () => {
 
   it('a circle of dependencies is set aside, what waits for it is parked (B22)', async () => {
     const [a, b] = [v7(), v7()];
-    const ops = [about({ kind: 'reading.submit', opId: a, deps: [b] }), about({ kind: 'reading.submit', opId: b, deps: [a] })];
+    const ops = [
+      about({ kind: 'reading.submit', opId: a, deps: [b] }),
+      about({ kind: 'reading.submit', opId: b, deps: [a] }),
+    ];
     expect(wordsOf(await push([...ops, about({ kind: 'reading.submit', deps: [a] })]))).toEqual([
       'quarantined deps',
       'quarantined deps',
@@ -164,7 +193,9 @@ describe('what is set aside', () => {
   it('is kept whole, whatever it is', async () => {
     const junk: Json[] = [null, 5, 'text', [1], {}, { opId: 'x'.repeat(200) }];
     expect(new Set(wordsOf(await push(junk)))).toEqual(new Set(['quarantined shape']));
-    const rows = await database().models.QuarantinedOp.findAll({ where: { team_id: toBinary(team.teamId), code: 'shape' } });
+    const rows = await database().models.QuarantinedOp.findAll({
+      where: { team_id: toBinary(team.teamId), code: 'shape' },
+    });
     expect(rows.map(({ raw }) => raw).sort()).toEqual(junk.map((value) => JSON.stringify(value)).sort());
   });
 

@@ -20,8 +20,10 @@ beforeEach(async () => {
 });
 
 const push = async (ops: readonly Op[], by = team.members.technician) => wordsOf(await pushAs(team, by, ops));
-const kept = () => database().models.QuarantinedOp.findAll({ where: { team_id: toBinary(team.teamId) }, order: ['received_at', 'id'] });
-const logged = ({ opId }: Op) => database().models.Op.findOne({ where: { team_id: toBinary(team.teamId), op_id: toBinary(opId) } });
+const kept = () =>
+  database().models.QuarantinedOp.findAll({ where: { team_id: toBinary(team.teamId) }, order: ['received_at', 'id'] });
+const logged = ({ opId }: Op) =>
+  database().models.Op.findOne({ where: { team_id: toBinary(team.teamId), op_id: toBinary(opId) } });
 
 describe('a parked operation', () => {
   it('is applied as soon as what it waits for arrives, in the name of who sent it (B21, F66)', async () => {
@@ -39,7 +41,9 @@ describe('a parked operation', () => {
     const rows = [await logged(visit), await logged(reading), await logged(mark), await logged(retraction)];
     const [first = 0] = rows.map((row) => row?.seq);
     expect(rows.map((row) => row?.seq)).toEqual([first, first + 1, first + 2, first + 3]);
-    expect(rows.slice(1).map((row) => row && fromBinary(row.actor_id))).toEqual(Array(3).fill(team.members.technician.userId));
+    expect(rows.slice(1).map((row) => row && fromBinary(row.actor_id))).toEqual(
+      Array(3).fill(team.members.technician.userId),
+    );
     expect(await push([retraction, mark, reading])).toEqual(['duplicate', 'duplicate', 'duplicate']);
   });
 
@@ -112,7 +116,9 @@ describe('a parked operation', () => {
     const chain: Op[] = [];
     for (let i = 0; i < 30; i++) {
       const deps = i === 0 ? [opening[2]?.opId ?? ''] : [chain[i - 1]?.opId ?? ''];
-      chain.push({ ...wireOp({ kind: 'step.mark', nest: ids.nest, deps, body: { step: `step ${i}`, phase: 'mark' } }) });
+      chain.push({
+        ...wireOp({ kind: 'step.mark', nest: ids.nest, deps, body: { step: `step ${i}`, phase: 'mark' } }),
+      });
     }
     for (const op of [...chain].reverse()) await push([op]);
     expect(await kept()).toHaveLength(30);

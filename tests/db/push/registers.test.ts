@@ -40,11 +40,15 @@ async function words(...ops: Op[]) {
 }
 
 async function nestOf(ids: VisitIds) {
-  return database().models.Nest.findOne({ where: { team_id: toBinary(team.teamId), id: toBinary(ids.nest) }, rejectOnEmpty: true });
+  return database().models.Nest.findOne({
+    where: { team_id: toBinary(team.teamId), id: toBinary(ids.nest) },
+    rejectOnEmpty: true,
+  });
 }
 
 async function flagOf({ opId }: Op): Promise<string | undefined> {
-  return (await database().models.Op.findOne({ where: { team_id: toBinary(team.teamId), op_id: toBinary(opId) } }))?.flags;
+  return (await database().models.Op.findOne({ where: { team_id: toBinary(team.teamId), op_id: toBinary(opId) } }))
+    ?.flags;
 }
 
 describe('a field', () => {
@@ -80,7 +84,9 @@ describe('a field', () => {
 
   it('may be edited from the operation that opened its entity', async () => {
     const ids = await opened();
-    expect(await words(set(ids, { field: 'taxon', value: 'Polistes metricus', base: ids.opening.opId }))).toEqual(['applied']);
+    expect(await words(set(ids, { field: 'taxon', value: 'Polistes metricus', base: ids.opening.opId }))).toEqual([
+      'applied',
+    ]);
     expect((await nestOf(ids)).taxon).toBe('Polistes metricus');
   });
 
@@ -92,7 +98,9 @@ describe('a field', () => {
     expect(await words(set(ids, { field: 'code', value: 'y', base: name.opId }))).toEqual(['quarantined base']);
     expect(await words(set(other, { field: 'name', value: 'y', base: name.opId }))).toEqual(['quarantined base']);
     expect(await words(set(ids, { field: 'name', value: 'y', base: note.opId }))).toEqual(['quarantined base']);
-    expect(await words(set(ids, { field: 'name', value: 'y', base: other.opening.opId }))).toEqual(['quarantined base']);
+    expect(await words(set(ids, { field: 'name', value: 'y', base: other.opening.opId }))).toEqual([
+      'quarantined base',
+    ]);
     expect(await words(set(ids, { field: 'name', value: 'y', base: v7() }))).toEqual(['parked deps']);
   });
 
@@ -120,14 +128,18 @@ describe('a field', () => {
       started_at: new Date(startedAt),
       started_at_text: startedAt,
     });
-    expect(await database().models.Reading.findOne(where(ids.reading))).toMatchObject({ aid: 'red headlamp', light: null });
+    expect(await database().models.Reading.findOne(where(ids.reading))).toMatchObject({
+      aid: 'red headlamp',
+      light: null,
+    });
   });
 });
 
 describe('a note', () => {
   it('keeps every version and flags two made from the same one', async () => {
     const ids = await opened();
-    const note = (text: string, base: Json) => wireOp({ kind: 'note.set', nest: ids.nest, body: { entity: 'nest', text, base } });
+    const note = (text: string, base: Json) =>
+      wireOp({ kind: 'note.set', nest: ids.nest, body: { entity: 'nest', text, base } });
     const [first, second] = [note('wet', null), note('dry', null)];
     expect(await words(first, second)).toEqual(['applied', 'applied']);
     expect([await flagOf(first), await flagOf(second)]).toEqual(['', 'conflict']);

@@ -10,7 +10,11 @@ import type { TestMember, TestTeam } from '@/tests/support/factories/make-team';
 export const RECEIVED_MS = Date.parse('2026-06-16T06:00:00-04:00');
 
 /** A clock that stands still at `RECEIVED_MS`. */
-export const OFFICE_CLOCK: Clock = { now: () => RECEIVED_MS, mono: () => 0, boot: () => '00000000-0000-4000-8000-000000000000' };
+const OFFICE_CLOCK: Clock = {
+  now: () => RECEIVED_MS,
+  mono: () => 0,
+  boot: () => '00000000-0000-4000-8000-000000000000',
+};
 
 /** Pushes operations in a member's name, without HTTP. */
 export async function pushAs(team: TestTeam, member: TestMember, ops: readonly (Op | Json)[]): Promise<PushResult[]> {

@@ -1,4 +1,5 @@
-import { type LocalOp, officeKey } from '@/lib/offline/local-op';
+import { foldMarks, liveByCell } from '@/lib/offline/fold-readings';
+import { type LocalOp, officeKey, queuedOp } from '@/lib/offline/local-op';
 import type { PullRow } from '@/lib/protocol/pull';
 import type { MemoryDisk } from './memory-disk';
 import type { Run, SavedOp, SimPhone } from './simulate';
@@ -105,6 +106,23 @@ function checkSame({ server }: Run, { disk }: SimPhone): Violation[] {
     .map((row) => ({ invariant: 'I9', what: `the office has no row ${row.seq} ${row.key}` }));
 }
 
+/** The live marks of every reading, in a form to compare. */
+function comb(rows: readonly LocalOp[]): string[] {
+  const readings = new Set(rows.map((row) => row.reading));
+  return [...readings]
+    .flatMap((reading) => [...liveByCell(foldMarks(rows.filter((row) => row.reading === reading))).values()])
+    .map(({ opId, q, r, state }) => `${q},${r} ${state} ${opId}`)
+    .sort();
+}
+
+/** I9: every phone draws the combs that the office has. What only an emptied phone had may be missing there. */
+function checkCombs({ server, exempt }: Run, { disk }: SimPhone): Violation[] {
+  if (exempt.size > 0) return [];
+  const here = comb([...disk.ops.values()]);
+  const there = comb(server.data.log.map((row) => ({ ...queuedOp(row, row.actor, 0), state: 'remote' })));
+  return here.join() === there.join() ? [] : [{ invariant: 'I9', what: 'a phone draws another comb than the office' }];
+}
+
 /** I11: only operations that the office cannot take are set apart. */
 function checkSuspects({ disk }: SimPhone): Violation[] {
   return [...disk.ops.values()]
@@ -117,6 +135,7 @@ export function checkEnd(run: Run): Violation[] {
   const phones = run.phones.flatMap((phone) => [
     ...checkPhone(run, phone),
     ...checkSame(run, phone),
+    ...checkCombs(run, phone),
     ...checkSuspects(phone),
   ]);
   return [...checkLog(run), ...checkDelivered(run), ...phones];

@@ -34,7 +34,7 @@ export class MemoryDisk {
   /** The rows in a state, by an order. */
   select(keep: (row: LocalOp) => boolean, order: (row: LocalOp) => number | string, limit: number): LocalOp[] {
     const rows = [...this.ops.values()].filter(keep);
-    rows.sort((a, b) => (order(a) < order(b) ? -1 : order(a) > order(b) ? 1 : 0));
+    rows.sort((a, b) => Number(order(a) > order(b)) - Number(order(a) < order(b)));
     return rows.slice(0, limit);
   }
 

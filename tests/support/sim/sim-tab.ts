@@ -41,6 +41,8 @@ function sha256(text: string): Promise<string> {
 export class SimTab implements Process {
   alive = true;
   frozenUntil = 0;
+  readonly disk: MemoryDisk;
+  readonly user: string;
   readonly store: Store;
   private readonly ports: DrainPorts;
   private readonly maker: OpMaker;
@@ -48,10 +50,10 @@ export class SimTab implements Process {
 
   constructor(
     private readonly around: Surroundings,
-    readonly disk: MemoryDisk,
-    readonly user: string,
-    clock: SimClock,
+    { disk, user, clock }: { disk: MemoryDisk; user: string; clock: SimClock },
   ) {
+    this.disk = disk;
+    this.user = user;
     const { world, server, weather, sent } = around;
     const connection = simConnection(world, this, weather);
     const timers = { after: (ms: number, fire: () => void) => world.after(this, ms, fire) };

@@ -112,7 +112,7 @@ class Run {
       sent: () => (this.requests += 1),
       newId: (tab: SimTab) => this.newId(tab),
     };
-    const tab = new SimTab(around, phone.disk, phone.user, phone.clock);
+    const tab = new SimTab(around, phone);
     phone.tabs.push(tab);
     void tab.start();
     this.deeds(phone, tab);

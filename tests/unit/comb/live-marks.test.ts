@@ -42,7 +42,9 @@ describe('the live mark of a cell', () => {
   });
 
   it('follows a long chain of changed minds, one taken back at a time', () => {
-    const chain = Array.from({ length: 5_000 }, (_, i) => mark(`m${i}`, `${i}.0`, { supersedes: i === 0 ? null : `m${i - 1}` }));
+    const chain = Array.from({ length: 5_000 }, (_, i) =>
+      mark(`m${i}`, `${i}.0`, { supersedes: i === 0 ? null : `m${i - 1}` }),
+    );
     expect(shown(chain)).toEqual(['m4999']);
     expect(shown(chain, ['m4999'])).toEqual(['m4998']);
   });

@@ -3,7 +3,15 @@ import { CELL_STATES, type CellState, STATE_LETTERS, STATE_WORDS, isCellState } 
 import { tallyOf } from '@/lib/comb/tally';
 import n12 from '@/tests/fixtures/comb/n12.json';
 
-const BY_LETTER: Readonly<Record<string, CellState>> = { c: 'capped', l: 'large', m: 'medium', s: 'small', e: 'egg', p: 'parasitised', '-': 'empty' };
+const BY_LETTER: Readonly<Record<string, CellState>> = {
+  c: 'capped',
+  l: 'large',
+  m: 'medium',
+  s: 'small',
+  e: 'egg',
+  p: 'parasitised',
+  '-': 'empty',
+};
 
 function column(index: 3 | 4 | 5) {
   return n12.cells.map((cell) => ({ state: BY_LETTER[String(cell[index])] ?? 'unread', nectar: false }));

@@ -26,7 +26,8 @@ describe('the hybrid logical clock', () => {
 
   it('reads back what it writes and nothing else', () => {
     expect(parseHlc(formatHlc({ ms: 1781602867120, counter: 12 }))).toEqual({ ms: 1781602867120, counter: 12 });
-    for (const text of ['', '1', '1.', '.1', '1.2.3', '-1.0', '1.0x', ' 1.0', '1e3.0']) expect(parseHlc(text)).toBeNull();
+    for (const text of ['', '1', '1.', '.1', '1.2.3', '-1.0', '1.0x', ' 1.0', '1e3.0'])
+      expect(parseHlc(text)).toBeNull();
   });
 
   it('compares as integers, not as text', () => {

@@ -16,10 +16,13 @@ describe('UUID text', () => {
     expect(BigInt(`0x${hex.slice(16)}`) >> 62n).toBe(0b10n);
   });
 
-  it.each([vectors.uuidv7.uuid, vectors.uuidv5.uuid, vectors.special.nil, vectors.special.max])('takes %s and gives it back', (uuid) => {
-    expect(isUuidText(uuid)).toBe(true);
-    expect(bytesToUuid(uuidToBytes(uuid))).toBe(uuid);
-  });
+  it.each([vectors.uuidv7.uuid, vectors.uuidv5.uuid, vectors.special.nil, vectors.special.max])(
+    'takes %s and gives it back',
+    (uuid) => {
+      expect(isUuidText(uuid)).toBe(true);
+      expect(bytesToUuid(uuidToBytes(uuid))).toBe(uuid);
+    },
+  );
 
   it.each([
     '017F22E2-79B0-7CC3-98C4-DC0C0C07398F',

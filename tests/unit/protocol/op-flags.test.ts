@@ -1,5 +1,12 @@
 import { describe, expect, it } from 'vitest';
-import { formatFlags, hasClockFlag, isDoubtfulPlace, opsWithMonoFlag, parseFlags, placeOf } from '@/lib/protocol/op-flags';
+import {
+  formatFlags,
+  hasClockFlag,
+  isDoubtfulPlace,
+  opsWithMonoFlag,
+  parseFlags,
+  placeOf,
+} from '@/lib/protocol/op-flags';
 
 const RECEIVED = Date.parse('2026-06-16T06:00:00-04:00');
 const BOOT = '5f0c3a52-8a2f-4d0c-9f0a-0a6f5a1c2b3d';

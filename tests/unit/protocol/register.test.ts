@@ -28,7 +28,13 @@ describe('a register', () => {
 
   it('is named by kind, entity and field', () => {
     const nest = '017f22e2-79b0-7cc3-98c4-dc0c0c07398f';
-    const op = { kind: 'field.set', nest, visit: null, reading: null, body: { entity: 'nest', field: 'name', value: 'x', base: null } };
+    const op = {
+      kind: 'field.set',
+      nest,
+      visit: null,
+      reading: null,
+      body: { entity: 'nest', field: 'name', value: 'x', base: null },
+    };
     const byId = { ...op, body: { ...op.body, entity: nest } };
     expect(registerOf(byId)).toBe(registerOf(op));
     expect(registerOf({ ...op, body: { ...op.body, field: 'code' } })).not.toBe(registerOf(op));
@@ -40,7 +46,12 @@ describe('a register', () => {
 
   it('takes its bases from null, one id or a list', () => {
     expect([basesOf(null), basesOf('a'), basesOf(['a', 'b']), basesOf(undefined)]).toEqual([[], ['a'], ['a', 'b'], []]);
-    const entry = registerSetOf({ opId: 'o', hlc: '1.0', kind: 'note.set', body: { entity: 'nest', text: 'wet', base: 'a' } });
+    const entry = registerSetOf({
+      opId: 'o',
+      hlc: '1.0',
+      kind: 'note.set',
+      body: { entity: 'nest', text: 'wet', base: 'a' },
+    });
     expect(entry).toEqual({ opId: 'o', hlc: '1.0', bases: ['a'], value: 'wet' });
   });
 });

@@ -23,7 +23,9 @@ function randomJson(random: () => number, depth: number): Json {
   if (pick === 4) return String.fromCharCode(...Array.from({ length: 5 }, () => Math.floor(random() * 0x300)));
   const items = Array.from({ length: Math.floor(random() * 5) }, () => randomJson(random, depth + 1));
   if (pick === 5) return items;
-  return Object.fromEntries(items.map((item, index) => [`${index}${String.fromCharCode(34 + Math.floor(random() * 90))}`, item]));
+  return Object.fromEntries(
+    items.map((item, index) => [`${index}${String.fromCharCode(34 + Math.floor(random() * 90))}`, item]),
+  );
 }
 
 describe('the strict JSON reader', () => {

@@ -26,17 +26,40 @@ function without(name: keyof Op): unknown {
 }
 
 const mark = (body: Record<string, Json | undefined>) =>
-  wireOp({ kind: 'cell.mark', ...ids, body: { q: 0, r: 0, state: 'egg', nectar: false, unsure: false, ...body } as WireOpInput['body'] });
-const timed = (wall: string) => wireOp({ kind: 'reading.submit', ...ids, body: {}, at: { wall, mono: 1, boot: ID, skewMs: null } });
-const nest = (body: WireOpInput['body']) => wireOp({ kind: 'nest.open', nest: ids.nest, body: { code: 'N1', ...body } });
-const field = (body: WireOpInput['body']) => wireOp({ kind: 'field.set', nest: ids.nest, body: { entity: 'nest', base: null, ...body } });
+  wireOp({
+    kind: 'cell.mark',
+    ...ids,
+    body: { q: 0, r: 0, state: 'egg', nectar: false, unsure: false, ...body } as WireOpInput['body'],
+  });
+const timed = (wall: string) =>
+  wireOp({ kind: 'reading.submit', ...ids, body: {}, at: { wall, mono: 1, boot: ID, skewMs: null } });
+const nest = (body: WireOpInput['body']) =>
+  wireOp({ kind: 'nest.open', nest: ids.nest, body: { code: 'N1', ...body } });
+const field = (body: WireOpInput['body']) =>
+  wireOp({ kind: 'field.set', nest: ids.nest, body: { entity: 'nest', base: null, ...body } });
 
 /** Bodies that each kind takes. */
 const GOOD: Record<(typeof OP_KINDS)[number], WireOpInput['body']> = {
-  'nest.open': { code: 'N12', name: 'Bandstand', taxon: 'Polistes fuscatus', place: { lat: 43.598, lon: -77.605, accuracyM: 4 } },
+  'nest.open': {
+    code: 'N12',
+    name: 'Bandstand',
+    taxon: 'Polistes fuscatus',
+    place: { lat: 43.598, lon: -77.605, accuracyM: 4 },
+  },
   'visit.open': { purpose: 'take-down', startedAt: '2026-06-16T05:35:00-04:00' },
   'reading.open': { kind: 'field', source: 'phone', aid: 'headlamp', light: null },
-  'cell.mark': { q: 3, r: -3, state: 'small', nectar: true, unsure: false, reused: true, scrap: true, instar: 3, note: 'seen twice', supersedes: ID },
+  'cell.mark': {
+    q: 3,
+    r: -3,
+    state: 'small',
+    nectar: true,
+    unsure: false,
+    reused: true,
+    scrap: true,
+    instar: 3,
+    note: 'seen twice',
+    supersedes: ID,
+  },
   'cell.retract': { target: ID },
   'reading.submit': {},
   'field.set': { entity: 'nest', field: 'name', value: 'Bandstand roof', base: null },
@@ -77,20 +100,36 @@ describe('the form of an operation', () => {
     ['an hlc that is no clock', envelope({ hlc: 'now' }), 'quarantined shape'],
     ['deps that are no list', envelope({ deps: ID }), 'quarantined shape'],
     ['a body that is a list', envelope({ body: [] }), 'quarantined shape'],
-    ['a time without boot', envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: 1, skewMs: null } }), 'quarantined shape'],
+    [
+      'a time without boot',
+      envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: 1, skewMs: null } }),
+      'quarantined shape',
+    ],
     ['a nest that is a number', envelope({ nest: 5 }), 'quarantined shape'],
-    ['a skew that is a text', envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: 1, boot: ID, skewMs: '5' } }), 'quarantined shape'],
+    [
+      'a skew that is a text',
+      envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: 1, boot: ID, skewMs: '5' } }),
+      'quarantined shape',
+    ],
     ['a further member (B11)', envelope({ teamId: ID }), 'quarantined unknown-field'],
     ['an actor (B11)', envelope({ actor: ID }), 'quarantined unknown-field'],
     ['a role in the body (B11)', mark({ role: 'reviewer' }), 'quarantined unknown-field'],
-    ['a further member of the time', envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: 1, boot: ID, skewMs: null, skewAge: 3 } }), 'quarantined unknown-field'],
+    [
+      'a further member of the time',
+      envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: 1, boot: ID, skewMs: null, skewAge: 3 } }),
+      'quarantined unknown-field',
+    ],
     ['a null opId (B15)', envelope({ opId: null }), 'quarantined id'],
     ['an upper-case opId (B15)', envelope({ opId: ID.toUpperCase() }), 'quarantined id'],
     ['an opId in braces (B15)', envelope({ opId: `{${ID}}` }), 'quarantined id'],
     ['an opId of 200 characters (B15)', envelope({ opId: 'a'.repeat(200) }), 'quarantined id'],
     ['an opId that is a number', envelope({ opId: 12 }), 'quarantined id'],
     ['a nest that is no id', envelope({ nest: 'N12' }), 'quarantined id'],
-    ['a boot that is no id', envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: 1, boot: 'b7', skewMs: null } }), 'quarantined id'],
+    [
+      'a boot that is no id',
+      envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: 1, boot: 'b7', skewMs: null } }),
+      'quarantined id',
+    ],
     ['a device that is no id', envelope({ deviceId: 'phone' }), 'quarantined id'],
     ['a lone surrogate (B29)', mark({ note: 'a\ud800b' }), 'quarantined unicode'],
     ['a lone surrogate in a member name', envelope({ body: { '\udfff': 1 } }), 'quarantined unicode'],
@@ -99,7 +138,11 @@ describe('the form of an operation', () => {
     ['a carriage return (B30)', mark({ note: 'a\rb' }), 'quarantined control'],
     ['2^53 + 1 (B26)', envelope({ body: { q: 9007199254740992, r: 0 } }), 'quarantined number'],
     ['1e309 (B26)', envelope({ body: { q: Infinity, r: 0 } }), 'quarantined number'],
-    ['an infinite monotonic reading', envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: Infinity, boot: ID, skewMs: null } }), 'quarantined number'],
+    [
+      'an infinite monotonic reading',
+      envelope({ at: { wall: '2026-06-16T05:41:07Z', mono: Infinity, boot: ID, skewMs: null } }),
+      'quarantined number',
+    ],
     ['half a counter', envelope({ n: 1.5 }), 'quarantined number'],
     ['a counter below zero', envelope({ n: -1 }), 'quarantined number'],
     ['21 dependencies (B22)', envelope({ deps: Array(21).fill(ID) }), 'quarantined deps'],
@@ -120,12 +163,23 @@ describe('the form of an operation', () => {
     expect('polluted' in {}).toBe(false);
   });
 
-  it.each(['v', 'opId', 'kind', 'kindV', 'deviceId', 'n', 'nest', 'visit', 'reading', 'at', 'hlc', 'deps', 'body'] as const)(
-    'without %s is set aside for its shape',
-    (name) => {
-      expect(verdict(without(name))).toBe('quarantined shape');
-    },
-  );
+  it.each([
+    'v',
+    'opId',
+    'kind',
+    'kindV',
+    'deviceId',
+    'n',
+    'nest',
+    'visit',
+    'reading',
+    'at',
+    'hlc',
+    'deps',
+    'body',
+  ] as const)('without %s is set aside for its shape', (name) => {
+    expect(verdict(without(name))).toBe('quarantined shape');
+  });
 });
 
 describe('kind and version', () => {
@@ -157,7 +211,8 @@ describe('times', () => {
   });
 
   it('the start of a visit is judged like any wall time', () => {
-    const visit = (startedAt: Json) => wireOp({ kind: 'visit.open', ...ids, reading: null, body: { purpose: 'lab', startedAt } });
+    const visit = (startedAt: Json) =>
+      wireOp({ kind: 'visit.open', ...ids, reading: null, body: { purpose: 'lab', startedAt } });
     expect(verdict(visit('2026-13-40'))).toBe('quarantined time');
     expect(verdict(visit('2026-06-16T05:41:07+26:00'))).toBe('quarantined tz');
     expect(verdict(visit(5))).toBe('quarantined value');
@@ -171,14 +226,26 @@ describe('bodies', () => {
     ['q is in Arabic digits (B23)', mark({ q: '\u0661' }), 'cell'],
     ['r is 41 (B23)', mark({ q: 0, r: 41 }), 'cell'],
     ['q + r is 41 (B23)', mark({ q: 21, r: 20 }), 'cell'],
-    ['r is missing', wireOp({ kind: 'cell.mark', ...ids, body: { q: 1, state: 'egg', nectar: false, unsure: false } }), 'cell'],
-    ['a photographed cell is off the comb', wireOp({ kind: 'photo.attach', ...ids, body: { ...GOOD['photo.attach'], cell: { q: 99, r: 0 } } }), 'cell'],
+    [
+      'r is missing',
+      wireOp({ kind: 'cell.mark', ...ids, body: { q: 1, state: 'egg', nectar: false, unsure: false } }),
+      'cell',
+    ],
+    [
+      'a photographed cell is off the comb',
+      wireOp({ kind: 'photo.attach', ...ids, body: { ...GOOD['photo.attach'], cell: { q: 99, r: 0 } } }),
+      'cell',
+    ],
     ['the state is unknown (B24)', mark({ state: 'larva' }), 'value'],
     ['the state is a number (B24)', mark({ state: 3 }), 'value'],
     ['the state is a list (B24)', mark({ state: ['egg'] }), 'value'],
     ['nectar is a word', mark({ nectar: 'yes' }), 'value'],
     ['the instar is 6', mark({ instar: 6 }), 'value'],
-    ['the purpose is unknown', wireOp({ kind: 'visit.open', ...ids, body: { purpose: 'party', startedAt: '2026-06-16T05:35:00-04:00' } }), 'value'],
+    [
+      'the purpose is unknown',
+      wireOp({ kind: 'visit.open', ...ids, body: { purpose: 'party', startedAt: '2026-06-16T05:35:00-04:00' } }),
+      'value',
+    ],
     ['the code is empty', nest({ code: '' }), 'value'],
     ['a note of 10,001 code points (B27)', mark({ note: '😀'.repeat(10_001) }), 'too-long'],
     ['a name of 201 code points', nest({ name: 'x'.repeat(201) }), 'too-long'],
@@ -229,7 +296,12 @@ describe('the body hash', () => {
   it('covers what was recorded and when, not how it travels', () => {
     const op = mark({});
     expect(verdict({ ...op, n: op.n + 1, hlc: '1.0', deviceId: ID })).toBe('valid');
-    for (const change of [{ nest: ID }, { deps: [ID] }, { at: { ...op.at, mono: 2 } }, { body: { ...op.body, state: 'small' } }]) {
+    for (const change of [
+      { nest: ID },
+      { deps: [ID] },
+      { at: { ...op.at, mono: 2 } },
+      { body: { ...op.body, state: 'small' } },
+    ]) {
       expect(verdict({ ...op, ...change })).toBe('quarantined hash');
     }
   });

@@ -32,7 +32,22 @@ export interface Arrival {
 }
 
 /** The operation as it is kept: exactly the members of the envelope. */
-function opText({ v, opId, kind, kindV, deviceId, n, nest, visit, reading, at, hlc, deps, body, bodyHash }: ValidOp): string {
+function opText({
+  v,
+  opId,
+  kind,
+  kindV,
+  deviceId,
+  n,
+  nest,
+  visit,
+  reading,
+  at,
+  hlc,
+  deps,
+  body,
+  bodyHash,
+}: ValidOp): string {
   return JSON.stringify({ v, opId, kind, kindV, deviceId, n, nest, visit, reading, at, hlc, deps, body, bodyHash });
 }
 

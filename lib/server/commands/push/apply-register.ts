@@ -17,7 +17,9 @@ function nestColumns(field: string, value: Json) {
 
 /** The columns of a visit that a field sets. */
 function visitColumns(field: string, value: Json) {
-  return field === 'startedAt' ? { started_at: instantOf(String(value)), started_at_text: String(value) } : { [field]: value };
+  return field === 'startedAt'
+    ? { started_at: instantOf(String(value)), started_at_text: String(value) }
+    : { [field]: value };
 }
 
 /** Shows the winning value on the entity's row. A field without a column of its own is only kept. */
@@ -38,5 +40,6 @@ export function applyRegister(application: Application): void {
   const sets = [...(world.registers.get(register) ?? []), registerSetOf(op)];
   world.registers.set(register, sets);
   const winner = registerWinner(sets);
-  if (op.kind === 'field.set' && winner) project(application, entity, { field: String(op.body.field), value: winner.value });
+  if (op.kind === 'field.set' && winner)
+    project(application, entity, { field: String(op.body.field), value: winner.value });
 }

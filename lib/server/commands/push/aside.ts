@@ -62,16 +62,22 @@ export class Aside {
     const team = { team_id: toBinary(ctx.teamId) };
     const known = await this.knownRows(ctx, transaction);
     for (const [digest, id] of known) if (this.settledDigests.has(digest)) this.settledIds.add(id);
-    for (const [id, columns] of this.changed) await QuarantinedOp.update(columns, { where: { ...team, id: toBinary(id) }, transaction });
+    for (const [id, columns] of this.changed)
+      await QuarantinedOp.update(columns, { where: { ...team, id: toBinary(id) }, transaction });
     const settled = [...this.settledIds].map(toBinary);
     if (settled.length > 0) await QuarantinedOp.destroy({ where: { ...team, id: settled }, transaction });
     const fresh = [...this.entries.values()].filter(({ digest }) => !known.has(digest));
-    await QuarantinedOp.bulkCreate(fresh.map((entry) => ({ ...team, ...asideColumns(entry) })), { transaction });
+    await QuarantinedOp.bulkCreate(
+      fresh.map((entry) => ({ ...team, ...asideColumns(entry) })),
+      { transaction },
+    );
   }
 
   /** Rows, by digest, that already hold content this run is about. */
   private async knownRows(ctx: TeamContext, transaction: Transaction): Promise<Map<string, string>> {
-    const digests = [...new Set([...this.entries.keys(), ...this.settledDigests])].map((digest) => Buffer.from(digest, 'hex'));
+    const digests = [...new Set([...this.entries.keys(), ...this.settledDigests])].map((digest) =>
+      Buffer.from(digest, 'hex'),
+    );
     if (digests.length === 0) return new Map();
     const rows = await database().models.QuarantinedOp.findAll({
       attributes: ['id', 'digest'],

@@ -48,7 +48,8 @@ function checkBases({ world, op }: Question): Objection | null {
 const CHECKS: Partial<Record<OpKind, (question: Question) => Objection | null>> = {
   'nest.open': ({ world, op }) => (op.nest !== null && world.nests.has(op.nest) ? quarantined('exists') : null),
   'visit.open': ({ world, op }) => (op.visit !== null && world.visits.has(op.visit) ? quarantined('exists') : null),
-  'reading.open': ({ world, op }) => (op.reading !== null && world.readings.has(op.reading) ? quarantined('exists') : null),
+  'reading.open': ({ world, op }) =>
+    op.reading !== null && world.readings.has(op.reading) ? quarantined('exists') : null,
   'cell.mark': checkOwnReading,
   'reading.submit': checkOwnReading,
   'cell.retract': checkRetraction,

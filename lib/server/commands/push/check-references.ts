@@ -35,7 +35,7 @@ export function namedOps(op: ValidOp): string[] {
 }
 
 /** What an operation names and the team does not have (yet). Another team's ids are simply missing. */
-export function missingOf(world: World, op: ValidOp): string[] {
+function missingOf(world: World, op: ValidOp): string[] {
   const missing = namedOps(op).filter((id) => !world.ops.has(id));
   const { kind, nest, visit, reading } = op;
   if (nest !== null && kind !== 'nest.open' && !world.nests.has(nest)) missing.push(nest);

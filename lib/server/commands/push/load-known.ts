@@ -108,9 +108,18 @@ async function loadRegisters(loading: Loading, ops: readonly ValidOp[]): Promise
  */
 export async function loadKnown(loading: Loading, ops: readonly ValidOp[]): Promise<void> {
   const { world } = loading;
-  const opIds = newIds(ops.flatMap((op) => [op.opId, ...namedOps(op)]), world.ops);
+  const opIds = newIds(
+    ops.flatMap((op) => [op.opId, ...namedOps(op)]),
+    world.ops,
+  );
   if (opIds.length > 0) await loadOps(loading, { op_id: opIds });
-  await loadReadings(loading, newIds(ops.map((op) => op.reading), world.readings));
+  await loadReadings(
+    loading,
+    newIds(
+      ops.map((op) => op.reading),
+      world.readings,
+    ),
+  );
   const visits = [...ops.map((op) => op.visit), ...[...world.readings.values()].map((reading) => reading.visit)];
   await loadVisits(loading, newIds(visits, world.visits));
   const nests = [...ops.map((op) => op.nest), ...[...world.visits.values()].map((visit) => visit.nest)];

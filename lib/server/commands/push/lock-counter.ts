@@ -23,7 +23,12 @@ export async function lockCounter(ctx: TeamContext, transaction: Transaction): P
     transaction,
   });
   if (!row) throw new Error(`Team ${ctx.teamId} has no counter row.`);
-  return { seq: Number(row.seq), safeSeq: Number(row.safe_seq), auditSeq: Number(row.audit_seq), auditHash: row.audit_hash };
+  return {
+    seq: Number(row.seq),
+    safeSeq: Number(row.safe_seq),
+    auditSeq: Number(row.audit_seq),
+    auditHash: row.audit_hash,
+  };
 }
 
 /** Writes the counter back, as the last statement of the transaction that locked it. */

@@ -43,14 +43,20 @@ export async function loadParked(ctx: TeamContext, transaction: Transaction): Pr
   });
   const parked = rows.map((row) => {
     const missing: unknown = JSON.parse(row.missing);
-    return { id: fromBinary(row.id), opId: fromBinaryOrNull(row.op_id), missing: Array.isArray(missing) ? missing.map(String) : [] };
+    return {
+      id: fromBinary(row.id),
+      opId: fromBinaryOrNull(row.op_id),
+      missing: Array.isArray(missing) ? missing.map(String) : [],
+    };
   });
   return new Map(parked.map((row) => [row.id, row]));
 }
 
 /** Takes out of `parked` the rows that have a reason to be tried again. */
 export function takeTouched(parked: Map<string, ParkedRow>, arrived: ReadonlySet<string>): string[] {
-  const touched = [...parked.values()].filter(({ missing }) => missing.some((id) => arrived.has(id) || isKnownToken(id)));
+  const touched = [...parked.values()].filter(({ missing }) =>
+    missing.some((id) => arrived.has(id) || isKnownToken(id)),
+  );
   for (const { id } of touched) parked.delete(id);
   return touched.map(({ id }) => id);
 }
@@ -64,7 +70,11 @@ interface TextRow {
 }
 
 /** The texts of parked operations in the order they arrived, with the role their senders have now. */
-export async function loadTexts(ctx: TeamContext, ids: readonly string[], transaction: Transaction): Promise<ParkedText[]> {
+export async function loadTexts(
+  ctx: TeamContext,
+  ids: readonly string[],
+  transaction: Transaction,
+): Promise<ParkedText[]> {
   const rows = await database().sequelize.query<TextRow>(
     `SELECT p.id AS id, p.raw AS raw, p.actor_id AS actorId, m.role AS role, p.received_at AS receivedAt
      FROM quarantined_ops p JOIN memberships m ON m.team_id = p.team_id AND m.user_id = p.actor_id
@@ -72,6 +82,8 @@ export async function loadTexts(ctx: TeamContext, ids: readonly string[], transa
     { type: QueryTypes.SELECT, replacements: [toBinary(ctx.teamId), ids.map(toBinary)], transaction },
   );
   return rows.flatMap(({ id, raw, actorId, role, receivedAt }) =>
-    isRole(role) ? [{ id: fromBinary(id), raw, by: { userId: fromBinary(actorId), role }, receivedMs: receivedAt.getTime() }] : [],
+    isRole(role)
+      ? [{ id: fromBinary(id), raw, by: { userId: fromBinary(actorId), role }, receivedMs: receivedAt.getTime() }]
+      : [],
   );
 }

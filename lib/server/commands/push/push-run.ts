@@ -76,7 +76,10 @@ export function applyAll(run: PushRun, candidates: readonly Candidate[]): Waitin
   let before = candidates.length;
   while (waiting.length > 0 && waiting.length < before) {
     before = waiting.length;
-    waiting = applyOnce(run, waiting.map(({ candidate }) => candidate));
+    waiting = applyOnce(
+      run,
+      waiting.map(({ candidate }) => candidate),
+    );
   }
   return waiting;
 }

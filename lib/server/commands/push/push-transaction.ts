@@ -73,7 +73,9 @@ function waitsFor(ops: readonly ValidOp[], parked: ReadonlyMap<string, ParkedRow
 function faultOf({ checked, value }: Item): Outcome | null {
   if (checked.ok) return null;
   const { r, code } = checked.error;
-  return r === 'parked' ? { r, code, missing: kindToken(memberOf(value, 'kind'), memberOf(value, 'kindV')) } : { r, code };
+  return r === 'parked'
+    ? { r, code, missing: kindToken(memberOf(value, 'kind'), memberOf(value, 'kindV')) }
+    : { r, code };
 }
 
 async function auditPush({ ctx, counter, transaction, writes }: PushRun, job: PushJob, aside: Aside): Promise<void> {
@@ -89,7 +91,10 @@ async function auditPush({ ctx, counter, transaction, writes }: PushRun, job: Pu
 function candidatesOf(run: PushRun, parked: ReadonlyMap<string, ParkedRow>, judged: Judged): Candidate[] {
   const { items, job, conclude } = judged;
   const ops = items.map(({ op }) => op);
-  const circular = opsInCycles(ops.map(({ opId }) => opId), waitsFor(ops, parked));
+  const circular = opsInCycles(
+    ops.map(({ opId }) => opId),
+    waitsFor(ops, parked),
+  );
   const mono = opsWithMonoFlag(ops);
   return items.flatMap((item) => {
     const { op } = item;
@@ -130,7 +135,10 @@ export async function pushTransaction(job: PushJob, transaction: Transaction): P
     if (fault) conclude(item, fault);
   }
   const valid = inOrder(items);
-  await loadKnown(run, valid.map(({ op }) => op));
+  await loadKnown(
+    run,
+    valid.map(({ op }) => op),
+  );
   const parked = await loadParked(ctx, transaction);
   const candidates = candidatesOf(run, parked, { items: valid, job, conclude });
   const waiting = await reviveParked(run, { parked, waiting: applyAll(run, candidates), aside });

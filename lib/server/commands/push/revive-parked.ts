@@ -11,7 +11,8 @@ import { sha256Hex } from './raw-op';
 /** Notes on its row what became of a parked operation. */
 function concludeRow(aside: Aside, id: string, outcome: Outcome): void {
   if (outcome.r === 'applied' || outcome.r === 'duplicate') aside.settleId(id);
-  else aside.change(id, { state: outcome.r, code: outcome.code, missing: outcome.r === 'parked' ? outcome.missing : [] });
+  else
+    aside.change(id, { state: outcome.r, code: outcome.code, missing: outcome.r === 'parked' ? outcome.missing : [] });
 }
 
 /** A parked operation as a candidate; null when it turned out to be faulty, which is noted. */
@@ -42,7 +43,10 @@ export async function reviveParked(
     if (touched.length === 0) return still;
     const texts = await loadTexts(run.ctx, touched, run.transaction);
     const revived = texts.flatMap((text) => candidateOf(text, aside) ?? []);
-    await loadKnown(run, revived.map(({ op }) => op));
+    await loadKnown(
+      run,
+      revived.map(({ op }) => op),
+    );
     still = applyAll(run, [...revived, ...still.map(({ candidate }) => candidate)]);
   }
 }

@@ -27,7 +27,10 @@ export interface AuditLink extends Omit<AuditEvent, 'detail'> {
 }
 
 /** The hash of an entry: SHA-256 over the hash before it and the entry's canonical JSON. */
-export function auditHash(previous: Buffer, { teamId, seq, at, actorId, action, subjectId, detail }: AuditLink): Buffer {
+export function auditHash(
+  previous: Buffer,
+  { teamId, seq, at, actorId, action, subjectId, detail }: AuditLink,
+): Buffer {
   const text = canonicalJson({ teamId, seq, at: at.toISOString(), actorId, action, subjectId, detail });
   return createHash('sha256').update(previous).update(text).digest();
 }
@@ -44,7 +47,15 @@ export async function writeAudit({ ctx, counter, transaction }: LockedWrite, eve
   const { action, subjectId, at } = event;
   const seq = counter.auditSeq + 1;
   const detail = canonicalJson(event.detail);
-  const hash = auditHash(counter.auditHash, { teamId: ctx.teamId, seq, actorId: ctx.userId, action, subjectId, at, detail });
+  const hash = auditHash(counter.auditHash, {
+    teamId: ctx.teamId,
+    seq,
+    actorId: ctx.userId,
+    action,
+    subjectId,
+    at,
+    detail,
+  });
   await database().models.AuditEntry.create(
     {
       team_id: toBinary(ctx.teamId),

@@ -26,7 +26,10 @@ export interface PushInput {
  *
  * @throws HttpProblem `batch`, `too-many`, `epoch-mismatch`, or `busy` while a restore is not finished.
  */
-export async function takePush(ctx: TeamContext, { epoch, ops, raws, device, clock }: PushInput): Promise<PushResponse> {
+export async function takePush(
+  ctx: TeamContext,
+  { epoch, ops, raws, device, clock }: PushInput,
+): Promise<PushResponse> {
   if (ops.length > MAX_OPS_PER_PUSH) throw new HttpProblem('batch');
   if (device) await countPush(device.deviceId, clock.now());
   const ours = await writableEpoch();

@@ -7,7 +7,10 @@ describe('a password', () => {
   });
 
   it('opens its own hash and no other, and every hash has its own salt', async () => {
-    const [first, second] = await Promise.all([hashPassword('seventeen grey kettles'), hashPassword('seventeen grey kettles')]);
+    const [first, second] = await Promise.all([
+      hashPassword('seventeen grey kettles'),
+      hashPassword('seventeen grey kettles'),
+    ]);
     expect(first).not.toBe(second);
     expect(await verifyPassword(first, 'seventeen grey kettles')).toBe(true);
     expect(await verifyPassword(first, 'seventeen grey kettles ')).toBe(false);
@@ -15,7 +18,12 @@ describe('a password', () => {
   });
 
   it('has 15 to 256 characters, counted as people count them', () => {
-    expect([14, 15, 256, 257].map((length) => isPasswordLength('x'.repeat(length)))).toEqual([false, true, true, false]);
+    expect([14, 15, 256, 257].map((length) => isPasswordLength('x'.repeat(length)))).toEqual([
+      false,
+      true,
+      true,
+      false,
+    ]);
     expect(isPasswordLength('😀'.repeat(14))).toBe(false);
     expect(isPasswordLength('😀'.repeat(256))).toBe(true);
     expect(isTooLong('x'.repeat(1_000_000))).toBe(true);

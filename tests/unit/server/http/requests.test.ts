@@ -25,7 +25,11 @@ describe('a request that another site may have made', () => {
   it.each<[string, Request, boolean]>([
     ['a read without an origin', request('GET'), false],
     ['a change with our header', request('POST', { 'x-sync': '1' }), false],
-    ['a change from our own page', request('POST', { 'x-sync': '1', origin: publicUrl(), 'sec-fetch-site': 'same-origin' }), false],
+    [
+      'a change from our own page',
+      request('POST', { 'x-sync': '1', origin: publicUrl(), 'sec-fetch-site': 'same-origin' }),
+      false,
+    ],
     ['a change without our header', request('POST'), true],
     ['a deletion without our header', request('DELETE', { origin: publicUrl() }), true],
     ['a change with another value', request('POST', { 'x-sync': 'true' }), true],
@@ -65,8 +69,11 @@ describe('a query string', () => {
 
   it('brings whole numbers into their range', () => {
     const range = { min: 1, max: 500, otherwise: 100 };
-    expect(['0', '-7', '12', '1000000000', undefined].map((text) => clampedInteger(text, range))).toEqual([1, 1, 12, 500, 100]);
-    for (const text of ['', 'all', '1.5', '1e3', '٣', ' 1', '9'.repeat(40)]) expect(codeOf(() => clampedInteger(text, range))).toBe('limit');
+    expect(['0', '-7', '12', '1000000000', undefined].map((text) => clampedInteger(text, range))).toEqual([
+      1, 1, 12, 500, 100,
+    ]);
+    for (const text of ['', 'all', '1.5', '1e3', '٣', ' 1', '9'.repeat(40)])
+      expect(codeOf(() => clampedInteger(text, range))).toBe('limit');
   });
 });
 

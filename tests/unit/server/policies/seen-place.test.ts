@@ -5,7 +5,8 @@ const PLACE = { lat: 43.598123, lon: -77.605432, accuracyM: 4 };
 
 describe('the place a role sees', () => {
   it('is exact for everyone but a researcher', () => {
-    for (const role of ['technician', 'reviewer', 'biologist', 'coordinator'] as const) expect(seenPlace(role, PLACE)).toEqual(PLACE);
+    for (const role of ['technician', 'reviewer', 'biologist', 'coordinator'] as const)
+      expect(seenPlace(role, PLACE)).toEqual(PLACE);
   });
 
   it('is the south-west corner of its grid cell for a researcher, without an accuracy', () => {
@@ -17,7 +18,11 @@ describe('the place a role sees', () => {
       const lat = hundredths / 100;
       expect(seenPlace('researcher', { lat, lon: 0, accuracyM: 1 })?.lat).toBe(lat);
     }
-    expect(seenPlace('researcher', { lat: 0.29, lon: 1.15, accuracyM: 1 })).toEqual({ lat: 0.29, lon: 1.15, accuracyM: null });
+    expect(seenPlace('researcher', { lat: 0.29, lon: 1.15, accuracyM: 1 })).toEqual({
+      lat: 0.29,
+      lon: 1.15,
+      accuracyM: null,
+    });
   });
 
   it('is nowhere when there is none', () => {
