@@ -10,7 +10,14 @@ export interface DictionaryRow extends Omit<CsvColumn<never>, 'value'> {
   file: string;
 }
 
-const always = { unit: '', type: 'word', allowed: 'any text', required: true, blankMeans: '', since: FIRST_VERSION } as const;
+const always = {
+  unit: '',
+  type: 'word',
+  allowed: 'any text',
+  required: true,
+  blankMeans: '',
+  since: FIRST_VERSION,
+} as const;
 const sometimes = { ...always, required: false } as const;
 
 /** `dictionary.csv`: one row for every column of every file, itself included. */

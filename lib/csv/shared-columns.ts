@@ -47,7 +47,14 @@ export interface ReadingKey extends VisitKey {
 /** The columns that say which reading a row belongs to, and whose it is. */
 export const READING_KEY_COLUMNS: readonly CsvColumn<ReadingKey>[] = [
   ...VISIT_KEY_COLUMNS,
-  { ...always, name: 'reading', label: 'Reading', type: 'uuid', allowed: 'lower-case UUID', value: (row) => row.reading },
+  {
+    ...always,
+    name: 'reading',
+    label: 'Reading',
+    type: 'uuid',
+    allowed: 'lower-case UUID',
+    value: (row) => row.reading,
+  },
   {
     ...always,
     name: 'reading_kind',

@@ -24,7 +24,12 @@ const counted = {
 
 /** The column that counts cells in one state. */
 function countOf(state: CellState): CsvColumn<TallyRow> {
-  return { ...counted, name: state, label: `Cells recorded as ${STATE_WORDS[state]}`, value: (row) => row.tally[state] };
+  return {
+    ...counted,
+    name: state,
+    label: `Cells recorded as ${STATE_WORDS[state]}`,
+    value: (row) => row.tally[state],
+  };
 }
 
 /** `tallies.csv`: one row a reading, final ones included. */

@@ -109,7 +109,7 @@ export const CODE_FOLDERS = ['app', 'components', 'lib', 'models', 'migrations',
  * Files where the running program meets the clock, chance and the machine; everywhere else these are arguments.
  * Globs for the linter.
  */
-export const EDGE_FILES = ['lib/kit/**', 'lib/cli/**', 'lib/**/*-edge.ts', 'workers/**', 'tests/**'];
+export const EDGE_FILES = ['lib/kit/**', 'lib/cli/**', 'lib/**/*-edge.ts', 'workers/**', 'proxy.ts', 'tests/**'];
 
 /**
  * The rule for a file or folder path, or undefined for files outside the table (settings, tests).

@@ -27,7 +27,11 @@ const SCREENS: readonly Screen[] = [
   { name: 'nests-none-found', as: REVIEWER, path: () => '/nests?q=zzzz' },
   { name: 'nest', as: REVIEWER, path: ({ nest }) => `/nests/${nest}` },
   { name: 'reading', as: REVIEWER, path: ({ nest, reading }) => `/nests/${nest}/readings/${reading}` },
-  { name: 'reading-as-technician', as: 'technician@tarrow.example', path: ({ nest, reading }) => `/nests/${nest}/readings/${reading}` },
+  {
+    name: 'reading-as-technician',
+    as: 'technician@tarrow.example',
+    path: ({ nest, reading }) => `/nests/${nest}/readings/${reading}`,
+  },
   { name: 'hosts', as: 'coordinator@tarrow.example', path: () => '/hosts' },
   { name: 'downloads', as: 'coordinator@tarrow.example', path: () => '/downloads' },
   { name: 'field-signed-out', as: null, path: () => '/field' },
@@ -79,7 +83,9 @@ for (const screen of SCREENS) {
       await page.goto(screen.path(known));
       await settled(page);
       await page.screenshot({ path: screenshotPath(`${screen.name}-${size.width}`), fullPage: true });
-      const wider = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+      const wider = await page.evaluate(
+        () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+      );
       expect(wider, 'the page is wider than the screen').toBeLessThanOrEqual(0);
       const { violations } = await new AxeBuilder({ page }).analyze();
       expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' | ')}`)).toEqual([]);

@@ -1,11 +1,12 @@
 import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { type BrowserContext, type Page, chromium, expect, test } from '@playwright/test';
+import { type Page, chromium, expect, test } from '@playwright/test';
 import { spiral } from '@/lib/comb/walk';
 import { findChromium } from '@/lib/cli/chromium';
 import { createDemoDatabase } from '@/tests/support/demo-database';
 import { openField, pressAll, readCells, startReading, untilInstalled, untilSent } from '@/tests/support/pages/field';
+import { phoneOn } from '@/tests/support/pages/phone';
 import { signInByForm } from '@/tests/support/pages/sign-in';
 import { type TestServer, startTestServer } from '@/tests/support/server';
 import { WireClient } from '@/tests/support/wire/wire-client';
@@ -16,24 +17,6 @@ const STATES = ['Capped', 'Large', 'Medium', 'Small', 'Egg', 'Empty'] as const;
 /** Sixty states, oldest in the middle. */
 function sixty(): string[] {
   return spiral(CELLS).map((_, index) => STATES[Math.floor((index * STATES.length) / CELLS)] ?? 'Egg');
-}
-
-interface Phone {
-  context: BrowserContext;
-  page: Page;
-}
-
-/** A phone with a profile that outlives the browser. */
-async function phoneOn(profile: string, baseURL: string): Promise<Phone> {
-  const context = await chromium.launchPersistentContext(profile, {
-    executablePath: findChromium(),
-    args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-dev-shm-usage'],
-    viewport: { width: 390, height: 844 },
-    hasTouch: true,
-    timezoneId: 'America/New_York',
-    baseURL,
-  });
-  return { context, page: context.pages()[0] ?? (await context.newPage()) };
 }
 
 interface NestAnswer {
@@ -116,7 +99,10 @@ test.describe('the main job', () => {
       await untilSent(page);
       await other.close();
       const both = await reviewer.get<NestAnswer>(`/api/nests/${nest.id}`);
-      expect(both.visits[0]?.readings.map(({ observer }) => observer).sort()).toEqual(['Oriel Webb-Nakada', 'Tobiah Marsh']);
+      expect(both.visits[0]?.readings.map(({ observer }) => observer).sort()).toEqual([
+        'Oriel Webb-Nakada',
+        'Tobiah Marsh',
+      ]);
     });
 
     await test.step('a reviewer sees dates and changes three cells in the browser', async () => {
@@ -126,7 +112,11 @@ test.describe('the main job', () => {
       await page.goto(`/nests/${nest.id}`);
       await expect(page.getByText(/between .* and /).first()).toBeVisible();
       await page.goto(`/nests/${nest.id}/readings/${field?.id}`);
-      for (const [cell, state] of [[0, 'large larva'], [10, 'capped'], [59, 'egg']] as const) {
+      for (const [cell, state] of [
+        [0, 'large larva'],
+        [10, 'capped'],
+        [59, 'egg'],
+      ] as const) {
         await correctCell(page, cell, state);
       }
       await page.getByRole('button', { name: 'Settle 3 cells' }).click();
@@ -138,8 +128,18 @@ test.describe('the main job', () => {
       const tallies = await (await reviewer.fetch(`/api/export/tallies.csv?nest=${code}`)).text();
       const count = (state: string) => reading.tally[state] ?? 0;
       const fieldCounts = ['empty', 'egg', 'small', 'medium', 'large', 'capped'].map(count);
-      const finalCounts = [count('empty') - 1, count('egg') + 1, count('small'), count('medium'), count('large'), count('capped')];
-      const rows = tallies.split('\r\n').slice(1, -1).map((row) => row.split(','));
+      const finalCounts = [
+        count('empty') - 1,
+        count('egg') + 1,
+        count('small'),
+        count('medium'),
+        count('large'),
+        count('capped'),
+      ];
+      const rows = tallies
+        .split('\r\n')
+        .slice(1, -1)
+        .map((row) => row.split(','));
       expect(rows.map((row) => [row[5], row.slice(9, 15).map(Number)])).toEqual(
         expect.arrayContaining([
           ['field', fieldCounts],

@@ -43,7 +43,10 @@ test.describe('the contract, from outside', () => {
     expect((await technician.post(`/api/readings/${ids.reading}/settle`, settle)).status).toBe(403);
     const reviewer = new WireClient(origin());
     await reviewer.signIn('reviewer@tarrow.example');
-    const settled = (await (await reviewer.post(`/api/readings/${ids.reading}/settle`, settle)).json()) as { reading: string; version: number };
+    const settled = (await (await reviewer.post(`/api/readings/${ids.reading}/settle`, settle)).json()) as {
+      reading: string;
+      version: number;
+    };
     expect(settled.version).toBe(1);
     expect((await reviewer.post(`/api/readings/${ids.reading}/lock`, {})).status).toBe(200);
     expect((await reviewer.post(`/api/readings/${ids.reading}/settle`, settle)).status).toBe(409);
@@ -62,7 +65,9 @@ test.describe('the contract, from outside', () => {
     expect(tallies.endsWith('\r\n')).toBe(true);
     const cells = await (await reviewer.fetch(`/api/export/cells.csv?nest=${code}`)).text();
     expect(cells).toContain(`,0,0,0,small,,yes,no,no,2026-06-16T05:41:07.120-04:00,${egg.opId}\r\n`);
-    const amended = (await (await reviewer.post(`/api/readings/${ids.reading}/amend`, { reason: 'A later photo.' })).json()) as { version: number };
+    const amended = (await (
+      await reviewer.post(`/api/readings/${ids.reading}/amend`, { reason: 'A later photo.' })
+    ).json()) as { version: number };
     expect(amended.version).toBe(2);
   });
 

@@ -1,8 +1,9 @@
-import { execFileSync } from 'node:child_process';
+import { execFile } from 'node:child_process';
 import { existsSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
+import { promisify } from 'node:util';
 import { createConnection } from 'mariadb';
 import { endChild } from '@/lib/cli/child';
 import { startWebServer, waitUntilHealthy } from '@/lib/cli/web-server';
@@ -18,7 +19,7 @@ export interface OwnStack {
   /** Ends MariaDB with SIGKILL. */
   killDatabase(): Promise<void>;
   /** Starts MariaDB again; it recovers from its logs. */
-  startDatabase(): void;
+  startDatabase(): Promise<void>;
   /** Reads rows straight from MariaDB, past the application. */
   rows(sql: string, values?: unknown[]): Promise<Record<string, unknown>[]>;
   close(): Promise<void>;
@@ -55,16 +56,13 @@ export async function startOwnStack(): Promise<OwnStack> {
     PORT: String(port),
     NEXTAUTH_URL: origin,
   };
-  const script = (verb: string) =>
-    execFileSync('./docker-free-db.sh', [verb], {
-      env: { ...process.env, ...env },
-      stdio: ['ignore', 'ignore', 'inherit'],
-    });
-  script('start');
-  execFileSync('npm', ['run', '--silent', 'demo'], {
-    env: { ...process.env, ...env },
-    stdio: ['ignore', 'ignore', 'inherit'],
-  });
+  // Not the blocking form: while this process stands still, connections it keeps open would go stale unnoticed.
+  const run = async (command: string, ...args: string[]) => {
+    await promisify(execFile)(command, args, { env: { ...process.env, ...env } });
+  };
+  const script = (verb: string) => run('./docker-free-db.sh', verb);
+  await script('start');
+  await run('npm', 'run', '--silent', 'demo');
   const serve = async () => {
     const server = await startWebServer({ port, env, output: { file: join(folder, 'server.log') }, ownGroup: false });
     await waitUntilHealthy(server, port);
@@ -85,7 +83,7 @@ export async function startOwnStack(): Promise<OwnStack> {
       process.kill(pid, 'SIGKILL');
       await untilGone(pid);
     },
-    startDatabase: () => void script('start'),
+    startDatabase: () => script('start'),
     rows: async (sql, values) => {
       const password = readFileSync(join(folder, 'db-password'), 'utf8').trim();
       const connection = await createConnection({
@@ -103,7 +101,7 @@ export async function startOwnStack(): Promise<OwnStack> {
     },
     close: async () => {
       await endChild(server);
-      script('stop');
+      await script('stop');
       rmSync(folder, { recursive: true, force: true });
     },
   };

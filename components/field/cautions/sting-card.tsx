@@ -7,8 +7,8 @@ const CALL =
 /** What to do when somebody was stung. Gives no doses; the person's own plan and local medical direction rule. */
 export function StingCard(): ReactElement {
   return (
-    <section aria-label="After a sting" className="rounded-xl border-3 border-stop bg-stop-wash p-4">
-      <h3 className="text-xl font-bold text-stop">Somebody was stung</h3>
+    <section aria-label="Somebody was stung" className="rounded-xl border-3 border-stop bg-stop-wash p-4">
+      <p className="text-xl font-bold text-stop">Somebody was stung</p>
       <p className="mt-1">
         Stop and move away from the nest. Stay with the person.{' '}
         <strong>

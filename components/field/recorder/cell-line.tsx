@@ -2,21 +2,15 @@
 
 import type { ReactElement } from 'react';
 import { cellLine, cellTitle, earlierLine } from '@/components/field/words/cell-words';
-import { type Desk, stepTo } from './desk';
-
-/** The walk's keys for one cell back and forward. */
-const STEPS = {
-  back: { key: 'PageUp', shift: false },
-  forward: { key: 'PageDown', shift: false },
-} as const;
+import { besideInWalk, type Desk } from './desk';
 
 interface StepKeyProps {
   desk: Desk;
-  way: keyof typeof STEPS;
+  way: 'back' | 'forward';
 }
 
 function StepKey({ desk, way }: StepKeyProps): ReactElement {
-  const to = stepTo(desk.recorder.view, STEPS[way]);
+  const to = besideInWalk(desk.recorder.view, way === 'back' ? -1 : 1);
   return (
     <button
       type="button"

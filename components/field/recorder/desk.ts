@@ -1,9 +1,10 @@
 import { stepFrom, type Step } from '@/components/comb/comb-steps';
 import { type Axial, cellKey, parseCellKey } from '@/lib/comb/axial';
 import type { CellState } from '@/lib/comb/states';
+import { cellNumber } from '@/lib/comb/walk';
 import type { PressDetail, Recorder, RecorderView } from '@/lib/offline/recorder-view';
 import type { RecorderCommand } from './key-map';
-import { currentMark, flipToggle, pressState } from './recorder-acts';
+import { currentMark, flipToggle, paintCell, pressState } from './recorder-acts';
 
 /** How presses are understood: the walk names the cell, or one state is painted on the cells that are tapped. */
 export type Mode = { kind: 'walk' } | { kind: 'paint'; state: CellState };
@@ -16,6 +17,8 @@ export interface Desk {
   /** Note and instar that wait for the state of the current cell, when it bears no mark yet. */
   detail: PressDetail;
   setDetail: (detail: PressDetail) => void;
+  /** Asks whether a cell that bears a mark is to be taken off the comb. */
+  askNoCell: () => void;
 }
 
 /** Every place one can step to: marked cells, cells known from the last visit, and open places on the rim. */
@@ -37,9 +40,15 @@ export function stepTo(view: RecorderView, step: Step): Axial | null {
   return cellKey(to) === cellKey(from) ? null : to;
 }
 
-/** May "no cell here" be pressed? Not on a cell that bears a mark, nor on the pedicel cell: every comb has one. */
-export function mayBeNoCell({ current, marks }: Pick<RecorderView, 'current' | 'marks'>): boolean {
-  return current !== null && !marks.has(cellKey(current)) && (current.q !== 0 || current.r !== 0);
+/** One cell forward (1) or back (−1) in the walk from the current cell; null past either end. One pass, no sorting. */
+export function besideInWalk(view: RecorderView, way: 1 | -1): Axial | null {
+  const from = view.current ? cellNumber(view.current) : Number.POSITIVE_INFINITY;
+  let nearest: Axial | null = null;
+  for (const place of stopsOf(view)) {
+    if ((cellNumber(place) - from) * way <= 0) continue;
+    if (!nearest || (cellNumber(place) - cellNumber(nearest)) * way < 0) nearest = place;
+  }
+  return nearest;
 }
 
 /** A state was pressed: it marks the current cell, or becomes the one to paint with. */
@@ -50,9 +59,16 @@ export function chooseState({ recorder, mode, setMode, detail }: Desk, state: Ce
 
 /** A place of the picture was pressed: painted, gone to, or opened again after "no cell here". */
 export function pressPlace({ recorder, mode }: Desk, place: Axial): void {
-  if (mode.kind === 'paint') recorder.paint(place, mode.state);
+  if (mode.kind === 'paint') paintCell(recorder, place, mode.state);
   else if (recorder.view.skipped.has(cellKey(place))) recorder.unskip(place);
   else recorder.jump(place);
+}
+
+/** There is no cell here. On a cell that bears a mark that is asked first, because undo cannot bring its marks back. */
+export function pressNoCell({ recorder, mode, askNoCell }: Desk): void {
+  if (mode.kind === 'paint' || !recorder.view.current) return;
+  if (currentMark(recorder.view)) askNoCell();
+  else recorder.skip();
 }
 
 /** Does what a keyboard key asks. */
@@ -61,7 +77,7 @@ export function runCommand(desk: Desk, command: RecorderCommand): void {
   if (command.do === 'mark') return chooseState(desk, command.state);
   if (command.do === 'toggle') return flipToggle(recorder, command.mark);
   if (command.do === 'undo') return recorder.undo();
-  if (command.do === 'no-cell') return mayBeNoCell(recorder.view) ? recorder.skip() : undefined;
+  if (command.do === 'no-cell') return pressNoCell(desk);
   const to = stepTo(recorder.view, command.step);
   if (to) recorder.jump(to);
 }

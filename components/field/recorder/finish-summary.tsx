@@ -11,13 +11,13 @@ import { Part } from '@/components/field/parts/part';
 import { Screen } from '@/components/field/parts/screen';
 import { cellsOfMarks } from '@/components/field/readings/comb-cells';
 import type { Axial } from '@/lib/comb/axial';
-import type { Desk } from './desk';
+import type { Recorder } from '@/lib/offline/recorder-view';
 import { FinishChecks } from './finish-checks';
 import type { NestLabel } from './nest-label';
 import { NotSavedAlert } from './not-saved-alert';
 
 interface FinishSummaryProps {
-  desk: Desk;
+  recorder: Recorder;
   label: NestLabel;
   onBack: () => void;
 }
@@ -40,8 +40,7 @@ function useSubmit(submit: () => Promise<void>) {
 }
 
 /** The reading before it is handed in: the comb, the tally, what is open, and an estimate. */
-export function FinishSummary({ desk, label, onBack }: FinishSummaryProps): ReactElement {
-  const { recorder } = desk;
+export function FinishSummary({ recorder, label, onBack }: FinishSummaryProps): ReactElement {
   const { view } = recorder;
   const { state, press } = useSubmit(recorder.submit);
   const marks = [...view.marks.values()];

@@ -1,4 +1,4 @@
-import { cellKey } from '@/lib/comb/axial';
+import { type Axial, cellKey } from '@/lib/comb/axial';
 import type { CellState } from '@/lib/comb/states';
 import type { PressDetail, Recorder, RecorderMark, RecorderView, Toggles } from '@/lib/offline/recorder-view';
 
@@ -52,4 +52,18 @@ export function flipToggle(recorder: Recorder, name: keyof Toggles): void {
 /** Puts a note or an instar on a cell that bears a mark already. */
 export function putDetail(recorder: Recorder, detail: PressDetail): void {
   remark(recorder, shownToggles(recorder.view), detail);
+}
+
+/**
+ * Paints one cell. A cell that bears a mark keeps its toggles and note, as it does when its state is pressed; one that
+ * bears this state already is left alone.
+ */
+export function paintCell(recorder: Recorder, cell: Axial, state: CellState): void {
+  const mark = recorder.view.marks.get(cellKey(cell));
+  if (!mark) return recorder.paint(cell, state);
+  if (mark.state === state) return;
+  const { nectar, unsure, reused, scrap, note } = mark;
+  alignToggles(recorder, { nectar, unsure, reused, scrap });
+  recorder.jump(cell);
+  recorder.press(state, { note, instar: null });
 }

@@ -24,6 +24,9 @@ const LABELS =
   '[&>.comb-label:first-child]:top-0 [&>.comb-label:first-child]:left-0 ' +
   '[&>.comb-label:last-child]:bottom-0 [&>.comb-label:last-child]:left-0';
 
+/** A cell whose press is not known to be kept has a dashed wall, as bold as any other. */
+const PENDING = '[&_[data-pending]]:opacity-100 [&_[data-pending]>use:first-child]:[stroke-dasharray:3.5_3]';
+
 /** From this many cells on, the whole comb on a phone is too small for the corner marks. */
 const SMALL_FROM = 150;
 
@@ -49,7 +52,7 @@ export function RecorderComb({ desk, title, whole, looking, onPress }: RecorderC
           viewWindow={whole ? undefined : window}
           cellSize={whole && cells.length >= SMALL_FROM ? 16 : 44}
           sizing="fill"
-          className={LABELS}
+          className={`${LABELS} ${PENDING}`}
         />
       </div>
       <div className="absolute inset-x-0 top-1 z-2 max-h-full overflow-y-auto">

@@ -9,7 +9,6 @@ import { countedOf } from './counted-query';
 import { FinishSummary } from './finish-summary';
 import { type NestLabel, useNestLabel } from './nest-label';
 import { RecorderDesk } from './recorder-desk';
-import { useDesk } from './use-desk';
 import { useWakeLock } from './use-wake-lock';
 
 /** What the corner must say about presses the queue does not know of yet. */
@@ -41,7 +40,6 @@ function HeaderTitle({ label }: { label: NestLabel }): ReactElement {
 /** Reading a comb, from the first cell to handing in. */
 export function RecorderScreen({ recorder }: { recorder: Recorder }): ReactElement {
   const { view } = recorder;
-  const desk = useDesk(recorder);
   const { label, reader } = useNestLabel(view.nest);
   const [finishing, setFinishing] = useState(false);
   const turnTo = (summary: boolean): void => {
@@ -60,9 +58,9 @@ export function RecorderScreen({ recorder }: { recorder: Recorder }): ReactEleme
     >
       {reader}
       {finishing ? (
-        <FinishSummary desk={desk} label={label} onBack={() => turnTo(false)} />
+        <FinishSummary recorder={recorder} label={label} onBack={() => turnTo(false)} />
       ) : (
-        <RecorderDesk desk={desk} title={label.title} onFinish={() => turnTo(true)} />
+        <RecorderDesk recorder={recorder} title={label.title} onFinish={() => turnTo(true)} />
       )}
     </FieldFrame>
   );

@@ -1,13 +1,13 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { type Desk, mayBeNoCell } from './desk';
+import { type Desk, pressNoCell } from './desk';
 
 /** What undo would bring back, in words, with its key; and the key for a place where the comb has no cell. */
 export function UndoRow({ desk }: { desk: Desk }): ReactElement {
   const { recorder, mode } = desk;
   const { undoWords } = recorder.view;
-  const noCell = mode.kind === 'walk' && mayBeNoCell(recorder.view);
+  const mayBeNoCell = mode.kind === 'walk' && recorder.view.current !== null;
   return (
     <>
       <div className="col-span-2 flex min-h-field items-stretch overflow-hidden rounded-xl border-3 border-ink">
@@ -26,8 +26,8 @@ export function UndoRow({ desk }: { desk: Desk }): ReactElement {
       </div>
       <button
         type="button"
-        aria-disabled={!noCell}
-        onClick={() => noCell && recorder.skip()}
+        aria-disabled={!mayBeNoCell}
+        onClick={() => pressNoCell(desk)}
         className="min-h-field min-w-0 touch-manipulation rounded-xl border-3 border-ink bg-paper px-2 leading-tight font-bold select-none active:bg-main-wash aria-disabled:border-rule aria-disabled:text-quiet"
       >
         No cell here

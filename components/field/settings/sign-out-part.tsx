@@ -9,18 +9,30 @@ import { CopyUnsentKey } from '@/components/field/unsent/copy-unsent-key';
 import { type Outbox, useOutbox } from '@/lib/offline/hooks/use-outbox';
 import { useSession } from '@/lib/offline/hooks/use-session';
 
-/** Everything that would be at risk if this phone changed hands: unsent, held up, or not even saved. */
-function openItems(outbox: Outbox): number {
-  return outbox.waiting + outbox.unsaved + outbox.attention.filter((item) => item.why !== 'set-aside').length;
+/** Everything that has not arrived: unsent or held up. It stays on the phone when its person leaves. */
+function openItems({ waiting, attention }: Outbox): number {
+  return waiting + attention.filter((item) => item.why !== 'set-aside').length;
 }
 
-/** Shown in place of the key while something is unsent: signing out could leave it behind. */
-function NotYet({ outbox }: { outbox: Outbox }): ReactElement {
+/** Presses that only this open page holds: leaving would lose them, so there is no way out but to save them first. */
+function NotNow({ unsaved }: { unsaved: number }): ReactElement {
   return (
     <>
-      <Notice tone="warn" title={`Not yet: ${countWords(openItems(outbox), 'item')} unsent`}>
+      <Notice tone="stop" title={`Not now: ${countWords(unsaved, 'press', 'presses')} not saved`}>
+        <p>Go back to the reading and try again, or make a copy. Signing out now would lose them.</p>
+      </Notice>
+      <CopyUnsentKey>Copy of everything unsent</CopyUnsentKey>
+    </>
+  );
+}
+
+/** Warns about unsent work and offers to send or copy it first. */
+function StillHere({ outbox }: { outbox: Outbox }): ReactElement {
+  return (
+    <>
+      <Notice tone="warn" title={`Still on this phone: ${countWords(openItems(outbox), 'item')}`}>
         <p>
-          Send first. Signing out now could leave this work behind on the phone, where the next person cannot send it.
+          Send first. If you sign out all the same, they stay closed on this phone and go when you sign in here again.
         </p>
       </Notice>
       <div className="flex flex-wrap items-start gap-gap">
@@ -33,7 +45,8 @@ function NotYet({ outbox }: { outbox: Outbox }): ReactElement {
   );
 }
 
-function SignOutKey(): ReactElement {
+/** The key that leaves. A failure leaves everything as it was. */
+function SignOutKey({ children }: { children: string }): ReactElement {
   const { signOut } = useSession();
   const [state, setState] = useState<'ready' | 'leaving' | 'failed'>('ready');
   const leave = async (): Promise<void> => {
@@ -46,26 +59,31 @@ function SignOutKey(): ReactElement {
   };
   return (
     <>
-      <p>Everything of yours is at the office.</p>
       {state === 'failed' && (
         <Notice tone="warn" live="assertive" title="Still signed in">
-          <p>The office did not answer. Try again where there is signal.</p>
+          <p>That did not work. Nothing is lost. Try again.</p>
         </Notice>
       )}
       <FieldButton tone="stop" onClick={() => void leave()} disabled={state === 'leaving'}>
-        {state === 'leaving' ? 'Signing out …' : 'Sign out'}
+        {state === 'leaving' ? 'Signing out …' : children}
       </FieldButton>
     </>
   );
 }
 
-/** The way out. It stays shut while something is unsent, and says what to do. */
+function WaysOut({ outbox }: { outbox: Outbox }): ReactElement {
+  if (outbox.unsaved > 0) return <NotNow unsaved={outbox.unsaved} />;
+  if (openItems(outbox) === 0) return <SignOutKey>Sign out</SignOutKey>;
+  return (
+    <>
+      <StillHere outbox={outbox} />
+      <SignOutKey>Sign out and keep them here</SignOutKey>
+    </>
+  );
+}
+
+/** The way out: open when everything has arrived, with a warning when something is unsent, shut when it would lose work. */
 export function SignOutPart(): ReactElement {
   const outbox = useOutbox();
-  return (
-    <Part title="Sign out">
-      {outbox === undefined && <p>Looking for unsent work …</p>}
-      {outbox && (openItems(outbox) > 0 ? <NotYet outbox={outbox} /> : <SignOutKey />)}
-    </Part>
-  );
+  return <Part title="Sign out">{outbox ? <WaysOut outbox={outbox} /> : <p>Looking for unsent work …</p>}</Part>;
 }

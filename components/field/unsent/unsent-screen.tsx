@@ -42,6 +42,7 @@ function UnsentBody({ outbox }: { outbox: Outbox }): ReactElement {
       {outbox.attention.length > 0 && (
         <Part title="These need you">
           <UnsentItems items={outbox.attention} />
+          <FieldButton onClick={() => void outbox.acknowledge()}>I have seen these</FieldButton>
         </Part>
       )}
       {outbox.queue.length > 0 && (

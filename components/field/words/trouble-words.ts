@@ -12,10 +12,6 @@ const REFUSED: Readonly<Record<string, TroubleWords>> = {
     what: 'The office did not take it: only the person who opened a reading may mark in it.',
     todo: 'Start a reading of your own at this visit. This item stays on the phone and in the copy.',
   },
-  role: {
-    what: 'The office did not take it: your role may not do this.',
-    todo: 'Ask your coordinator. When your role changes, it is offered again.',
-  },
 };
 
 const SET_ASIDE: Readonly<Record<string, TroubleWords>> = {
@@ -30,6 +26,10 @@ const SET_ASIDE: Readonly<Record<string, TroubleWords>> = {
   exists: {
     what: 'It is at the office, set aside: the same thing was opened twice.',
     todo: 'Tell your coordinator. Both are kept.',
+  },
+  conflict: {
+    what: 'It is at the office beside another version of the same item. Both are kept.',
+    todo: 'Tell your coordinator. Nothing to do on this phone.',
   },
   'too-long': {
     what: 'It is at the office, set aside whole: the text is longer than 10,000 letters.',

@@ -54,3 +54,8 @@ export function isUnavailable(error: unknown): boolean {
   if (isRetryable(error) || (errno !== null && UNAVAILABLE_ERRNOS.has(errno))) return true;
   return error instanceof Error && NO_CONNECTION.test(error.name);
 }
+
+/** Did a row with this key exist already? */
+export function isDuplicateKey(error: unknown): boolean {
+  return errnoOf(error) === 1062;
+}

@@ -26,7 +26,11 @@ async function requireNest({ scope }: Snapshot, code: string | undefined, zone: 
   if (!found) throw new HttpProblem('not-found');
 }
 
-function respond(ctx: TeamContext, { file, query, requestId }: CsvRequest, { lines, snapshot }: { lines: ExportLines; snapshot: Snapshot }) {
+function respond(
+  ctx: TeamContext,
+  { file, query, requestId }: CsvRequest,
+  { lines, snapshot }: { lines: ExportLines; snapshot: Snapshot },
+) {
   const parts = lines({ ctx, scope: snapshot.scope, ...query });
   const stream = textStream(parts, async (error) => {
     if (error) log({ event: 'export-failed', requestId, ...describeError(error) });

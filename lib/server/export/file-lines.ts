@@ -22,7 +22,17 @@ async function* nestLines(call: ExportCall): AsyncGenerator<string> {
       const { lat = null, lon = null, accuracyM = null } = presentPlace(call.ctx.role, nest) ?? {};
       const openedAt = instantText(nest.opened_at_text, nest.opened_at);
       const { code, name, taxon } = nest;
-      const row = { team: call.ctx.teamName, nest: code, nestId: fromBinary(nest.id), name, taxon, lat, lon, accuracyM, openedAt };
+      const row = {
+        team: call.ctx.teamName,
+        nest: code,
+        nestId: fromBinary(nest.id),
+        name,
+        taxon,
+        lat,
+        lon,
+        accuracyM,
+        openedAt,
+      };
       yield writeRow(NESTS_FILE, row, call.form);
     }
   }
@@ -51,7 +61,11 @@ async function* cellLines(call: ExportCall): AsyncGenerator<string> {
   for await (const { key, cells } of readingStream(call)) {
     for (const { q, r, state, instar, nectar, unsure, reused, at, settledFrom } of cells) {
       const where = { ...key, cell: cellNumber({ q, r }), q, r };
-      yield writeRow(CELLS_FILE, { ...where, state, instar, nectar, unsure, reused, markedAt: at, settledFrom }, call.form);
+      yield writeRow(
+        CELLS_FILE,
+        { ...where, state, instar, nectar, unsure, reused, markedAt: at, settledFrom },
+        call.form,
+      );
     }
   }
 }

@@ -56,7 +56,11 @@ export async function* readingStream(call: ExportCall): AsyncGenerator<ExportRea
     const locked = lockedVersions(visits.flatMap((visit) => visit.readings));
     const listed = visits.flatMap((visit) => visit.readings.map((reading) => ({ ...visit, reading })));
     for (const chunk of chunksOf(listed.filter(({ reading }) => !isHidden(reading, scope, blind)))) {
-      const cells = await readingCells(scope, chunk.map(({ reading }) => reading), 'locked');
+      const cells = await readingCells(
+        scope,
+        chunk.map(({ reading }) => reading),
+        'locked',
+      );
       for (const item of chunk) {
         const id = idKey(item.reading.id);
         yield {

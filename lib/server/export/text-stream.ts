@@ -19,7 +19,10 @@ async function gather(parts: AsyncIterator<string>): Promise<{ text: string; don
  *
  * @param onEnd called once: after the last text, when making one failed, or when the reader went away.
  */
-export function textStream(parts: AsyncGenerator<string>, onEnd: (error?: unknown) => Promise<void>): ReadableStream<Uint8Array> {
+export function textStream(
+  parts: AsyncGenerator<string>,
+  onEnd: (error?: unknown) => Promise<void>,
+): ReadableStream<Uint8Array> {
   const encoder = new TextEncoder();
   let isOver = false;
   const end = async (error?: unknown) => {

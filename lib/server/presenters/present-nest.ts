@@ -71,7 +71,10 @@ export function presentNestSummary(
 }
 
 /** A visit with its readings. */
-export function presentVisit({ id, purpose, started_at_text, started_at }: VisitRow, readings: ReadingSummary[]): VisitAnswer {
+export function presentVisit(
+  { id, purpose, started_at_text, started_at }: VisitRow,
+  readings: ReadingSummary[],
+): VisitAnswer {
   return { id: fromBinary(id), purpose, startedAt: instantText(started_at_text, started_at), readings };
 }
 

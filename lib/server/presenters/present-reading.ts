@@ -62,7 +62,11 @@ function presentMark({ q, r, state, instar, nectar, unsure, reused, scrap, note,
 }
 
 /** A reading within its visit. @param cells null when they must not be shown. */
-export function presentReadingSummary(row: ReadingRow, facts: ReadingFacts, cells: readonly ReadCell[] | null): ReadingSummary {
+export function presentReadingSummary(
+  row: ReadingRow,
+  facts: ReadingFacts,
+  cells: readonly ReadCell[] | null,
+): ReadingSummary {
   return {
     id: fromBinary(row.id),
     kind: row.kind,

@@ -16,12 +16,17 @@ export interface Amendment {
 /** The members of an amendment's audit detail. */
 function readDetail(text: string): Pick<Amendment, 'version' | 'reason'> {
   const parsed: unknown = JSON.parse(text);
-  const { version, reason }: { version?: unknown; reason?: unknown } = parsed !== null && typeof parsed === 'object' ? parsed : {};
+  const { version, reason }: { version?: unknown; reason?: unknown } =
+    parsed !== null && typeof parsed === 'object' ? parsed : {};
   return { version: Number(version), reason: typeof reason === 'string' ? reason : '' };
 }
 
 /** The amendments of a final reading, oldest first, from the audit chain, the only place that holds their reasons. */
-export async function amendmentsOf({ team, db, transaction }: TeamScope, final: Buffer, nameOf: NameOf): Promise<Amendment[]> {
+export async function amendmentsOf(
+  { team, db, transaction }: TeamScope,
+  final: Buffer,
+  nameOf: NameOf,
+): Promise<Amendment[]> {
   const entries = await db.models.AuditEntry.findAll({
     where: { team_id: team, subject_id: final, action: 'reading.amend' },
     order: [['seq', 'ASC']],

@@ -1,6 +1,12 @@
 import 'server-only';
 import { type DurationRow } from '@/lib/brood/durations';
-import { type BroodSettings, DEFAULT_SETTINGS, SETTING_RULES, type Setting, type SettingName } from '@/lib/brood/settings';
+import {
+  type BroodSettings,
+  DEFAULT_SETTINGS,
+  SETTING_RULES,
+  type Setting,
+  type SettingName,
+} from '@/lib/brood/settings';
 import { isTrust } from '@/lib/brood/trust';
 import type { TeamScope } from './team-scope';
 
@@ -15,7 +21,9 @@ export interface TeamBroodSettings {
 function storedSetting(value: unknown): Setting | null {
   if (value === null || typeof value !== 'object') return null;
   const { value: number, trust, source }: { value?: unknown; trust?: unknown; source?: unknown } = value;
-  return typeof number === 'number' && isTrust(trust) && typeof source === 'string' ? { value: number, trust, source } : null;
+  return typeof number === 'number' && isTrust(trust) && typeof source === 'string'
+    ? { value: number, trust, source }
+    : null;
 }
 
 /** The numbers of a stored version; a name it lacks keeps the product's default. */

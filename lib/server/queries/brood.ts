@@ -39,8 +39,15 @@ async function broodReadings(scope: TeamScope, nest: Buffer): Promise<BroodReadi
     const census = censusOf(byVisit.get(idKey(visit.id)) ?? []);
     return census ? [{ census, at: visit.started_at.getTime() }] : [];
   });
-  const cells = await readingCells(scope, censuses.map(({ census }) => census));
-  return censuses.map(({ census, at }) => ({ id: fromBinary(census.id), at, marks: cells.get(idKey(census.id)) ?? [] }));
+  const cells = await readingCells(
+    scope,
+    censuses.map(({ census }) => census),
+  );
+  return censuses.map(({ census, at }) => ({
+    id: fromBinary(census.id),
+    at,
+    marks: cells.get(idKey(census.id)) ?? [],
+  }));
 }
 
 /**
@@ -54,6 +61,14 @@ export async function nestBrood(ctx: TeamContext, id: string, asOf: number): Pro
   const nest = await nestById(scope, id);
   const { version, settings } = await teamBroodSettings(scope);
   const readings = await broodReadings(scope, nest.id);
-  const input = { nest: fromBinary(nest.id), zone: ctx.zone, asOf, readings, taxon: nest.taxon, settings, digest: sha256 };
+  const input = {
+    nest: fromBinary(nest.id),
+    zone: ctx.zone,
+    asOf,
+    readings,
+    taxon: nest.taxon,
+    settings,
+    digest: sha256,
+  };
   return { estimate: estimateNest(input), settingsVersion: version };
 }

@@ -41,7 +41,10 @@ export async function nestWork(scope: TeamScope, nests: readonly Buffer[]): Prom
     const readings = latestReadings(own, byVisit);
     return { nest, visits: own, readings, census: shownCensus(readings, scope, blind) };
   });
-  const cells = await readingCells(scope, work.flatMap(({ census }) => census ?? []));
+  const cells = await readingCells(
+    scope,
+    work.flatMap(({ census }) => census ?? []),
+  );
   return new Map(
     work.map(({ nest, visits: own, readings, census }) => [
       idKey(nest),

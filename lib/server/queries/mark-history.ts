@@ -28,7 +28,12 @@ export function storedState(word: string): CellState {
 
 function loggedMark(row: InferAttributes<Mark>): LoggedMark {
   const { seq, q, r, instar, note, hlc } = row;
-  const flags = { nectar: Boolean(row.nectar), unsure: Boolean(row.unsure), reused: Boolean(row.reused), scrap: Boolean(row.scrap) };
+  const flags = {
+    nectar: Boolean(row.nectar),
+    unsure: Boolean(row.unsure),
+    reused: Boolean(row.reused),
+    scrap: Boolean(row.scrap),
+  };
   const ids = { opId: fromBinary(row.op_id), supersedes: fromBinaryOrNull(row.supersedes) };
   return { seq, q, r, state: storedState(row.state), ...flags, instar, note, ...ids, hlc, at: row.at_text };
 }
@@ -37,7 +42,11 @@ function loggedMark(row: InferAttributes<Mark>): LoggedMark {
 export async function markHistories(scope: TeamScope, readings: readonly Buffer[]): Promise<Map<string, MarkHistory>> {
   const histories = new Map(readings.map((id) => [idKey(id), { marks: [], retractions: [] } as MarkHistory]));
   if (histories.size === 0) return histories;
-  const find = { where: { team_id: scope.team, reading_id: [...readings] }, raw: true, transaction: scope.transaction } as const;
+  const find = {
+    where: { team_id: scope.team, reading_id: [...readings] },
+    raw: true,
+    transaction: scope.transaction,
+  } as const;
   for (const row of await scope.db.models.Mark.findAll(find)) {
     histories.get(idKey(row.reading_id))?.marks.push(loggedMark(row));
   }

@@ -25,7 +25,7 @@ function likePart(text: string): string {
 const LIKE = "COLLATE utf8mb4_unicode_ci LIKE :q ESCAPE '!'";
 
 /** That a visit `v` began on one of the local dates; null when any date will do. */
-export function visitDateCondition(range: LocalDateRange, zone: string): SqlCondition | null {
+function visitDateCondition(range: LocalDateRange, zone: string): SqlCondition | null {
   const { from, before } = instantRange(range, zone);
   const sql = [...(from ? ['v.started_at >= :from'] : []), ...(before ? ['v.started_at < :before'] : [])].join(' AND ');
   if (sql === '') return null;

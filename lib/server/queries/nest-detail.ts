@@ -13,9 +13,15 @@ import { type ReadingRow, readingsOfNests } from './reading-rows';
 import { type TeamScope, teamScope } from './team-scope';
 
 /** Readings with their tallies, by `idKey` of the visit; tallies that must not be seen are null. */
-async function summariesByVisit(scope: TeamScope, readings: readonly ReadingRow[]): Promise<Map<string, ReadingSummary[]>> {
+async function summariesByVisit(
+  scope: TeamScope,
+  readings: readonly ReadingRow[],
+): Promise<Map<string, ReadingSummary[]>> {
   const blind = await blindVisits(scope);
-  const cells = await readingCells(scope, readings.filter((reading) => !isHidden(reading, scope, blind)));
+  const cells = await readingCells(
+    scope,
+    readings.filter((reading) => !isHidden(reading, scope, blind)),
+  );
   const nameOf = await memberNames(scope);
   const locked = lockedVersions(readings);
   const byVisit = groupBy(readings, (reading) => idKey(reading.visit_id));

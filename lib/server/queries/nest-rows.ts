@@ -28,7 +28,10 @@ export async function nestById({ team, db, transaction }: TeamScope, id: string)
 }
 
 /** The visits of some nests in the order they began, archived ones included. */
-export async function visitsOfNests({ team, db, transaction }: TeamScope, nests: readonly Buffer[]): Promise<VisitRow[]> {
+export async function visitsOfNests(
+  { team, db, transaction }: TeamScope,
+  nests: readonly Buffer[],
+): Promise<VisitRow[]> {
   if (nests.length === 0) return [];
   return db.models.Visit.findAll({
     where: { team_id: team, nest_id: [...nests] },

@@ -10,7 +10,7 @@ import { selectRows } from './select-rows';
 import { type TeamScope, teamScope } from './team-scope';
 
 /** Nests on one page of the list. */
-export const NESTS_PER_PAGE = 25;
+const NESTS_PER_PAGE = 25;
 
 /** Nests whose marks are read at once when the list is sorted by cells. */
 const CHUNK = 100;
@@ -24,7 +24,11 @@ interface Slice {
 }
 
 /** The ids of matching nests in order. Text from outside never becomes part of the SQL: the column is looked up. */
-async function orderedIds(scope: TeamScope, query: NestListQuery & { where: SqlCondition }, slice?: Slice): Promise<Buffer[]> {
+async function orderedIds(
+  scope: TeamScope,
+  query: NestListQuery & { where: SqlCondition },
+  slice?: Slice,
+): Promise<Buffer[]> {
   const column = SORT_COLUMNS[query.sort] ?? 'n.code';
   const rows = await selectRows<{ id: Buffer }>(
     scope,
@@ -66,7 +70,11 @@ async function summaries(scope: TeamScope, ids: Buffer[]): Promise<NestSummary[]
 export async function nestsList(ctx: TeamContext, query: NestListQuery): Promise<NestList> {
   const scope = teamScope(ctx);
   const where = nestCondition(query.filter, ctx.zone);
-  const [count] = await selectRows<{ total: number }>(scope, `SELECT COUNT(*) AS total FROM nests n WHERE ${where.sql}`, where.values);
+  const [count] = await selectRows<{ total: number }>(
+    scope,
+    `SELECT COUNT(*) AS total FROM nests n WHERE ${where.sql}`,
+    where.values,
+  );
   const total = Number(count?.total ?? 0);
   const slice = { limit: NESTS_PER_PAGE, offset: (query.page - 1) * NESTS_PER_PAGE };
   const ids =

@@ -59,7 +59,13 @@ export async function readingCells(
   const sources = new Map(readings.map((reading) => [idKey(sourceId(reading)), sourceId(reading)]));
   const histories = await markHistories(scope, [...sources.values()]);
   const finals = readings.filter((reading) => reading.kind === 'final');
-  const decided = groupBy(await settlementsOf(scope, finals.map((reading) => reading.id)), (row) => idKey(row.reading_id));
+  const decided = groupBy(
+    await settlementsOf(
+      scope,
+      finals.map((reading) => reading.id),
+    ),
+    (row) => idKey(row.reading_id),
+  );
   const cells = new Map<string, ReadCell[]>();
   for (const reading of readings) {
     const last = shown === 'locked' ? (reading.locked_version ?? Infinity) : Infinity;

@@ -68,7 +68,15 @@ async function standingOf(scope: TeamScope, final: ReadingRow): Promise<FinalSta
 function presentSettlement(row: SettlementRow, nameOf: NameOf): SettlementAnswer {
   const { q, r, reason, version } = row;
   const who = { actor: nameOf(row.actor_id), at: row.created_at.toISOString() };
-  return { q, r, state: storedState(row.state), reason, ...who, version, settledFrom: fromBinaryOrNull(row.mark_op_id) };
+  return {
+    q,
+    r,
+    state: storedState(row.state),
+    reason,
+    ...who,
+    version,
+    settledFrom: fromBinaryOrNull(row.mark_op_id),
+  };
 }
 
 /**

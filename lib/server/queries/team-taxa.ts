@@ -11,6 +11,10 @@ export interface TeamTaxon {
 /** The team's taxa by name. */
 export async function teamTaxa(ctx: TeamContext): Promise<TeamTaxon[]> {
   const { team, db } = teamScope(ctx);
-  const rows = await db.models.Taxon.findAll({ where: { team_id: team }, order: [['scientific_name', 'ASC']], raw: true });
+  const rows = await db.models.Taxon.findAll({
+    where: { team_id: team },
+    order: [['scientific_name', 'ASC']],
+    raw: true,
+  });
   return rows.map((row) => ({ name: row.scientific_name, status: row.status }));
 }

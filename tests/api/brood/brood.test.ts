@@ -23,7 +23,8 @@ async function brood(nest: string, query = 'asOf=2026-06-16', as = team.members.
   return (await response.json()) as BroodEstimate;
 }
 
-const stored = (nest: string) => database().models.Estimate.findAll({ where: { team_id: toBinary(team.teamId), nest_id: toBinary(nest) }, raw: true });
+const stored = (nest: string) =>
+  database().models.Estimate.findAll({ where: { team_id: toBinary(team.teamId), nest_id: toBinary(nest) }, raw: true });
 
 /** A nest with a field reading of N12 on 16 June. */
 async function n12() {
@@ -50,7 +51,9 @@ describe('GET /api/nests/<id>/brood', () => {
   it('looks at the final reading once there is one, and is another estimate then', async () => {
     const { nest, reading } = await n12();
     const before = await brood(nest);
-    const { reading: final } = await decided(await settle(team.members.biologist, reading, [{ q: 0, r: 0, state: 'egg' }]));
+    const { reading: final } = await decided(
+      await settle(team.members.biologist, reading, [{ q: 0, r: 0, state: 'egg' }]),
+    );
     const after = await brood(nest);
     expect(before.readings).toEqual([reading]);
     expect(after.readings).toEqual([final]);
@@ -60,7 +63,13 @@ describe('GET /api/nests/<id>/brood', () => {
 
   it('takes one reading a visit, field before second, and dates a photo by the visit', async () => {
     const { nest, visit, reading } = await n12();
-    await makeReading(team, { nest, visit, kind: 'second', openedAt: '2026-08-01T09:00:00.000-04:00', marks: n12Marks('blind') });
+    await makeReading(team, {
+      nest,
+      visit,
+      kind: 'second',
+      openedAt: '2026-08-01T09:00:00.000-04:00',
+      marks: n12Marks('blind'),
+    });
     expect((await brood(nest)).readings).toEqual([reading]);
     const other = await makeNest(team, { code: 'P' });
     const second = await makeReading(team, {
@@ -79,7 +88,10 @@ describe('GET /api/nests/<id>/brood', () => {
     const { nest, reading } = await n12();
     const later = await makeVisit(team, nest, { startedAt: '2026-06-20T06:00:00.000-04:00' });
     const second = await makeReading(team, { nest, visit: later, marks: n12Marks('final') });
-    const mistaken = await makeVisit(team, nest, { startedAt: '2026-06-19T06:00:00.000-04:00', archivedAt: '2026-06-19T12:00:00Z' });
+    const mistaken = await makeVisit(team, nest, {
+      startedAt: '2026-06-19T06:00:00.000-04:00',
+      archivedAt: '2026-06-19T12:00:00Z',
+    });
     await makeReading(team, { nest, visit: mistaken, marks: [{ q: 0, r: 0, state: 'dead' }] });
     expect((await brood(nest, 'asOf=2026-06-15')).readings).toEqual([]);
     expect((await brood(nest, 'asOf=2026-06-19')).readings).toEqual([reading]);
@@ -91,13 +103,23 @@ describe('GET /api/nests/<id>/brood', () => {
 
   it('answers for a nest that nobody has read', async () => {
     const answer = await brood(await makeNest(team));
-    expect(answer).toMatchObject({ cells: [], readings: [], nest: { founded: null, firstEmergence: null, season: 'grey' } });
+    expect(answer).toMatchObject({
+      cells: [],
+      readings: [],
+      nest: { founded: null, firstEmergence: null, season: 'grey' },
+    });
   });
 
   it('leaves out what a blind second reader must not see', async () => {
     const { nest, visit, reading } = await n12();
     await lock(team.members.biologist, reading);
-    const own = await makeReading(team, { nest, visit, kind: 'second', submittedAt: null, marks: [{ q: 0, r: 0, state: 'egg' }] });
+    const own = await makeReading(team, {
+      nest,
+      visit,
+      kind: 'second',
+      submittedAt: null,
+      marks: [{ q: 0, r: 0, state: 'egg' }],
+    });
     const blind = await brood(nest, 'asOf=2026-06-16', team.members.reviewer);
     expect(blind.readings).toEqual([own]);
     expect(blind.cells).toHaveLength(1);
@@ -126,29 +148,56 @@ describe('GET /api/nests/<id>/brood', () => {
     const before = await brood(nest, undefined, by);
     const { SettingsVersion, DurationSet } = database().models;
     for (const version of [1, 2]) {
-      const settings = JSON.stringify({ lossCapped: { value: 0.2, trust: 'assumption', source: 'a trial' }, nonsense: 1, lossEgg: 'high' });
-      await SettingsVersion.create({ team_id: toBinary(own.teamId), version, settings, signed_by: null, signed_at: new Date(0) });
+      const settings = JSON.stringify({
+        lossCapped: { value: 0.2, trust: 'assumption', source: 'a trial' },
+        nonsense: 1,
+        lossEgg: 'high',
+      });
+      await SettingsVersion.create({
+        team_id: toBinary(own.teamId),
+        version,
+        settings,
+        signed_by: null,
+        signed_at: new Date(0),
+      });
     }
     const days = { egg_days: 22, larva_days: 40, capped_days: 28, reference_c: 25, trust: 'medium', source: 'a trial' };
     await DurationSet.create({ team_id: toBinary(own.teamId), version: 2, taxon: 'Polistes fuscatus', ...days });
     const after = await brood(nest, undefined, by);
     expect([before.settings.version, after.settings.version]).toEqual([DEFAULT_SETTINGS.version, '2']);
-    expect(after.durations).toMatchObject({ taxon: 'Polistes fuscatus', egg: 22, larva: 40, capped: 28, source: 'a trial' });
+    expect(after.durations).toMatchObject({
+      taxon: 'Polistes fuscatus',
+      egg: 22,
+      larva: 40,
+      capped: 28,
+      source: 'a trial',
+    });
     expect(after.cells[0]?.lost.probability).toBeGreaterThan(2 * (before.cells[0]?.lost.probability ?? 1));
     expect(after.inputDigest).not.toBe(before.inputDigest);
   });
 
-  it.each(['yesterday', '2026-02-30', '2026-06-16T12:00:00', '2026-13-01T00:00:00Z', '1781602867120', '2026-06-16T25:00:00Z'])(
-    'answers 400 to asOf=%s',
-    async (asOf) => {
-      const { nest } = await n12();
-      const response = await callApi(broodRoute, 'GET', { as: team.members.technician, params: { id: nest }, query: `asOf=${asOf}` });
-      expect(await problemOf(response)).toEqual([400, 'param']);
-    },
-  );
+  it.each([
+    'yesterday',
+    '2026-02-30',
+    '2026-06-16T12:00:00',
+    '2026-13-01T00:00:00Z',
+    '1781602867120',
+    '2026-06-16T25:00:00Z',
+  ])('answers 400 to asOf=%s', async (asOf) => {
+    const { nest } = await n12();
+    const response = await callApi(broodRoute, 'GET', {
+      as: team.members.technician,
+      params: { id: nest },
+      query: `asOf=${asOf}`,
+    });
+    expect(await problemOf(response)).toEqual([400, 'param']);
+  });
 
   it('answers 404 for an unknown nest, and keeps nothing', async () => {
-    const response = await callApi(broodRoute, 'GET', { as: team.members.technician, params: { id: '00000000-0000-7000-8000-000000000000' } });
+    const response = await callApi(broodRoute, 'GET', {
+      as: team.members.technician,
+      params: { id: '00000000-0000-7000-8000-000000000000' },
+    });
     expect(await problemOf(response)).toEqual([404, 'not-found']);
   });
 });

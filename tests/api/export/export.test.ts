@@ -23,8 +23,8 @@ beforeAll(async () => {
 });
 
 /** A nest with one field reading of two cells on one day. */
-async function simpleNest(own: TestTeam, code: string, startedAt: string, taxon: string | null = 'Polistes fuscatus') {
-  const nest = await makeNest(own, { code, taxon });
+async function simpleNest(own: TestTeam, nestInput: { code: string; taxon?: string | null }, startedAt: string) {
+  const nest = await makeNest(own, nestInput);
   const visit = await makeVisit(own, nest, { startedAt });
   const reading = await makeReading(own, { nest, visit, openedAt: startedAt });
   const opIds = await makeMarks(own, reading, [
@@ -37,8 +37,10 @@ async function simpleNest(own: TestTeam, code: string, startedAt: string, taxon:
 describe('files', () => {
   it('hold every reading, final ones included, byte for byte as the contract says', async () => {
     const own = await makeTeam({ name: 'Byte, for byte' });
-    const { nest, visit, reading, opIds } = await simpleNest(own, 'N12', '2026-06-16T23:35:00.000-04:00');
-    const { reading: final } = await decided(await settle(own.members.reviewer, reading, [{ q: 0, r: -1, state: 'capped' }]));
+    const { nest, visit, reading, opIds } = await simpleNest(own, { code: 'N12' }, '2026-06-16T23:35:00.000-04:00');
+    const { reading: final } = await decided(
+      await settle(own.members.reviewer, reading, [{ q: 0, r: -1, state: 'capped' }]),
+    );
     await lock(own.members.biologist, final);
     const at = `"Byte, for byte",N12,${visit},2026-06-16`;
     expect(await downloaded(own.members.coordinator, 'tallies.csv')).toBe(
@@ -92,16 +94,34 @@ describe('files', () => {
     const early = await makeVisit(own, nest, { startedAt: '2026-06-16T06:00:00.000-04:00' });
     const mark = n12Marks('field');
     const third = await makeReading(own, { nest, visit: late, openedAt: '2026-06-20T06:10:00.000-04:00', marks: mark });
-    const second = await makeReading(own, { nest, visit: early, kind: 'second', openedAt: '2026-06-18T09:00:00.000-04:00', marks: n12Marks('blind') });
-    const first = await makeReading(own, { nest, visit: early, openedAt: '2026-06-16T06:10:00.000-04:00', marks: [...mark].reverse() });
-    const zeroth = await makeReading(own, { nest: other, visit: await makeVisit(own, other, { startedAt: '2026-07-01T06:00:00.000-04:00' }) });
+    const second = await makeReading(own, {
+      nest,
+      visit: early,
+      kind: 'second',
+      openedAt: '2026-06-18T09:00:00.000-04:00',
+      marks: n12Marks('blind'),
+    });
+    const first = await makeReading(own, {
+      nest,
+      visit: early,
+      openedAt: '2026-06-16T06:10:00.000-04:00',
+      marks: [...mark].reverse(),
+    });
+    const zeroth = await makeReading(own, {
+      nest: other,
+      visit: await makeVisit(own, other, { startedAt: '2026-07-01T06:00:00.000-04:00' }),
+    });
     const tallies = csvObjects(await downloaded(own.members.reviewer, 'tallies.csv'));
     expect(tallies.map((row) => row.reading)).toEqual([zeroth, first, second, third]);
     const cells = csvObjects(await downloaded(own.members.reviewer, 'cells.csv'));
     expect(cells.map((row) => row.reading)).toEqual([first, second, third].flatMap((id) => N12.map(() => id)));
     expect(cells.slice(0, 33).map((row) => Number(row.cell))).toEqual(N12.map(({ cell }) => cell));
     for (const row of cells) expect(Number(row.cell)).toBe(cellNumber({ q: Number(row.q), r: Number(row.r) }));
-    expect(tallies.map((row) => [row.capped, row.parasitised, row.large, row.medium, row.small, row.egg, row.empty]).slice(1, 3)).toEqual([
+    expect(
+      tallies
+        .map((row) => [row.capped, row.parasitised, row.large, row.medium, row.small, row.egg, row.empty])
+        .slice(1, 3),
+    ).toEqual([
       ['6', '1', '6', '4', '6', '9', '1'],
       ['7', '0', '7', '4', '5', '10', '0'],
     ]);
@@ -109,7 +129,7 @@ describe('files', () => {
 
   it('show a locked version until the next one is locked, so that the number fits the cells', async () => {
     const own = await makeTeam({ name: 'Amenders' });
-    const { reading } = await simpleNest(own, 'N12', '2026-06-16T05:35:00.000-04:00');
+    const { reading } = await simpleNest(own, { code: 'N12' }, '2026-06-16T05:35:00.000-04:00');
     const { reviewer, researcher } = own.members;
     const final = async () => {
       const rows = csvObjects(await downloaded(researcher, 'tallies.csv'));
@@ -137,9 +157,15 @@ describe('files', () => {
 
   it('leave out what a blind second reader must not see', async () => {
     const own = await makeTeam({ name: 'Blind' });
-    const { nest, visit, reading } = await simpleNest(own, 'N12', '2026-06-16T05:35:00.000-04:00');
+    const { nest, visit, reading } = await simpleNest(own, { code: 'N12' }, '2026-06-16T05:35:00.000-04:00');
     await lock(own.members.biologist, reading);
-    const second = await makeReading(own, { nest, visit, kind: 'second', submittedAt: null, marks: [{ q: 0, r: 0, state: 'dead' }] });
+    const second = await makeReading(own, {
+      nest,
+      visit,
+      kind: 'second',
+      submittedAt: null,
+      marks: [{ q: 0, r: 0, state: 'dead' }],
+    });
     for (const file of ['tallies.csv', 'cells.csv']) {
       const seen = (text: string) => new Set(csvObjects(text).map((row) => row.reading));
       expect(seen(await downloaded(own.members.reviewer, file))).toEqual(new Set([second]));
@@ -171,14 +197,23 @@ describe('the spreadsheet form', () => {
 
   it('guards what people typed and nothing else; the exact form changes no character', async () => {
     const own = await makeTeam({ name: '@team', canary: '' });
-    const nest = await makeNest(own, { code: '-1+2', name: evil, taxon: '\uff1dSUM(1)', place: { lat: -43.5, lon: -77.25 } });
+    const nest = await makeNest(own, {
+      code: '-1+2',
+      name: evil,
+      taxon: '\uff1dSUM(1)',
+      place: { lat: -43.5, lon: -77.25 },
+    });
     const visit = await makeVisit(own, nest);
     await makeReading(own, { nest, visit, marks: [{ q: -1, r: 0, state: 'egg' }] });
     const exact = csvObjects(await downloaded(own.members.coordinator, 'nests.csv'));
-    expect(exact).toMatchObject([{ team: '@team', nest: '-1+2', name: evil, taxon: '\uff1dSUM(1)', lat: '-43.5', lon: '-77.25' }]);
+    expect(exact).toMatchObject([
+      { team: '@team', nest: '-1+2', name: evil, taxon: '\uff1dSUM(1)', lat: '-43.5', lon: '-77.25' },
+    ]);
     const text = await downloaded(own.members.coordinator, 'nests.csv', 'for=spreadsheet');
     expect(text.startsWith('\ufeffteam,nest,')).toBe(true);
-    expect(csvObjects(text)).toMatchObject([{ team: "'@team", nest: "'-1+2", name: `'${evil}`, taxon: "'\uff1dSUM(1)", lat: '-43.5', lon: '-77.25' }]);
+    expect(csvObjects(text)).toMatchObject([
+      { team: "'@team", nest: "'-1+2", name: `'${evil}`, taxon: "'\uff1dSUM(1)", lat: '-43.5', lon: '-77.25' },
+    ]);
     const cells = csvObjects(await downloaded(own.members.coordinator, 'cells.csv', 'for=spreadsheet'));
     expect(cells).toMatchObject([{ nest: "'-1+2", q: '-1', r: '0', state: 'egg' }]);
     expect((await downloaded(own.members.coordinator, 'cells.csv')).startsWith('team,')).toBe(true);
@@ -186,10 +221,23 @@ describe('the spreadsheet form', () => {
 
   it('reads back field by field, in both forms, whatever a name holds', async () => {
     const own = await makeTeam({ name: 'Nasty' });
-    const names = ['a,b', 'say "so"', 'two\nlines', 'a;b', '\ttab', "'", '<script>alert(1)</script>', '👩\u200d🔬 e\u0301\u202e', '', ' '];
+    const names = [
+      'a,b',
+      'say "so"',
+      'two\nlines',
+      'a;b',
+      '\ttab',
+      "'",
+      '<script>alert(1)</script>',
+      '👩\u200d🔬 e\u0301\u202e',
+      '',
+      ' ',
+    ];
     for (const [index, name] of names.entries()) await makeNest(own, { code: `N${index}`, name });
     expect(csvObjects(await downloaded(own.members.coordinator, 'nests.csv')).map((row) => row.name)).toEqual(names);
-    const guarded = csvObjects(await downloaded(own.members.coordinator, 'nests.csv', 'for=spreadsheet')).map((row) => row.name);
+    const guarded = csvObjects(await downloaded(own.members.coordinator, 'nests.csv', 'for=spreadsheet')).map(
+      (row) => row.name,
+    );
     expect(guarded).toEqual(names.map((name) => (name.startsWith('\t') ? `'${name}` : name)));
   });
 });
@@ -199,10 +247,10 @@ describe('filters', () => {
 
   beforeAll(async () => {
     own = await makeTeam({ name: 'Filtered' });
-    await simpleNest(own, 'N01', '2026-05-21T23:59:00.000-04:00');
-    await simpleNest(own, 'N02', '2026-05-22T00:00:00.000-04:00', 'Polistes metricus');
-    await simpleNest(own, 'N03', '2026-05-23T12:00:00.000-04:00', null);
-    await simpleNest(own, 'N01', '2026-05-24T12:00:00.000-04:00', 'Polistes metricus');
+    await simpleNest(own, { code: 'N01' }, '2026-05-21T23:59:00.000-04:00');
+    await simpleNest(own, { code: 'N02', taxon: 'Polistes metricus' }, '2026-05-22T00:00:00.000-04:00');
+    await simpleNest(own, { code: 'N03', taxon: null }, '2026-05-23T12:00:00.000-04:00');
+    await simpleNest(own, { code: 'N01', taxon: 'Polistes metricus' }, '2026-05-24T12:00:00.000-04:00');
   });
 
   it.each([
@@ -245,9 +293,12 @@ describe('filters', () => {
     expect(await problemOf(await exportFile(own.members.reviewer, 'cells.csv', query))).toEqual([status, code]);
   });
 
-  it.each(['photos.csv', 'cells', 'cells.CSV', 'cells.csv/..', '__proto__', 'constructor', ''])('there is no file %j', async (file) => {
-    expect(await problemOf(await exportFile(own.members.reviewer, file))).toEqual([404, 'not-found']);
-  });
+  it.each(['photos.csv', 'cells', 'cells.CSV', 'cells.csv/..', '__proto__', 'constructor', ''])(
+    'there is no file %j',
+    async (file) => {
+      expect(await problemOf(await exportFile(own.members.reviewer, file))).toEqual([404, 'not-found']);
+    },
+  );
 
   it('is for everybody but technicians, and for nobody who is not signed in', async () => {
     for (const file of [...FILES, 'photos.csv']) {

@@ -21,7 +21,11 @@ let team: TestTeam;
 
 beforeAll(async () => {
   team = await makeTeam();
-  await makeBulk(team, { nests: READINGS / READINGS_OF_A_NEST, readingsOfANest: READINGS_OF_A_NEST, cellsOfAReading: CELLS });
+  await makeBulk(team, {
+    nests: READINGS / READINGS_OF_A_NEST,
+    readingsOfANest: READINGS_OF_A_NEST,
+    cellsOfAReading: CELLS,
+  });
 }, 600_000);
 
 afterAll(() => exportDatabase().sequelize.close());

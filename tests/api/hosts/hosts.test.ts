@@ -14,9 +14,25 @@ beforeAll(async () => {
   const own = { team_id: toBinary(team.teamId), capacity: 2 };
   const { Host } = database().models;
   const place = { place_name: 'Skelder lock', lat: 43.653, lon: -77.561 };
-  await Host.create({ ...own, ...place, id: toBinary(ids.lock), code: 'H4', name: 'R. Tarn', note: 'no signal', withdrawn_on: '2026-07-03' });
+  await Host.create({
+    ...own,
+    ...place,
+    id: toBinary(ids.lock),
+    code: 'H4',
+    name: 'R. Tarn',
+    note: 'no signal',
+    withdrawn_on: '2026-07-03',
+  });
   const unplaced = { place_name: 'Pellow orchard', lat: null, lon: null };
-  await Host.create({ ...own, ...unplaced, id: toBinary(ids.orchard), code: 'H1', name: 'Greta Ansby', note: null, withdrawn_on: null });
+  await Host.create({
+    ...own,
+    ...unplaced,
+    id: toBinary(ids.orchard),
+    code: 'H1',
+    name: 'Greta Ansby',
+    note: null,
+    withdrawn_on: null,
+  });
 });
 
 async function hostsSeenBy(as: TestMember): Promise<unknown> {
@@ -53,7 +69,9 @@ it('lists the hosts by code', async () => {
 });
 
 it('keeps notes about hosts from technicians, who need the way there', async () => {
-  expect(await hostsSeenBy(team.members.technician)).toMatchObject({ hosts: [{}, { code: 'H4', note: null, place: { lat: 43.653 } }] });
+  expect(await hostsSeenBy(team.members.technician)).toMatchObject({
+    hosts: [{}, { code: 'H4', note: null, place: { lat: 43.653 } }],
+  });
 });
 
 it('is not for researchers', async () => {

@@ -30,7 +30,11 @@ const ids = { n01: '', n02: '', n03: '', early: '', late: '', reading: '' };
 
 beforeAll(async () => {
   team = await makeTeam();
-  ids.n01 = await makeNest(team, { code: 'N01', name: 'Boat house, 100% shade', openedAt: '2026-05-18T09:00:00.000-04:00' });
+  ids.n01 = await makeNest(team, {
+    code: 'N01',
+    name: 'Boat house, 100% shade',
+    openedAt: '2026-05-18T09:00:00.000-04:00',
+  });
   ids.n02 = await makeNest(team, {
     code: 'N02',
     name: 'bike_shed',
@@ -59,7 +63,11 @@ beforeAll(async () => {
   ]);
   await makeMarks(team, open, [{ q: 0, r: 0, state: 'small', supersedes: first }]);
   await makeRetraction(team, open, second);
-  await lockReading(await memberContext(team.teamId, team.members.biologist.userId), { id: ids.reading }, Date.parse('2026-06-01T12:00:00Z'));
+  await lockReading(
+    await memberContext(team.teamId, team.members.biologist.userId),
+    { id: ids.reading },
+    Date.parse('2026-06-01T12:00:00Z'),
+  );
 });
 
 describe('GET /api/nests', () => {
@@ -203,7 +211,13 @@ describe('GET /api/nests', () => {
 describe('GET /api/nests/<id>', () => {
   it('shows a nest with its visits, readings and tallies in order', async () => {
     const nest = await detail(ids.n01);
-    expect(nest).toMatchObject({ id: ids.n01, code: 'N01', name: 'Boat house, 100% shade', taxon: 'Polistes fuscatus', place: null });
+    expect(nest).toMatchObject({
+      id: ids.n01,
+      code: 'N01',
+      name: 'Boat house, 100% shade',
+      taxon: 'Polistes fuscatus',
+      place: null,
+    });
     expect(nest.visits.map(({ id, purpose, startedAt }) => [id, purpose, startedAt])).toEqual([
       [ids.early, 'take-down', '2026-05-21T07:10:00.000-04:00'],
       [ids.late, 'check', '2026-05-31T23:30:00.000-04:00'],
@@ -233,7 +247,12 @@ describe('GET /api/nests/<id>', () => {
         nectarCells: 1,
       },
     });
-    expect(final).toMatchObject({ kind: 'final', observer: 'The biologist', lockedVersion: 1, tally: { cellsTotal: 3 } });
+    expect(final).toMatchObject({
+      kind: 'final',
+      observer: 'The biologist',
+      lockedVersion: 1,
+      tally: { cellsTotal: 3 },
+    });
   });
 
   it('shows everybody but a researcher the exact place', async () => {
@@ -242,10 +261,13 @@ describe('GET /api/nests/<id>', () => {
     expect((await detail(ids.n02, team.members.researcher)).place).toEqual({ lat: 43.57, lon: -77.6, accuracyM: null });
   });
 
-  it.each(['not-an-id', '00000000-0000-7000-8000-000000000000', 'CAFE', '../nests', "' OR 1=1--"])('answers 404 to %s', async (id) => {
-    const response = await callApi(nestRoute, 'GET', { as: team.members.technician, params: { id } });
-    expect(await problemOf(response)).toEqual([404, 'not-found']);
-  });
+  it.each(['not-an-id', '00000000-0000-7000-8000-000000000000', 'CAFE', '../nests', "' OR 1=1--"])(
+    'answers 404 to %s',
+    async (id) => {
+      const response = await callApi(nestRoute, 'GET', { as: team.members.technician, params: { id } });
+      expect(await problemOf(response)).toEqual([404, 'not-found']);
+    },
+  );
 
   it('asks who is there before anything else', async () => {
     expect(await problemOf(await callApi(nestRoute, 'GET', { params: { id: ids.n01 } }))).toEqual([401, 'signin']);

@@ -36,15 +36,21 @@ describe('settle', () => {
   it('makes a final reading beside the observer’s, whose marks stay as they are', async () => {
     const { id, opIds } = await fieldReading();
     const before = await readReading(team.members.technician, id);
-    const { reading, version } = await decided(await settle(team.members.reviewer, id, [{ q: 0, r: 0, state: 'small' }]));
+    const { reading, version } = await decided(
+      await settle(team.members.reviewer, id, [{ q: 0, r: 0, state: 'small' }]),
+    );
     expect(version).toBe(1);
     expect(reading).not.toBe(id);
     const final = await readReading(team.members.technician, reading);
-    expect(final).toMatchObject({ kind: 'final', nest, visit: before.visit, source: 'phone', observer: 'The reviewer', lockedVersion: null });
-    expect(final.marks).toEqual([
-      { ...before.marks[0], state: 'small' },
-      { ...before.marks[1] },
-    ]);
+    expect(final).toMatchObject({
+      kind: 'final',
+      nest,
+      visit: before.visit,
+      source: 'phone',
+      observer: 'The reviewer',
+      lockedVersion: null,
+    });
+    expect(final.marks).toEqual([{ ...before.marks[0], state: 'small' }, { ...before.marks[1] }]);
     expect(final.marks[0]).toMatchObject({ opId: opIds[0], at: '2026-06-16T05:41:00.000-04:00', nectar: true });
     expect(await readReading(team.members.technician, id)).toEqual(before);
   });
@@ -72,7 +78,17 @@ describe('settle', () => {
     ]);
     const ctx = await memberContext(team.teamId, team.members.reviewer.userId);
     const { settlements } = await readingReview(ctx, id);
-    expect(settlements.map(({ q, r, state, reason, settledFrom, actor, version }) => [q, r, state, reason, settledFrom, actor, version])).toEqual([
+    expect(
+      settlements.map(({ q, r, state, reason, settledFrom, actor, version }) => [
+        q,
+        r,
+        state,
+        reason,
+        settledFrom,
+        actor,
+        version,
+      ]),
+    ).toEqual([
       [0, 0, 'small', 'The head shows.', opIds[0], 'The reviewer', 1],
       [3, 0, 'egg', 'Missed at the rim.', null, 'The reviewer', 1],
     ]);
@@ -104,7 +120,11 @@ describe('settle', () => {
     ['cells that are no list', { cells: { q: 0 } }, 'shape'],
     ['no member', {}, 'shape'],
     ['a cell twice', { cells: [cell({}), cell({ state: 'small' })] }, 'shape'],
-    ['a cell twice, once as −0', '{"cells":[{"q":0,"r":0,"state":"egg","reason":"x"},{"q":-0,"r":0,"state":"small","reason":"x"}]}', 'shape'],
+    [
+      'a cell twice, once as −0',
+      '{"cells":[{"q":0,"r":0,"state":"egg","reason":"x"},{"q":-0,"r":0,"state":"small","reason":"x"}]}',
+      'shape',
+    ],
     ['a text for a coordinate', { cells: [cell({ q: '0' })] }, 'shape'],
     ['half a coordinate', { cells: [cell({ q: 0.5 })] }, 'shape'],
     ['an address beyond 40', { cells: [cell({ q: 41 })] }, 'shape'],
@@ -120,7 +140,11 @@ describe('settle', () => {
     ['a number too large for JSON', '{"cells":[{"q":1e999,"r":0,"state":"egg","reason":"x"}]}', 'shape'],
     ['an unknown member', { cells: [cell({})], version: 3 }, 'unknown-field'],
     ['an unknown member of a cell', { cells: [cell({ actor: 'me' })] }, 'unknown-field'],
-    ['__proto__', '{"cells":[{"q":0,"r":0,"state":"egg","reason":"x","__proto__":{"role":"biologist"}}]}', 'unknown-field'],
+    [
+      '__proto__',
+      '{"cells":[{"q":0,"r":0,"state":"egg","reason":"x","__proto__":{"role":"biologist"}}]}',
+      'unknown-field',
+    ],
     ['a member twice', '{"cells":[],"cells":[]}', 'dup-key'],
     ['a list at the top', '[]', 'shape'],
     ['broken JSON', '{"cells":[', 'json'],
@@ -131,7 +155,9 @@ describe('settle', () => {
     const response = await callApi(settleRoute, 'POST', { as: team.members.reviewer, params: { id }, body });
     expect(await problemOf(response)).toEqual([400, code]);
     expect(await settlementCount()).toBe(before);
-    const readings = await database().models.Reading.count({ where: { team_id: toBinary(team.teamId), based_on: toBinary(id) } });
+    const readings = await database().models.Reading.count({
+      where: { team_id: toBinary(team.teamId), based_on: toBinary(id) },
+    });
     expect(readings).toBe(0);
   });
 
@@ -141,7 +167,12 @@ describe('settle', () => {
   ])('refuses a body sent as %s', async (type, status, code) => {
     const { id } = await fieldReading();
     const body = { cells: [cell({})] };
-    const response = await callApi(settleRoute, 'POST', { as: team.members.reviewer, params: { id }, body, headers: { 'content-type': type } });
+    const response = await callApi(settleRoute, 'POST', {
+      as: team.members.reviewer,
+      params: { id },
+      body,
+      headers: { 'content-type': type },
+    });
     expect(await problemOf(response)).toEqual([status, code]);
   });
 });
@@ -157,25 +188,41 @@ describe('lock and amend', () => {
     expect(await problemOf(await settle(reviewer, id, [EGG]))).toEqual([409, 'locked']);
     expect(await problemOf(await settle(reviewer, reading, [EGG]))).toEqual([409, 'locked']);
     expect(await problemOf(await lock(reviewer, reading))).toEqual([409, 'locked']);
-    expect(await decided(await amend(biologist, reading, 'Another female, by a later photo.'))).toEqual({ reading, version: 2 });
+    expect(await decided(await amend(biologist, reading, 'Another female, by a later photo.'))).toEqual({
+      reading,
+      version: 2,
+    });
     expect((await readReading(reviewer, reading)).lockedVersion).toBe(1);
     expect(await problemOf(await amend(biologist, id))).toEqual([409, 'not-locked']);
-    expect(await decided(await settle(reviewer, id, [{ q: 0, r: 0, state: 'capped' }]))).toEqual({ reading, version: 2 });
+    expect(await decided(await settle(reviewer, id, [{ q: 0, r: 0, state: 'capped' }]))).toEqual({
+      reading,
+      version: 2,
+    });
     expect(await decided(await lock(reviewer, id))).toEqual({ reading, version: 2 });
-    expect(await readReading(reviewer, reading)).toMatchObject({ lockedVersion: 2, observer: 'The reviewer', marks: [{ state: 'capped' }, {}] });
+    expect(await readReading(reviewer, reading)).toMatchObject({
+      lockedVersion: 2,
+      observer: 'The reviewer',
+      marks: [{ state: 'capped' }, {}],
+    });
     const review = await readingReview(await memberContext(team.teamId, reviewer.userId), id);
     expect(review.settlements.map(({ version, state }) => [version, state])).toEqual([
       [1, 'small'],
       [2, 'capped'],
     ]);
-    expect(review.amendments).toMatchObject([{ version: 2, reason: 'Another female, by a later photo.', actor: 'The biologist' }]);
+    expect(review.amendments).toMatchObject([
+      { version: 2, reason: 'Another female, by a later photo.', actor: 'The biologist' },
+    ]);
   });
 
   it('locks a reading that needed no correction', async () => {
     const { id } = await fieldReading();
     const { reading, version } = await decided(await lock(team.members.reviewer, id));
     expect(version).toBe(1);
-    expect(await readReading(team.members.reviewer, reading)).toMatchObject({ kind: 'final', lockedVersion: 1, tally: { cellsTotal: 2 } });
+    expect(await readReading(team.members.reviewer, reading)).toMatchObject({
+      kind: 'final',
+      lockedVersion: 1,
+      tally: { cellsTotal: 2 },
+    });
   });
 
   it('amends nothing that was never locked', async () => {
@@ -225,8 +272,19 @@ describe('audit chain', () => {
     await lock(own.members.reviewer, id);
     await problemOf(await lock(own.members.reviewer, id));
     await amend(own.members.biologist, id, 'Why not.');
-    const rows = await database().models.AuditEntry.findAll({ where: { team_id: toBinary(own.teamId) }, order: ['seq'], raw: true });
-    expect(rows.map(({ seq, action, subject_id, actor_id }) => [seq, action, fromBinaryOrNull(subject_id), fromBinaryOrNull(actor_id)])).toEqual([
+    const rows = await database().models.AuditEntry.findAll({
+      where: { team_id: toBinary(own.teamId) },
+      order: ['seq'],
+      raw: true,
+    });
+    expect(
+      rows.map(({ seq, action, subject_id, actor_id }) => [
+        seq,
+        action,
+        fromBinaryOrNull(subject_id),
+        fromBinaryOrNull(actor_id),
+      ]),
+    ).toEqual([
       [1, 'reading.settle', reading, own.members.reviewer.userId],
       [2, 'reading.lock', reading, own.members.reviewer.userId],
       [3, 'reading.amend', reading, own.members.biologist.userId],
@@ -234,11 +292,22 @@ describe('audit chain', () => {
     let previous = Buffer.alloc(32);
     for (const row of rows) {
       const { seq, at, action, detail } = row;
-      const link = { teamId: fromBinary(row.team_id), seq, at, actorId: fromBinaryOrNull(row.actor_id), action, subjectId: fromBinaryOrNull(row.subject_id), detail };
+      const link = {
+        teamId: fromBinary(row.team_id),
+        seq,
+        at,
+        actorId: fromBinaryOrNull(row.actor_id),
+        action,
+        subjectId: fromBinaryOrNull(row.subject_id),
+        detail,
+      };
       expect(row.hash.equals(auditHash(previous, link))).toBe(true);
       previous = Buffer.from(row.hash);
     }
-    const counter = await database().models.TeamCounter.findOne({ where: { team_id: toBinary(own.teamId) }, raw: true });
+    const counter = await database().models.TeamCounter.findOne({
+      where: { team_id: toBinary(own.teamId) },
+      raw: true,
+    });
     expect(counter).toMatchObject({ audit_seq: 3, seq: 1 });
     expect(counter?.audit_hash.equals(previous)).toBe(true);
   });

@@ -85,7 +85,9 @@ describe('GET /api/readings/<id>', () => {
     expect(await tally(field)).toEqual({ ...n12Counts(byHand), cellsTotal: 33, nectarCells: 0 });
     const blindByHand = n12Counts({ capped: 7, large: 7, medium: 4, small: 5, egg: 10 });
     expect(await tally(blind)).toEqual({ ...blindByHand, cellsTotal: 33, nectarCells: 0 });
-    expect((await readReading(team.members.biologist, field)).marks.map((mark) => mark.cell)).toEqual(N12.map(({ cell }) => cell));
+    expect((await readReading(team.members.biologist, field)).marks.map((mark) => mark.cell)).toEqual(
+      N12.map(({ cell }) => cell),
+    );
   });
 
   it('settles N12 to the final reading counted by hand: c6 p1 l7 m3 s6 e10', async () => {
@@ -94,16 +96,27 @@ describe('GET /api/readings/<id>', () => {
     expect(changed).toHaveLength(2);
     const { reading } = await decided(await settle(team.members.biologist, field, changed));
     const byHand = n12Counts({ capped: 6, parasitised: 1, large: 7, medium: 3, small: 6, egg: 10 });
-    expect((await readReading(team.members.biologist, reading)).tally).toEqual({ ...byHand, cellsTotal: 33, nectarCells: 0 });
+    expect((await readReading(team.members.biologist, reading)).tally).toEqual({
+      ...byHand,
+      cellsTotal: 33,
+      nectarCells: 0,
+    });
   });
 
-  it.each(['not-an-id', '00000000-0000-7000-8000-000000000000', 'ABCDEF00-0000-7000-8000-000000000000'])('answers 404 to %s', async (id) => {
-    const response = await callApi(readingRoute, 'GET', { as: team.members.technician, params: { id } });
-    expect(await problemOf(response)).toEqual([404, 'not-found']);
-  });
+  it.each(['not-an-id', '00000000-0000-7000-8000-000000000000', 'ABCDEF00-0000-7000-8000-000000000000'])(
+    'answers 404 to %s',
+    async (id) => {
+      const response = await callApi(readingRoute, 'GET', { as: team.members.technician, params: { id } });
+      expect(await problemOf(response)).toEqual([404, 'not-found']);
+    },
+  );
 
   it('takes no query', async () => {
-    const response = await callApi(readingRoute, 'GET', { as: team.members.technician, params: { id: nest }, query: 'upTo=1' });
+    const response = await callApi(readingRoute, 'GET', {
+      as: team.members.technician,
+      params: { id: nest },
+      query: 'upTo=1',
+    });
     expect(await problemOf(response)).toEqual([400, 'param']);
   });
 });
@@ -114,7 +127,13 @@ describe('a blind second reader', () => {
     const visit = await makeVisit(team, nest);
     const field = await makeReading(team, { nest, visit, marks: n12Marks('field') });
     const { reading: final } = await decided(await lock(team.members.biologist, field));
-    const own = await makeReading(team, { nest, visit, kind: 'second', submittedAt: null, marks: [{ q: 0, r: 0, state: 'egg' }] });
+    const own = await makeReading(team, {
+      nest,
+      visit,
+      kind: 'second',
+      submittedAt: null,
+      marks: [{ q: 0, r: 0, state: 'egg' }],
+    });
     for (const hidden of [field, final]) {
       const response = await callApi(readingRoute, 'GET', { as: reviewer, params: { id: hidden } });
       const text = await response.text();

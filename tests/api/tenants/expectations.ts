@@ -73,18 +73,34 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
           { name: 'bad column', call: { query: 'sort=password' }, status: 400 },
         ],
         pairs: ({ other }) => [
-          { name: 'search', foreign: { query: `q=${other.canary}` }, unknown: { query: 'q=nothing-of-the-kind' }, status: 200 },
-          { name: 'taxon', foreign: { query: `taxon=Polistes%20${other.canary}` }, unknown: { query: 'taxon=Polistes%20x' }, status: 200 },
+          {
+            name: 'search',
+            foreign: { query: `q=${other.canary}` },
+            unknown: { query: 'q=nothing-of-the-kind' },
+            status: 200,
+          },
+          {
+            name: 'taxon',
+            foreign: { query: `taxon=Polistes%20${other.canary}` },
+            unknown: { query: 'taxon=Polistes%20x' },
+            status: 200,
+          },
         ],
       },
     },
   },
-  'nests/[id]/route.ts': { load: () => import('@/app/api/nests/[id]/route'), methods: { GET: readOne(EVERYONE, 'nest') } },
+  'nests/[id]/route.ts': {
+    load: () => import('@/app/api/nests/[id]/route'),
+    methods: { GET: readOne(EVERYONE, 'nest') },
+  },
   'nests/[id]/brood/route.ts': {
     load: () => import('@/app/api/nests/[id]/brood/route'),
     methods: { GET: readOne(EVERYONE, 'nest') },
   },
-  'readings/[id]/route.ts': { load: () => import('@/app/api/readings/[id]/route'), methods: { GET: readOne(EVERYONE, 'reading') } },
+  'readings/[id]/route.ts': {
+    load: () => import('@/app/api/readings/[id]/route'),
+    methods: { GET: readOne(EVERYONE, 'reading') },
+  },
   'readings/[id]/settle/route.ts': {
     load: () => import('@/app/api/readings/[id]/settle/route'),
     methods: { POST: decide({ cells: [{ q: 1, r: 0, state: 'egg', reason: 'By the photo.' }] }, 200) },
@@ -104,7 +120,11 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
         may: EXPORTERS,
         own: ({ tenant }) => [
           ...FILES.map((file) => ({ name: file, call: { params: { file } }, status: 200 })),
-          ...FILES.map((file) => ({ name: `${file}, one nest`, call: { params: { file }, query: `nest=${tenant.onlyCode}` }, status: 200 })),
+          ...FILES.map((file) => ({
+            name: `${file}, one nest`,
+            call: { params: { file }, query: `nest=${tenant.onlyCode}` },
+            status: 200,
+          })),
           { name: 'no such file', call: { params: { file: 'people.csv' } }, status: 404 },
         ],
         pairs: ({ other }) =>
@@ -133,7 +153,12 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
   },
   'hosts/route.ts': {
     load: () => import('@/app/api/hosts/route'),
-    methods: { GET: { may: ['technician', 'reviewer', 'biologist', 'coordinator'], own: () => [{ name: 'all', call: {}, status: 200 }] } },
+    methods: {
+      GET: {
+        may: ['technician', 'reviewer', 'biologist', 'coordinator'],
+        own: () => [{ name: 'all', call: {}, status: 200 }],
+      },
+    },
   },
   'me/route.ts': {
     load: () => import('@/app/api/me/route'),
@@ -145,14 +170,18 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
   },
   'sync/v1/enrol/route.ts': {
     load: () => import('@/app/api/sync/v1/enrol/route'),
-    methods: { POST: { may: RECORDERS, own: () => [{ name: 'a phone', call: { body: { label: 'phone' } }, status: 200 }] } },
+    methods: {
+      POST: { may: RECORDERS, own: () => [{ name: 'a phone', call: { body: { label: 'phone' } }, status: 200 }] },
+    },
   },
   'sync/v1/push/route.ts': {
     load: () => import('@/app/api/sync/v1/push/route'),
     methods: {
       POST: {
         may: RECORDERS,
-        own: (asker) => [{ name: 'own nest', call: push(asker, { nest: asker.tenant.only.nest, visit: null }, v7()), status: 200 }],
+        own: (asker) => [
+          { name: 'own nest', call: push(asker, { nest: asker.tenant.only.nest, visit: null }, v7()), status: 200 },
+        ],
         pairs: (asker) => [
           {
             name: 'an operation about a nest',
@@ -160,7 +189,12 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
             unknown: push(asker, { nest: UNKNOWN, visit: null }, v7()),
             status: 200,
           },
-          { name: 'phone', foreign: pushFrom(asker, foreignPhone(asker)), unknown: pushFrom(asker, UNKNOWN_PHONE), status: 403 },
+          {
+            name: 'phone',
+            foreign: pushFrom(asker, foreignPhone(asker)),
+            unknown: pushFrom(asker, UNKNOWN_PHONE),
+            status: 403,
+          },
         ],
       },
     },
@@ -184,7 +218,9 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
     methods: {
       POST: {
         may: RECORDERS,
-        own: (asker) => [{ name: 'own operations', call: { ...phone(asker), body: { opIds: [asker.tenant.only.mark] } }, status: 200 }],
+        own: (asker) => [
+          { name: 'own operations', call: { ...phone(asker), body: { opIds: [asker.tenant.only.mark] } }, status: 200 },
+        ],
         pairs: (asker) => [
           {
             name: 'operations',
@@ -203,7 +239,11 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
       GET: {
         may: 'public',
         own: () =>
-          ['session', 'csrf', 'providers'].map((name) => ({ name, call: { params: { nextauth: [name] } }, status: 200 })),
+          ['session', 'csrf', 'providers'].map((name) => ({
+            name,
+            call: { params: { nextauth: [name] } },
+            status: 200,
+          })),
       },
       POST: {
         may: 'public',

@@ -14,7 +14,9 @@ import { teamDigest } from './team-digest';
 import { type Tenant, makeTwoTeams } from './two-teams';
 
 const METHODS: readonly Method[] = ['GET', 'HEAD', 'POST', 'PUT', 'PATCH', 'DELETE', 'OPTIONS'];
-const ROUTE_FILES = readdirSync('app/api', { recursive: true, encoding: 'utf8' }).filter((file) => file.endsWith('route.ts'));
+const ROUTE_FILES = readdirSync('app/api', { recursive: true, encoding: 'utf8' }).filter((file) =>
+  file.endsWith('route.ts'),
+);
 const ROUTES = Object.entries(EXPECTATIONS);
 
 let teams: { a: Tenant; b: Tenant };
@@ -30,7 +32,11 @@ async function bytesOf(response: Response): Promise<string> {
 }
 
 /** Sends a request and makes sure that nothing of the other team is in the answer. */
-async function ask(expectation: RouteExpectation, method: Method, { call, asker }: { call: ApiCall; asker: Asker }): Promise<string> {
+async function ask(
+  expectation: RouteExpectation,
+  method: Method,
+  { call, asker }: { call: ApiCall; asker: Asker },
+): Promise<string> {
   const handlers = await expectation.load();
   const answer = await bytesOf(await callApi(handlers as MethodHandlers, method, { as: asker.member, ...call }));
   for (const secret of asker.other.secrets) {
@@ -44,7 +50,9 @@ const statusOf = (answer: string) => Number(answer.slice(0, 3));
 
 /** An answer without what differs from request to request. */
 function comparable(answer: string, call: ApiCall): string {
-  const asked = [...JSON.stringify(call).matchAll(/[0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12}|[0-9a-f]{64}/g)].map(([id]) => id);
+  const asked = [...JSON.stringify(call).matchAll(/[0-9a-f]{8}(?:-[0-9a-f]{4}){3}-[0-9a-f]{12}|[0-9a-f]{64}/g)].map(
+    ([id]) => id,
+  );
   const bare = asked.reduce((text, id) => text.replaceAll(id, 'asked'), answer);
   return bare.replace(/"(requestId|serverTime)":"[^"]*"/g, '"$1":""');
 }
@@ -128,7 +136,10 @@ describe.each(ROUTES)('%s', (_, expectation) => {
     for (const [method, row] of rows) {
       if (row.may === 'public') continue;
       const [first] = await row.own(asker);
-      for (const [name, value] of [['origin', 'https://evil.example'], ['sec-fetch-site', 'cross-site']] as const) {
+      for (const [name, value] of [
+        ['origin', 'https://evil.example'],
+        ['sec-fetch-site', 'cross-site'],
+      ] as const) {
         const call = { ...first?.call, headers: { ...first?.call.headers, [name]: value } };
         const answer = await ask(expectation, method, { call, asker });
         expect([statusOf(answer), answer.includes('"code":"csrf"')]).toEqual([403, true]);
@@ -143,15 +154,28 @@ async function strangers({ member, tenant }: Asker): Promise<{ name: string; mem
   const { Session, User } = database().models;
   const session = async (change: object) => {
     const cookie = await signIn(teamId, member.userId);
-    const latest = await Session.findOne({ where: { team_id: toBinary(teamId) }, order: [['id', 'DESC']], rejectOnEmpty: true });
+    const latest = await Session.findOne({
+      where: { team_id: toBinary(teamId) },
+      order: [['id', 'DESC']],
+      rejectOnEmpty: true,
+    });
     await latest.update(change);
     return { ...member, cookie };
   };
   const disabled = async () => {
     const userId = v7();
-    const bare = { email: `${userId}@test.example`, display_name: 'Gone', password_hash: 'x', disabled_at: new Date(0) };
+    const bare = {
+      email: `${userId}@test.example`,
+      display_name: 'Gone',
+      password_hash: 'x',
+      disabled_at: new Date(0),
+    };
     await User.create({ id: toBinary(userId), ...bare });
-    await database().models.Membership.create({ team_id: toBinary(teamId), user_id: toBinary(userId), role: 'biologist' });
+    await database().models.Membership.create({
+      team_id: toBinary(teamId),
+      user_id: toBinary(userId),
+      role: 'biologist',
+    });
     return { ...member, cookie: await signIn(teamId, userId) };
   };
   const unknown = await sessionSetCookie({ userId: member.userId, teamId, sessionId: v7() });

@@ -17,7 +17,12 @@ export async function teamDigest(teamId: string): Promise<string> {
       type: QueryTypes.SELECT,
       replacements: [toBinary(teamId)],
     });
-    digest.update(name).update(rows.map((row) => JSON.stringify(row)).sort().join('\n'));
+    digest.update(name).update(
+      rows
+        .map((row) => JSON.stringify(row))
+        .sort()
+        .join('\n'),
+    );
   }
   return digest.digest('hex');
 }

@@ -40,7 +40,11 @@ function freshIds(): EntityIds {
   return { nest: v7(), visit: v7(), reading: v7(), mark: v7() };
 }
 
-async function makeEntities(team: TestTeam, ids: EntityIds, { code, canary, lat }: { code: string; canary: string; lat: number }): Promise<void> {
+async function makeEntities(
+  team: TestTeam,
+  ids: EntityIds,
+  { code, canary, lat }: { code: string; canary: string; lat: number },
+): Promise<void> {
   const place = { lat, lon: -77.25, accuracyM: 3 };
   await makeNest(team, { id: ids.nest, code, name: `Nest ${canary}`, taxon: `Polistes ${canary}`, place });
   await makeVisit(team, ids.nest, { id: ids.visit });
@@ -53,12 +57,33 @@ async function makeOffice(team: TestTeam, nest: string, canary: string): Promise
   const own = { team_id: toBinary(team.teamId), id: toBinary(v7()) };
   const { Host, Taxon, Outcome, QuarantinedOp } = database().models;
   const place = { place_name: `Shed ${canary}`, lat: 1.5, lon: 2.5 };
-  await Host.create({ ...own, ...place, code: `H ${canary}`, name: `Host ${canary}`, capacity: 1, note: `Dog ${canary}`, withdrawn_on: null });
+  await Host.create({
+    ...own,
+    ...place,
+    code: `H ${canary}`,
+    name: `Host ${canary}`,
+    capacity: 1,
+    note: `Dog ${canary}`,
+    withdrawn_on: null,
+  });
   await Taxon.create({ ...own, scientific_name: `Polistes ${canary}`, status: 'native' });
-  await Outcome.create({ ...own, nest_id: toBinary(nest), outcome: `raised ${canary}`, decided_on: '2026-07-01', note: canary });
+  await Outcome.create({
+    ...own,
+    nest_id: toBinary(nest),
+    outcome: `raised ${canary}`,
+    decided_on: '2026-07-01',
+    note: canary,
+  });
   const actor_id = toBinary(team.members.technician.userId);
   const kept = { state: 'parked', code: 'deps', raw: `{"note":"${canary}"}`, missing: '[]' };
-  await QuarantinedOp.create({ ...own, ...kept, digest: Buffer.alloc(32), op_id: null, actor_id, received_at: new Date(NOW) });
+  await QuarantinedOp.create({
+    ...own,
+    ...kept,
+    digest: Buffer.alloc(32),
+    op_id: null,
+    actor_id,
+    received_at: new Date(NOW),
+  });
 }
 
 async function enrolAll(team: TestTeam, canary: string): Promise<Map<string, string>> {
@@ -92,5 +117,8 @@ async function makeTenant(canary: string, shared: EntityIds, lat: number): Promi
 /** Two teams whose nests, visits, readings and operations have the same ids, and one nest each of its own. */
 export async function makeTwoTeams(): Promise<{ a: Tenant; b: Tenant }> {
   const shared = freshIds();
-  return { a: await makeTenant('CANARY-ALDER', shared, 11.123456), b: await makeTenant('CANARY-BIRCH', shared, 22.654321) };
+  return {
+    a: await makeTenant('CANARY-ALDER', shared, 11.123456),
+    b: await makeTenant('CANARY-BIRCH', shared, 22.654321),
+  };
 }

@@ -14,18 +14,29 @@ describe('parseLocalDate', () => {
     expect(parseLocalDate(date)).toBe(date);
   });
 
-  it.each(['2026-02-29', '2026-06-31', '2026-00-10', '2026-13-01', '0999-12-31', '9999-12-31', '20260616', ' 2026-06-16', '+002026-06-16', ''])(
-    'refuses %j',
-    (text) => {
-      expect(() => parseLocalDate(text)).toThrow(HttpProblem);
-    },
-  );
+  it.each([
+    '2026-02-29',
+    '2026-06-31',
+    '2026-00-10',
+    '2026-13-01',
+    '0999-12-31',
+    '9999-12-31',
+    '20260616',
+    ' 2026-06-16',
+    '+002026-06-16',
+    '',
+  ])('refuses %j', (text) => {
+    expect(() => parseLocalDate(text)).toThrow(HttpProblem);
+  });
 });
 
 describe('instantRange', () => {
   it('runs from local midnight to local midnight after the last day, over a change of clocks', () => {
     const { from, before } = instantRange({ from: '2026-03-07', to: '2026-03-08' }, ZONE);
-    expect([from?.toISOString(), before?.toISOString()]).toEqual(['2026-03-07T05:00:00.000Z', '2026-03-09T04:00:00.000Z']);
+    expect([from?.toISOString(), before?.toISOString()]).toEqual([
+      '2026-03-07T05:00:00.000Z',
+      '2026-03-09T04:00:00.000Z',
+    ]);
     expect(instantRange({}, ZONE)).toEqual({ from: null, before: null });
   });
 });
@@ -46,9 +57,12 @@ describe('parseAsOf', () => {
     expect(parseAsOf(undefined, ZONE, evening)).toBe(parseAsOf(undefined, ZONE, morning));
   });
 
-  it.each(['', 'now', '2026-06-16T12:00:00', '2026-06-16T24:00:01Z', '2026-06-16T12:00:00+99:00', '1781602867120'])('refuses %j', (text) => {
-    expect(() => parseAsOf(text, ZONE, 0)).toThrow(HttpProblem);
-  });
+  it.each(['', 'now', '2026-06-16T12:00:00', '2026-06-16T24:00:01Z', '2026-06-16T12:00:00+99:00', '1781602867120'])(
+    'refuses %j',
+    (text) => {
+      expect(() => parseAsOf(text, ZONE, 0)).toThrow(HttpProblem);
+    },
+  );
 });
 
 describe('parseNestListQuery and parseExportQuery', () => {
@@ -61,7 +75,11 @@ describe('parseNestListQuery and parseExportQuery', () => {
   });
 
   it('read a leading minus as descending', () => {
-    expect(parseNestListQuery({ sort: '-lastVisitAt', page: '3' })).toMatchObject({ sort: 'lastVisitAt', descending: true, page: 3 });
+    expect(parseNestListQuery({ sort: '-lastVisitAt', page: '3' })).toMatchObject({
+      sort: 'lastVisitAt',
+      descending: true,
+      page: 3,
+    });
   });
 });
 
@@ -71,7 +89,10 @@ describe('instantText', () => {
     expect(instantText(written, new Date('2026-06-16T09:41:07.120Z'))).toBe(written);
   });
 
-  it.each(['2026-06-16T05:41:07.120', '2026-06-16T05:41:60-04:00', 'half past five'])('writes the stored instant for %j', (written) => {
-    expect(instantText(written, new Date('2026-06-16T09:41:07.120Z'))).toBe('2026-06-16T09:41:07.120Z');
-  });
+  it.each(['2026-06-16T05:41:07.120', '2026-06-16T05:41:60-04:00', 'half past five'])(
+    'writes the stored instant for %j',
+    (written) => {
+      expect(instantText(written, new Date('2026-06-16T09:41:07.120Z'))).toBe('2026-06-16T09:41:07.120Z');
+    },
+  );
 });

@@ -40,7 +40,14 @@ describe('nestOutcome', () => {
     const nest = await makeNest(team);
     expect(await nestOutcome(ctx, nest)).toBeNull();
     const add = (outcome: string, decided_on: string) =>
-      database().models.Outcome.create({ team_id: toBinary(team.teamId), id: toBinary(v7()), nest_id: toBinary(nest), outcome, decided_on, note: null });
+      database().models.Outcome.create({
+        team_id: toBinary(team.teamId),
+        id: toBinary(v7()),
+        nest_id: toBinary(nest),
+        outcome,
+        decided_on,
+        note: null,
+      });
     await add('raised', '2026-07-10');
     await add('stayed', '2026-06-25');
     expect(await nestOutcome(ctx, nest)).toEqual({ outcome: 'raised', decidedOn: '2026-07-10', note: null });
@@ -60,10 +67,23 @@ describe('demoSignIns', () => {
     const { User, Membership } = database().models;
     const bare = { password_hash: 'x', disabled_at: null };
     await User.create({ ...bare, id, email: 'reviewer@tarrow.example', display_name: 'Halloran Pike' });
-    await User.create({ ...bare, id: disabled, email: 'reviewer2@tarrow.example', display_name: 'Gone', disabled_at: new Date(0) });
-    for (const user_id of [id, disabled]) await Membership.create({ team_id: toBinary(team.teamId), user_id, role: 'reviewer' });
+    await User.create({
+      ...bare,
+      id: disabled,
+      email: 'reviewer2@tarrow.example',
+      display_name: 'Gone',
+      disabled_at: new Date(0),
+    });
+    for (const user_id of [id, disabled])
+      await Membership.create({ team_id: toBinary(team.teamId), user_id, role: 'reviewer' });
     expect(await demoSignIns()).toEqual([
-      { email: 'reviewer@tarrow.example', password: DEMO_PASSWORD, name: 'Halloran Pike', role: 'reviewer', team: team.name },
+      {
+        email: 'reviewer@tarrow.example',
+        password: DEMO_PASSWORD,
+        name: 'Halloran Pike',
+        role: 'reviewer',
+        team: team.name,
+      },
     ]);
   });
 });

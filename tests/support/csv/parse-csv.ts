@@ -47,7 +47,8 @@ function readField(source: string, at: number): { value: string; next: number } 
 export function csvObjects(text: string): Record<string, string>[] {
   const [header = [], ...records] = parseCsv(text);
   return records.map((record) => {
-    if (record.length !== header.length) throw new Error(`a record has ${record.length} fields, the header ${header.length}`);
+    if (record.length !== header.length)
+      throw new Error(`a record has ${record.length} fields, the header ${header.length}`);
     return Object.fromEntries(header.map((name, index) => [name, record[index] ?? '']));
   });
 }

@@ -13,7 +13,11 @@ export interface ApiCall {
 }
 
 /** Calls a route's handler as Next would. */
-export async function callApi(handlers: MethodHandlers, method: keyof MethodHandlers, call: ApiCall = {}): Promise<Response> {
+export async function callApi(
+  handlers: MethodHandlers,
+  method: keyof MethodHandlers,
+  call: ApiCall = {},
+): Promise<Response> {
   const headers = new Headers({ ...(call.as && { cookie: call.as.cookie }), ...call.headers });
   const changes = method !== 'GET' && method !== 'HEAD';
   if (changes && !headers.has('x-sync')) headers.set('x-sync', '1');

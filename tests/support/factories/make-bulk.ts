@@ -36,13 +36,40 @@ export async function makeBulk(team: TestTeam, { nests, readingsOfANest, cellsOf
   const { models } = database();
   const own = { team_id: toBinary(team.teamId), opened_by: toBinary(team.members.technician.userId) };
   const opened = { opened_at: new Date(AT), opened_at_text: AT };
-  const unplaced = { name: null, taxon: 'Polistes fuscatus', lat: null, lon: null, accuracy_m: null, archived_at: null };
-  const sites = Array.from({ length: nests }, (_, index) => ({ nest: toBinary(v7()), visit: toBinary(v7()), code: bulkCode(index) }));
-  const readings = sites.flatMap((site) => Array.from({ length: readingsOfANest }, () => ({ ...site, reading: toBinary(v7()) })));
-  await insert(models.Nest, sites.map(({ nest, code }) => ({ ...own, ...opened, ...unplaced, id: nest, code })));
+  const unplaced = {
+    name: null,
+    taxon: 'Polistes fuscatus',
+    lat: null,
+    lon: null,
+    accuracy_m: null,
+    archived_at: null,
+  };
+  const sites = Array.from({ length: nests }, (_, index) => ({
+    nest: toBinary(v7()),
+    visit: toBinary(v7()),
+    code: bulkCode(index),
+  }));
+  const readings = sites.flatMap((site) =>
+    Array.from({ length: readingsOfANest }, () => ({ ...site, reading: toBinary(v7()) })),
+  );
+  await insert(
+    models.Nest,
+    sites.map(({ nest, code }) => ({ ...own, ...opened, ...unplaced, id: nest, code })),
+  );
   const started = { purpose: 'take-down', started_at: new Date(AT), started_at_text: AT, archived_at: null };
-  await insert(models.Visit, sites.map(({ nest, visit }) => ({ ...own, ...started, id: visit, nest_id: nest })));
-  const bare = { aid: null, light: null, submitted_at: new Date(AT), based_on: null, base_seq: null, version: null, locked_version: null };
+  await insert(
+    models.Visit,
+    sites.map(({ nest, visit }) => ({ ...own, ...started, id: visit, nest_id: nest })),
+  );
+  const bare = {
+    aid: null,
+    light: null,
+    submitted_at: new Date(AT),
+    based_on: null,
+    base_seq: null,
+    version: null,
+    locked_version: null,
+  };
   await insert(
     models.Reading,
     readings.map(({ reading, nest, visit }) => ({
@@ -56,7 +83,11 @@ export async function makeBulk(team: TestTeam, { nests, readingsOfANest, cellsOf
       source: 'phone',
     })),
   );
-  await insertMarks(team, readings.map(({ reading }) => reading), cellsOfAReading);
+  await insertMarks(
+    team,
+    readings.map(({ reading }) => reading),
+    cellsOfAReading,
+  );
 }
 
 async function insertMarks(team: TestTeam, readings: readonly Buffer[], cells: number): Promise<void> {
@@ -65,7 +96,15 @@ async function insertMarks(team: TestTeam, readings: readonly Buffer[], cells: n
   const comb = spiral(cells);
   const marks = readings.flatMap((reading_id) => comb.map((cell) => ({ ...cell, reading_id, op_id: toBinary(v7()) })));
   const actor_id = toBinary(team.members.technician.userId);
-  const bareOp = { nest_id: null, visit_id: null, device_id: null, op: '{}', body_hash: Buffer.alloc(32), flags: '', received_at: new Date(AT) };
+  const bareOp = {
+    nest_id: null,
+    visit_id: null,
+    device_id: null,
+    op: '{}',
+    body_hash: Buffer.alloc(32),
+    flags: '',
+    received_at: new Date(AT),
+  };
   await insert(
     Op,
     marks.map(({ op_id, reading_id }, index) => ({
@@ -79,10 +118,26 @@ async function insertMarks(team: TestTeam, readings: readonly Buffer[], cells: n
       hlc: `1.${index}`,
     })),
   );
-  const bareMark = { nectar: false, unsure: false, reused: false, scrap: false, instar: null, note: null, supersedes: null };
+  const bareMark = {
+    nectar: false,
+    unsure: false,
+    reused: false,
+    scrap: false,
+    instar: null,
+    note: null,
+    supersedes: null,
+  };
   await insert(
     Mark,
-    marks.map((mark, index) => ({ ...own, ...bareMark, ...mark, seq: index + 1, state: 'egg', hlc: `1.${index}`, at_text: AT })),
+    marks.map((mark, index) => ({
+      ...own,
+      ...bareMark,
+      ...mark,
+      seq: index + 1,
+      state: 'egg',
+      hlc: `1.${index}`,
+      at_text: AT,
+    })),
   );
   await TeamCounter.update({ seq: marks.length }, { where: own });
 }

@@ -70,7 +70,9 @@ async function logRows(team: TestTeam, reading: string, ops: readonly Op[]): Pro
 /** Puts marks into a reading, in order of their clocks; returns their operation ids. */
 export async function makeMarks(team: TestTeam, reading: string, marks: readonly MarkInput[]): Promise<string[]> {
   const ids = marks.map((mark) => mark.opId ?? v7());
-  const ops = marks.map(({ opId: _, at: __, ...body }, index) => wireOp({ kind: 'cell.mark', opId: ids[index], reading, body }));
+  const ops = marks.map(({ opId: _, at: __, ...body }, index) =>
+    wireOp({ kind: 'cell.mark', opId: ids[index], reading, body }),
+  );
   const first = await logRows(team, reading, ops);
   await database().models.Mark.bulkCreate(
     marks.map((mark, index) => ({

@@ -61,7 +61,11 @@ export async function signIn(teamId: string, userId: string): Promise<string> {
 }
 
 /** Makes a team with its counter row and its members. */
-export async function makeTeam({ name = 'Tarrow Trust', zone = 'America/New_York', canary = '' }: TeamInput = {}): Promise<TestTeam> {
+export async function makeTeam({
+  name = 'Tarrow Trust',
+  zone = 'America/New_York',
+  canary = '',
+}: TeamInput = {}): Promise<TestTeam> {
   const { Team, TeamCounter } = database().models;
   const teamId = v7();
   const id = toBinary(teamId);
@@ -73,6 +77,9 @@ export async function makeTeam({ name = 'Tarrow Trust', zone = 'America/New_York
   const byRole = (role: Role) => members.find((member) => member.role === role) ?? members[0];
   const [technician, reviewer, biologist, coordinator, researcher] = ROLES.map(byRole);
   if (!technician || !reviewer || !biologist || !coordinator || !researcher) throw new Error('a role has no member');
-  const others = { technician2: await make('technician', 'Another technician'), reviewer2: await make('reviewer', 'Another reviewer') };
+  const others = {
+    technician2: await make('technician', 'Another technician'),
+    reviewer2: await make('reviewer', 'Another reviewer'),
+  };
   return { teamId, name, members: { technician, reviewer, biologist, coordinator, researcher, ...others } };
 }

@@ -70,7 +70,7 @@ export function roughWeather(world: World): Weather {
     officeDies: some(0.1),
     abort: some(0.05),
     hang: some(0.01),
-    poison: some(0.08),
+    poison: some(0.04),
     crashEveryMs: world.between(8_000, 60_000),
     freezeEveryMs: world.between(20_000, 120_000),
     restoreEveryMs: world.between(40_000, 300_000),

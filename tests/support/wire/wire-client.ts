@@ -52,12 +52,16 @@ export class WireClient {
   /** Pushes operations and returns the answer. */
   async push(ops: readonly Op[]): Promise<PushResponse> {
     const epoch = this.device?.epoch ?? 1;
-    return (await (await this.post('/api/sync/v1/push', { protocol: 1, schema: 1, epoch, ops })).json()) as PushResponse;
+    return (await (
+      await this.post('/api/sync/v1/push', { protocol: 1, schema: 1, epoch, ops })
+    ).json()) as PushResponse;
   }
 
   /** One pull page. */
   async pull(query = ''): Promise<PullResponse> {
-    const response = await this.fetch(`/api/sync/v1/pull${query}`, { headers: { 'x-sync': '1', ...this.deviceHeader() } });
+    const response = await this.fetch(`/api/sync/v1/pull${query}`, {
+      headers: { 'x-sync': '1', ...this.deviceHeader() },
+    });
     return (await response.json()) as PullResponse;
   }
 

@@ -26,7 +26,12 @@ export function wireOp(input: WireOpInput): Op {
     nest: null,
     visit: null,
     reading: null,
-    at: { wall: '2026-06-16T05:41:07.120-04:00', mono: 1000.5 + counter, boot: '5f0c3a52-8a2f-4d0c-9f0a-0a6f5a1c2b3d', skewMs: null },
+    at: {
+      wall: '2026-06-16T05:41:07.120-04:00',
+      mono: 1000.5 + counter,
+      boot: '5f0c3a52-8a2f-4d0c-9f0a-0a6f5a1c2b3d',
+      skewMs: null,
+    },
     hlc: `1781602867120.${counter}`,
     deps: [],
     ...input,

@@ -33,7 +33,14 @@ describe('finalCells', () => {
 
   it('puts the settled state over the mark and names the mark it replaced', () => {
     const [cell] = finalCells([mark(0, 0, { nectar: true, reused: true, note: 'rim' })], [settlement(0, 0)]);
-    expect(cell).toMatchObject({ state: 'large', nectar: true, reused: true, note: 'rim', settledFrom: 'mark 0,0', settled: true });
+    expect(cell).toMatchObject({
+      state: 'large',
+      nectar: true,
+      reused: true,
+      note: 'rim',
+      settledFrom: 'mark 0,0',
+      settled: true,
+    });
     expect(cell).toMatchObject({ opId: 'mark 0,0', at: '2026-06-16T05:41:07.120-04:00' });
   });
 
@@ -57,7 +64,10 @@ describe('finalCells', () => {
   it('brings doubt and instar back when a decision returns to the state that was marked', () => {
     const away = settlement(0, 0, { state: 'egg', position: 1 });
     const back = settlement(0, 0, { state: 'medium', position: 2 });
-    expect(finalCells([mark(0, 0, { unsure: true })], [away, back])[0]).toMatchObject({ state: 'medium', unsure: true });
+    expect(finalCells([mark(0, 0, { unsure: true })], [away, back])[0]).toMatchObject({
+      state: 'medium',
+      unsure: true,
+    });
   });
 
   it('adds a cell that nobody had marked, in walk order', () => {

@@ -65,14 +65,21 @@ describe('column registries', () => {
   it('writes each count of a tally under its own name', () => {
     const counts = emptyTally();
     CELL_STATES.forEach((state, index) => (counts[state] = index + 1));
-    const row: TallyRow = { ...KEY, taxon: null, tally: { ...counts, cellsTotal: 78, nectarCells: 5 }, lockedVersion: 2 };
+    const row: TallyRow = {
+      ...KEY,
+      taxon: null,
+      tally: { ...counts, cellsTotal: 78, nectarCells: 5 },
+      lockedVersion: 2,
+    };
     const [read] = csvObjects(writeHeader(TALLIES_FILE, 'exact') + writeRow(TALLIES_FILE, row, 'exact'));
     for (const state of CELL_STATES) expect(read?.[state]).toBe(String(counts[state]));
     expect(read).toMatchObject({ taxon: '', cells_total: '78', nectar_cells: '5', locked_version: '2' });
   });
 
   it('guards every column a person may have typed, and says so in its type', () => {
-    const free = FILES.flatMap((file) => file.columns.filter((column) => column.type === 'free text').map((c) => c.name));
+    const free = FILES.flatMap((file) =>
+      file.columns.filter((column) => column.type === 'free text').map((c) => c.name),
+    );
     expect([...new Set(free)].sort()).toEqual(['name', 'nest', 'observer', 'taxon', 'team']);
   });
 });
@@ -97,7 +104,8 @@ describe('dictionary', () => {
 
   it('reads back from its own file', () => {
     const rows = dictionaryRows();
-    const text = writeHeader(DICTIONARY_FILE, 'exact') + rows.map((row) => writeRow(DICTIONARY_FILE, row, 'exact')).join('');
+    const text =
+      writeHeader(DICTIONARY_FILE, 'exact') + rows.map((row) => writeRow(DICTIONARY_FILE, row, 'exact')).join('');
     expect(csvObjects(text)[0]).toMatchObject({ file: 'nests.csv', name: 'team', required: 'yes', blank_means: '' });
     expect(csvObjects(text)).toHaveLength(rows.length);
   });

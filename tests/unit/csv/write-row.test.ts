@@ -68,7 +68,9 @@ describe('writeRow', () => {
 
   it.each(vectors.injection)('guards $kind "$value" for spreadsheets', ({ value, kind, safe }) => {
     const row =
-      kind === 'number' ? written([Number(value)], 'spreadsheet', 'decimal') : written([value], 'spreadsheet', 'free text');
+      kind === 'number'
+        ? written([Number(value)], 'spreadsheet', 'decimal')
+        : written([value], 'spreadsheet', 'free text');
     expect(parseCsv(row)).toEqual([[safe]]);
   });
 
@@ -76,12 +78,15 @@ describe('writeRow', () => {
     expect(parseCsv(written([text], 'spreadsheet'))).toEqual([[`'${text}`]]);
   });
 
-  it.each(['=1', '-1', '@a', '\uff1d1'])('leaves %j as it is in the exact form, and in columns nobody types in', (text) => {
-    expect(parseCsv(written([text], 'exact'))).toEqual([[text]]);
-    for (const type of ['word', 'uuid', 'date', 'date-time'] as const) {
-      expect(parseCsv(written([text], 'spreadsheet', type))).toEqual([[text]]);
-    }
-  });
+  it.each(['=1', '-1', '@a', '\uff1d1'])(
+    'leaves %j as it is in the exact form, and in columns nobody types in',
+    (text) => {
+      expect(parseCsv(written([text], 'exact'))).toEqual([[text]]);
+      for (const type of ['word', 'uuid', 'date', 'date-time'] as const) {
+        expect(parseCsv(written([text], 'spreadsheet', type))).toEqual([[text]]);
+      }
+    },
+  );
 
   it('keeps emoji, joiners, combining and right-to-left marks as they came', () => {
     const text = '👩‍🔬 e\u0301 \u202eabc \u05d0';

@@ -113,6 +113,15 @@ describe('the strict JSON reader', () => {
     expect([...parsed.value.rawItems.keys()]).toEqual(['ops', 'e']);
   });
 
+  it.each([
+    ['a text as long as a whole body', `["${'a'.repeat(262_000)}"]`, null],
+    ['one that never ends', `["${'a'.repeat(262_000)}`, 'json'],
+    ['one of escapes alone', `["${'\\n'.repeat(131_000)}"]`, null],
+    ['a number of as many digits', '1'.repeat(262_000), null],
+  ])('is not brought down by %s', (_what, text, error) => {
+    expect(errorOf(text)).toBe(error);
+  });
+
   it('reads a quarter of a megabyte of short strings in well under a second', () => {
     const text = `[${Array(40_000).fill('"ab"').join(',')}]`;
     const start = performance.now();

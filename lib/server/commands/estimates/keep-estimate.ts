@@ -12,7 +12,11 @@ import type { NestBrood } from '@/lib/server/queries/brood';
  *
  * @param nowMs epoch milliseconds.
  */
-export async function keepEstimate(ctx: TeamContext, { estimate, settingsVersion }: NestBrood, nowMs: number): Promise<void> {
+export async function keepEstimate(
+  ctx: TeamContext,
+  { estimate, settingsVersion }: NestBrood,
+  nowMs: number,
+): Promise<void> {
   const { Estimate } = database().models;
   const key = {
     team_id: toBinary(ctx.teamId),

@@ -57,7 +57,10 @@ export async function labWork(
     const decision = await decide({ scope, ...halves, counter });
     const { action, final, version } = decision;
     const detail = { basedOn: fromBinary(halves.source.id), version, ...decision.detail };
-    await writeAudit({ ctx, counter, transaction }, { action, subjectId: fromBinary(final.id), detail, at: new Date(nowMs) });
+    await writeAudit(
+      { ctx, counter, transaction },
+      { action, subjectId: fromBinary(final.id), detail, at: new Date(nowMs) },
+    );
     await saveCounter(ctx, counter, transaction);
     return decision;
   });

@@ -49,7 +49,11 @@ async function writeSettlements(work: LabWork, final: ReadingRow, decided: { cel
  * @param nowMs epoch milliseconds.
  * @throws HttpProblem `not-found`, `blind`, or `locked` while the final reading is locked.
  */
-export async function settleReading(ctx: TeamContext, input: SettleInput & { id: string }, nowMs: number): Promise<FinalVersion> {
+export async function settleReading(
+  ctx: TeamContext,
+  input: SettleInput & { id: string },
+  nowMs: number,
+): Promise<FinalVersion> {
   const { id, cells } = input;
   const decision = await labWork(ctx, { id, nowMs }, async (work) => {
     if (isClosed(work)) throw new HttpProblem('locked');
