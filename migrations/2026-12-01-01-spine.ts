@@ -8,9 +8,9 @@ const WORD = 'VARCHAR(32) CHARACTER SET ascii COLLATE ascii_bin NOT NULL';
 const WORD_OR_NULL = 'VARCHAR(32) CHARACTER SET ascii COLLATE ascii_bin NULL';
 const HASH = 'BINARY(32) NOT NULL';
 const CLOCK_TEXT = 'VARCHAR(32) CHARACTER SET ascii COLLATE ascii_bin NOT NULL';
-/** Text compared byte by byte: two spellings are never taken for one. */
-const NAME = 'VARCHAR(200) COLLATE utf8mb4_bin NOT NULL';
-const NAME_OR_NULL = 'VARCHAR(200) COLLATE utf8mb4_bin NULL';
+/** Text compared byte by byte, spaces at its end included: two spellings are never taken for one. */
+const NAME = 'VARCHAR(200) COLLATE utf8mb4_nopad_bin NOT NULL';
+const NAME_OR_NULL = 'VARCHAR(200) COLLATE utf8mb4_nopad_bin NULL';
 const TEXT_OR_NULL = 'MEDIUMTEXT NULL';
 
 /** A foreign key within one team. */
@@ -145,6 +145,7 @@ const TABLES: readonly [name: string, lines: readonly string[]][] = [
       `previous_hash ${HASH}`,
       `hash ${HASH}`,
       'PRIMARY KEY (team_id, seq)',
+      'KEY audit_subject (team_id, subject_id)',
       'FOREIGN KEY (team_id) REFERENCES teams (id)',
     ],
   ],

@@ -32,7 +32,5 @@ export function broodRows(estimates: readonly CellEstimate[]): BroodRow[] {
     rows.set(key, row);
   }
   for (const row of rows.values()) row.cells.sort((a, b) => a - b);
-  return [...rows.values()].sort((a, b) =>
-    a.laid.median < b.laid.median ? -1 : a.laid.median > b.laid.median ? 1 : 0,
-  );
+  return [...rows.values()].sort((a, b) => Date.parse(a.laid.median) - Date.parse(b.laid.median));
 }

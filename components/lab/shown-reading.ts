@@ -1,7 +1,7 @@
 import type { NestView, ReadingRow, VisitRow } from './lab-shapes';
 
 /** A reading of a nest together with its visit. */
-export interface PlacedReading {
+interface PlacedReading {
   visit: VisitRow;
   reading: ReadingRow;
 }
@@ -9,7 +9,7 @@ export interface PlacedReading {
 const BEST_FIRST: readonly string[] = ['final', 'field', 'second'];
 
 /** The readings of a nest one may see: latest visit first, and at one visit final before field before second. */
-export function readingsOf(nest: NestView): PlacedReading[] {
+function readingsOf(nest: NestView): PlacedReading[] {
   const placed = nest.visits.flatMap((visit) => visit.readings.map((reading) => ({ visit, reading })));
   return placed
     .filter(({ reading }) => reading.tally !== null)

@@ -21,10 +21,17 @@ function firstAdultOtherwise(estimate: BroodEstimate): string {
   return isPast ? 'past: adults have come out already' : 'cannot be dated from this comb';
 }
 
+/** How much of the brood is expected to be lost, and in which stage most of it. */
 function lossWords({ egg, larva, capped }: NestEstimate['expectedLosses']): string {
   const total = egg + larva + capped;
   if (total < 0.5) return 'fewer than one of the brood now in the comb';
-  return `about ${Math.round(total)} of the brood now in the comb, most likely as ${egg >= Math.max(larva, capped) ? 'eggs' : larva >= capped ? 'larvae' : 'capped brood'}`;
+  const most = Math.max(egg, larva, capped);
+  const stage = [
+    { words: 'eggs', lost: egg },
+    { words: 'larvae', lost: larva },
+    { words: 'capped brood', lost: capped },
+  ].find(({ lost }) => lost === most);
+  return `about ${Math.round(total)} of the brood now in the comb, most of it as ${stage?.words}`;
 }
 
 /** When the nest was founded, when the first adult is due and whether it may still be moved: ranges, never a bare date. */

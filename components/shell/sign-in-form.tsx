@@ -6,8 +6,8 @@ import { Field } from '@/components/ui/field';
 import { Input } from '@/components/ui/input';
 import { Notice } from '@/components/ui/notice';
 import { DemoSignIns, type DemoSignIn } from './demo-sign-ins';
-import { requestSignIn, type SignInResult } from './sign-in-request';
 import { signInTrouble } from './sign-in-words';
+import { useSignIn } from './use-sign-in';
 
 interface SignInFormProps {
   /** A path of this site to open afterwards. */
@@ -19,16 +19,10 @@ interface SignInFormProps {
 export function SignInForm({ next, demo }: SignInFormProps): ReactElement {
   const [email, setEmail] = useState('');
   const [password, setPassword] = useState('');
-  const [isSending, setSending] = useState(false);
-  const [result, setResult] = useState<SignInResult | null>(null);
-  const submit = async (event: FormEvent): Promise<void> => {
+  const { submit, isSending, result } = useSignIn(next);
+  const send = (event: FormEvent): void => {
     event.preventDefault();
-    setSending(true);
-    setResult(null);
-    const outcome = await requestSignIn({ email: email.trim(), password }, fetch);
-    if (outcome.kind === 'in') return window.location.assign(next);
-    setResult(outcome);
-    setSending(false);
+    void submit({ email: email.trim(), password });
   };
   const take = (person: DemoSignIn): void => {
     setEmail(person.email);
@@ -37,7 +31,7 @@ export function SignInForm({ next, demo }: SignInFormProps): ReactElement {
   const trouble = signInTrouble(result);
   return (
     <>
-      <form onSubmit={(event) => void submit(event)} className="flex flex-col gap-4" aria-label="Sign in">
+      <form onSubmit={send} className="flex flex-col gap-4" aria-label="Sign in">
         {trouble && (
           <Notice tone="stop" live="assertive">
             <p>{trouble}</p>

@@ -9,7 +9,8 @@ export type SignInResult =
   | { kind: 'unreachable' }
   | { kind: 'failed' };
 
-interface Credentials {
+/** What a person signs in with. */
+export interface Credentials {
   email: string;
   password: string;
 }

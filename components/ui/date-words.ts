@@ -66,19 +66,12 @@ export interface RangeWords {
  * Words for an estimated date: `6 May` and `between 29 April and 13 May`; `within the day` when both ends fall on it.
  *
  * @param median the likeliest day, `YYYY-MM-DD`.
- * @param ends first and last day of the range.
+ * @param ends first and last day of the range, with the median between them.
  */
 export function rangeWords(median: string, ends: readonly [string, string], inYear?: YearShown): RangeWords {
   const year = inYear ?? median;
-  const within = ends[0] === ends[1];
-  return {
-    day: dateWords(median, year),
-    range: within
-      ? ends[0] === median
-        ? 'within the day'
-        : `on ${dateWords(ends[0], year)}`
-      : `between ${spanWords(ends, year)}`,
-  };
+  const isOneDay = ends[0] === ends[1];
+  return { day: dateWords(median, year), range: isOneDay ? 'within the day' : `between ${spanWords(ends, year)}` };
 }
 
 /** An instant in a zone: `16 June, 05:41`, with the year when it is not the reader's. */
@@ -98,6 +91,11 @@ export function countWords(count: number, one: string, many = `${one}s`): string
   return `${count} ${count === 1 ? one : many}`;
 }
 
+function runOf([from, to]: [number, number]): string {
+  if (from === to) return `${from}`;
+  return to === from + 1 ? `${from}, ${to}` : `${from}–${to}`;
+}
+
 /**
  * Whole numbers as runs: `[0, 1, 2, 5]` → `0–2, 5`.
  *
@@ -110,7 +108,5 @@ export function runWords(numbers: readonly number[]): string {
     if (last && n === last[1] + 1) last[1] = n;
     else runs.push([n, n]);
   }
-  return runs
-    .map(([from, to]) => (from === to ? `${from}` : to === from + 1 ? `${from}, ${to}` : `${from}–${to}`))
-    .join(', ');
+  return runs.map(runOf).join(', ');
 }

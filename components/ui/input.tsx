@@ -13,8 +13,3 @@ export function Input({ className = '', ...rest }: ComponentPropsWithRef<'input'
 export function TextArea({ className = '', rows = 3, ...rest }: ComponentPropsWithRef<'textarea'>): ReactElement {
   return <textarea className={`${LOOK} ${className}`} rows={rows} {...rest} />;
 }
-
-/** A choice of one from a list; pass `<option>`s. */
-export function Select({ className = '', ...rest }: ComponentPropsWithRef<'select'>): ReactElement {
-  return <select className={`${LOOK} min-h-9 ${className}`} {...rest} />;
-}

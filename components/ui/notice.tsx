@@ -18,6 +18,8 @@ const LOOKS: Readonly<Record<NoticeTone, string>> = {
   stop: 'border-stop bg-stop-wash',
 };
 
+const LIVE_ROLES = { polite: 'status', assertive: 'alert' } as const;
+
 const MARKS: Readonly<Record<NoticeTone, { sign: string; word: string; look: string }>> = {
   info: { sign: 'i', word: 'Note: ', look: 'text-main' },
   warn: { sign: '!', word: 'Take care: ', look: 'text-warn' },
@@ -29,7 +31,7 @@ export function Notice({ tone = 'info', title, live, className = '', children }:
   const { sign, word, look } = MARKS[tone];
   return (
     <div
-      role={live === 'assertive' ? 'alert' : live === 'polite' ? 'status' : undefined}
+      role={live && LIVE_ROLES[live]}
       className={`keep-together flex gap-3 rounded-r border-l-[6px] px-4 py-3 ${LOOKS[tone]} ${className}`}
     >
       <span aria-hidden="true" className={`font-mono text-lg leading-6 font-bold ${look}`}>

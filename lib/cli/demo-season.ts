@@ -1,6 +1,6 @@
 import { DemoRefused, loadDemoSeason } from '@/lib/server/demo/load-demo-season';
 import { demoWanted } from '@/lib/server/env';
-import { demoSignIns } from '@/lib/server/queries/demo-sign-ins';
+import { demoSignIns } from '@/lib/server/auth/demo-sign-ins';
 import type { Progress } from './progress';
 
 /**

@@ -5,7 +5,9 @@ import { byWalkOrder } from './walk';
 
 /** Orders marks so that the winner of a cell comes last: by clock, then by operation id. */
 export function compareMarks(a: Pick<Mark, 'hlc' | 'opId'>, b: Pick<Mark, 'hlc' | 'opId'>): number {
-  return compareHlc(a.hlc, b.hlc) || (a.opId < b.opId ? -1 : a.opId > b.opId ? 1 : 0);
+  const byClock = compareHlc(a.hlc, b.hlc);
+  if (byClock !== 0 || a.opId === b.opId) return byClock;
+  return a.opId < b.opId ? -1 : 1;
 }
 
 /**

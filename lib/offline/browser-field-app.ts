@@ -35,6 +35,7 @@ export function browserFieldApp(): FieldSession {
     sha256: browserSha256,
     newId: browserId,
     webLock: browserWebLock,
+    page: browserClock.boot(),
     label: phoneLabel(),
   });
   listen(session);

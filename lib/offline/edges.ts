@@ -17,6 +17,8 @@ export interface Edges {
   webLock(name: string): WebLock;
   /** Another IndexedDB implementation, for tests. */
   dexie?: DexieOptions;
+  /** Names this load of the page: what it left unfinished, it may take up again at once. */
+  page: string;
   /** The name the office shows for this phone. */
   label: string;
 }

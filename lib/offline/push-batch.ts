@@ -6,7 +6,7 @@ import { type NetworkRequest, REQUEST_TIMEOUT_MS } from './network';
 import type { StoreMeta } from './store';
 
 /** Most bytes of operations in one push; the office takes a little more. */
-export const MAX_BATCH_BYTES = 200_000;
+const MAX_BATCH_BYTES = 200_000;
 
 const utf8 = new TextEncoder();
 

@@ -1,9 +1,9 @@
 import { type Axial, cellKey, parseCellKey } from '@/lib/comb/axial';
 import { liveMarks } from '@/lib/comb/live-marks';
 import type { Mark } from '@/lib/comb/mark';
-import { tallyOf } from '@/lib/comb/tally';
+import { type Tally, tallyOf } from '@/lib/comb/tally';
 import { nextCell, rimCells } from '@/lib/comb/walk-order';
-import { compareHlc, formatHlc, parseHlc, tickHlc } from '@/lib/kit/hlc';
+import { formatHlc, parseHlc, tickHlc } from '@/lib/kit/hlc';
 import type { Op } from '@/lib/protocol/op';
 import type { NotSavedReason } from './not-saved';
 import { markWords, undoWords } from './op-words';
@@ -39,12 +39,6 @@ export function startPlace(reading: string): RecorderPlace {
   return { reading, jump: null, skipped: [], expectedTotal: null, toggles: NO_TOGGLES };
 }
 
-/** The live mark that the next undo takes back: the one made last. */
-export function undoTarget({ marks, retracted }: Pick<RecorderState, 'marks' | 'retracted'>): Mark | null {
-  const live = new Set(liveMarks(marks, retracted).map((mark) => mark.opId));
-  return marks.findLast((mark) => live.has(mark.opId)) ?? null;
-}
-
 /** The live mark of a cell. */
 export function liveMarkAt({ marks, retracted }: Pick<RecorderState, 'marks' | 'retracted'>, cell: Axial): Mark | null {
   const own = marks.filter(({ q, r }) => q === cell.q && r === cell.r);
@@ -58,16 +52,15 @@ export function marksAt({ marks, retracted }: Pick<RecorderState, 'marks' | 'ret
 
 /** A clock reading after every mark on the screen; the transaction puts the final one in its place. */
 export function provisionalHlc({ marks }: Pick<RecorderState, 'marks'>, now: number): string {
-  const latest = marks.reduce((max, mark) => (compareHlc(mark.hlc, max) > 0 ? mark.hlc : max), '0.0');
+  const latest = marks.at(-1)?.hlc ?? '';
   return formatHlc(tickHlc(parseHlc(latest) ?? { ms: 0, counter: 0 }, now));
 }
 
-/** What changes when a transaction with these operations has completed: their marks get their final clock readings. */
+/** What changes when a transaction with these operations has completed. */
 export function afterSaving(state: RecorderState, ops: readonly Op[]): Partial<RecorderState> {
-  const final = new Map(ops.map((op) => [op.opId, op.hlc]));
-  const marks = state.marks.map((mark) => ({ ...mark, hlc: final.get(mark.opId) ?? mark.hlc }));
-  const pending = state.pending.filter((opId) => !final.has(opId));
-  return { marks: ops.length > 0 ? marks : state.marks, pending, failure: null, saved: state.saved + ops.length };
+  const done = new Set(ops.map((op) => op.opId));
+  const pending = state.pending.filter((opId) => !done.has(opId));
+  return { pending, failure: null, saved: state.saved + ops.length };
 }
 
 /** The mark that would be live at a cell once this one is taken back. */
@@ -98,36 +91,67 @@ function unsavedOf({ failure, pending, marks }: RecorderState): RecorderView['un
   });
 }
 
-function undoWordsOf(state: RecorderState): string | null {
-  const target = undoTarget(state);
-  return target && undoWords(target, markBefore(state, target)?.state ?? null);
+/** What follows from the marks and the place alone: it stays the same while presses reach the disk. */
+export interface CombState {
+  live: readonly Mark[];
+  current: Axial | null;
+  rim: readonly Axial[];
+  skipped: ReadonlySet<string>;
+  tally: Tally;
+  /** The live mark that the next undo takes back: the one made last. */
+  undoTarget: Mark | null;
+  undoWords: string | null;
 }
 
-/** What the screen draws. */
-export function recorderView(state: RecorderState): RecorderView {
+/** Derives the comb. */
+export function combState(state: RecorderState): CombState {
   const live = liveMarks(state.marks, state.retracted);
-  const pending = new Set(state.pending);
-  const marks = new Map(
-    live.map((mark): [string, RecorderMark] => [cellKey(mark), { ...mark, saved: !pending.has(mark.opId) }]),
-  );
+  const ids = new Set(live.map((mark) => mark.opId));
+  const undoTarget = state.marks.findLast((mark) => ids.has(mark.opId)) ?? null;
   return {
-    reading: state.reading,
-    nest: state.nest,
-    visit: state.visit,
-    submitted: state.submitted,
-    mayMark: state.mayMark,
+    live,
     current: currentCell(state, live),
-    marks,
-    last: state.last,
     rim: rimOf(state, live),
     skipped: new Set(state.place.skipped),
-    expectedTotal: state.place.expectedTotal,
-    toggles: state.place.toggles,
     tally: tallyOf(live),
-    pending: state.failure ? 0 : state.pending.length,
-    saved: state.saved,
+    undoTarget,
+    undoWords: undoTarget && undoWords(undoTarget, markBefore(state, undoTarget)?.state ?? null),
+  };
+}
+
+/** Does a change of these members leave the comb as it was? */
+export function keepsComb(part: Partial<RecorderState>): boolean {
+  return !('marks' in part || 'retracted' in part || 'place' in part || 'last' in part);
+}
+
+/** The live marks as the screen draws them; what has not changed since the last drawing is the same object. */
+function drawnMarks(live: readonly Mark[], pending: ReadonlySet<string>, before?: RecorderView['marks']) {
+  const drawn = new Map<string, RecorderMark>();
+  for (const mark of live) {
+    const key = cellKey(mark);
+    const saved = !pending.has(mark.opId);
+    const same = before?.get(key);
+    drawn.set(key, same?.opId === mark.opId && same.saved === saved ? same : { ...mark, saved });
+  }
+  return drawn;
+}
+
+/**
+ * What the screen draws.
+ *
+ * @param before what it drew last.
+ */
+export function recorderView(state: RecorderState, comb: CombState, before?: RecorderView): RecorderView {
+  const { reading, nest, visit, submitted, mayMark, last, place, failure, saved, lastWords } = state;
+  const { live, current, rim, skipped, tally, undoWords: words } = comb;
+  const pending = new Set(state.pending);
+  return {
+    ...{ reading, nest, visit, submitted, mayMark, last, saved, lastWords },
+    ...{ current, rim, skipped, tally, undoWords: words },
+    marks: drawnMarks(live, pending, before?.marks),
+    expectedTotal: place.expectedTotal,
+    toggles: place.toggles,
+    pending: failure ? 0 : pending.size,
     unsaved: unsavedOf(state),
-    lastWords: state.lastWords,
-    undoWords: undoWordsOf(state),
   };
 }

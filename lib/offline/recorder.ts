@@ -8,15 +8,17 @@ import { markOfOp } from './mark-of-op';
 import type { NotSavedReason } from './not-saved';
 import { markWords, skipWords, undoneWords } from './op-words';
 import {
+  type CombState,
   NO_TOGGLES,
   type RecorderState,
   afterSaving,
+  combState,
+  keepsComb,
   liveMarkAt,
   markBefore,
   marksAt,
   provisionalHlc,
   recorderView,
-  undoTarget,
 } from './recorder-state';
 import type { PressDetail, RecorderControls, RecorderPlace, RecorderView, Toggles } from './recorder-view';
 import { type OwnSignal, type Signal, createSignal } from './signal';
@@ -40,12 +42,14 @@ type RecorderKind = 'cell.mark' | 'cell.retract' | 'reading.submit';
 export class CombRecorder implements RecorderControls {
   private readonly signal: OwnSignal<RecorderView>;
   private readonly queue: CommitQueue;
+  private comb: CombState;
 
   constructor(
     private readonly ports: RecorderPorts,
     private state: RecorderState,
   ) {
-    this.signal = createSignal(recorderView(state));
+    this.comb = combState(state);
+    this.signal = createSignal(recorderView(state, this.comb));
     this.queue = createCommitQueue({
       sha256: ports.maker.sha256,
       commit: ports.commit,
@@ -108,7 +112,7 @@ export class CombRecorder implements RecorderControls {
   expect = (expectedTotal: number | null): void => this.move({ expectedTotal });
 
   undo = (): void => {
-    const target = undoTarget(this.state);
+    const target = this.comb.undoTarget;
     if (!target) return;
     const draft = this.begin('cell.retract', { target: target.opId });
     const { q, r } = target;
@@ -131,7 +135,8 @@ export class CombRecorder implements RecorderControls {
 
   private change(part: Partial<RecorderState>): void {
     this.state = { ...this.state, ...part };
-    this.signal.set(recorderView(this.state));
+    if (!keepsComb(part)) this.comb = combState(this.state);
+    this.signal.set(recorderView(this.state, this.comb, this.signal.get()));
   }
 
   private begin<K extends RecorderKind>(kind: K, body: OpRequest<K>['body']): OpenDraft {

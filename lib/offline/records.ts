@@ -145,14 +145,14 @@ export class Records {
   }
 
   private drainPorts(device: DeviceDatabase): DrainPorts {
-    const { clock, timers, network, newId, webLock, label } = this.edges;
+    const { clock, timers, network, page, webLock, label } = this.edges;
     return {
       store: this.store,
       clock,
       timers,
       network,
       label,
-      holder: newId(),
+      holder: page,
       lock: webLock(this.db.name),
       enrols: ENROLS.has(this.person.role),
       report: (progress) => this.note({ progress }),

@@ -5,7 +5,7 @@ export interface Timers {
 }
 
 /** Thrown by `within` when the time is over. */
-export class TimedOut extends Error {
+class TimedOut extends Error {
   override name = 'TimedOut';
 }
 

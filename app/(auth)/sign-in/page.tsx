@@ -6,7 +6,7 @@ import { SignInForm } from '@/components/shell/sign-in-form';
 import { pathAfterSignIn } from '@/components/shell/sign-in-request';
 import { Notice } from '@/components/ui/notice';
 import { currentSession } from '@/lib/server/auth/current-session';
-import { demoSignIns } from '@/lib/server/queries/demo-sign-ins';
+import { demoSignIns } from '@/lib/server/auth/demo-sign-ins';
 
 export const dynamic = 'force-dynamic';
 export const metadata: Metadata = { title: 'Sign in' };

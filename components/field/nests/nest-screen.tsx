@@ -6,7 +6,7 @@ import { FieldFrame } from '@/components/field/frame/field-frame';
 import { Fetching } from '@/components/field/parts/fetching';
 import { NotOnThisPhone } from '@/components/field/parts/not-here';
 import { Part } from '@/components/field/parts/part';
-import { memberName, usePerson } from '@/components/field/parts/person-context';
+import { mayRecord, memberName, usePerson } from '@/components/field/parts/person-context';
 import { RowLink } from '@/components/field/parts/row-link';
 import { Screen } from '@/components/field/parts/screen';
 import { ReadingMap } from '@/components/field/readings/reading-map';
@@ -59,7 +59,8 @@ function VisitRow({ visit, today }: { visit: VisitView; today: string }): ReactE
 }
 
 function NestBody({ nest }: { nest: NestView }): ReactElement {
-  const today = useToday(usePerson().zone);
+  const person = usePerson();
+  const today = useToday(person.zone);
   const open = openReadingOf(nest);
   return (
     <Screen title={nestTitle(nest)} under={nest.taxon ? <em>{nest.taxon}</em> : 'Taxon not named yet'}>
@@ -68,14 +69,15 @@ function NestBody({ nest }: { nest: NestView }): ReactElement {
           Go on reading
         </FieldLink>
       )}
-      <FieldLink
-        tone={open ? 'plain' : 'main'}
-
-        href={fieldHref({ kind: 'new-visit', id: nest.id })}
-        className="text-xl"
-      >
-        Start a visit
-      </FieldLink>
+      {mayRecord(person) && (
+        <FieldLink
+          tone={open ? 'plain' : 'main'}
+          href={fieldHref({ kind: 'new-visit', id: nest.id })}
+          className="text-xl"
+        >
+          Start a visit
+        </FieldLink>
+      )}
       <Part title="The comb">
         {nest.lastReadingId ? (
           <LastMap readingId={nest.lastReadingId} />

@@ -2,11 +2,12 @@
 
 import { type ReactElement, useState } from 'react';
 import { EmptyState } from '@/components/ui/empty-state';
+import { Notice } from '@/components/ui/notice';
 import { FieldLink } from '@/components/field/parts/field-button';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import { Fetching } from '@/components/field/parts/fetching';
 import { Part } from '@/components/field/parts/part';
-import { usePerson } from '@/components/field/parts/person-context';
+import { mayRecord, usePerson } from '@/components/field/parts/person-context';
 import { Screen } from '@/components/field/parts/screen';
 import { TextLine } from '@/components/field/parts/text-line';
 import { fieldHref } from '@/components/field/routing/field-route';
@@ -62,17 +63,26 @@ function NestGroups({ nests }: { nests: readonly NestSummary[] }): ReactElement 
   );
 }
 
+/** The large key that starts a nest; people whose marks the office would not take are told so instead. */
+function StartNest(): ReactElement {
+  if (mayRecord(usePerson())) {
+    return (
+      <FieldLink tone="main" href={fieldHref({ kind: 'new-nest' })} className="w-full text-xl md:max-w-[40rem]">
+        Start a nest
+      </FieldLink>
+    );
+  }
+  return (
+    <Notice title="You can look, not record">
+      <p>Nests are read by technicians, reviewers and the lead biologist.</p>
+    </Notice>
+  );
+}
+
 function Home({ nests }: { nests: readonly NestSummary[] }): ReactElement {
   return (
     <Screen title="Today’s nests" wide>
-      <FieldLink
-        tone="main"
-
-        href={fieldHref({ kind: 'new-nest' })}
-        className="w-full text-xl md:max-w-[40rem]"
-      >
-        Start a nest
-      </FieldLink>
+      <StartNest />
       {nests.length === 0 ? (
         <EmptyState title="No nest on this phone yet">
           <p>Start one at the nest, with or without signal. Nests of your team come here when there is signal.</p>

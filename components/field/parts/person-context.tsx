@@ -22,6 +22,11 @@ export function usePerson(): Person {
   return person;
 }
 
+/** May this person record at nests? Others may look; the office would not take their marks. */
+export function mayRecord({ role }: Pick<Person, 'role'>): boolean {
+  return role === 'technician' || role === 'reviewer' || role === 'biologist';
+}
+
 /** The name of a member of the team, as far as this phone knows it. */
 export function memberName({ members, userId, displayName }: Person, id: string): string {
   if (id === userId) return displayName;

@@ -75,7 +75,7 @@ export function pressNoCell({ recorder, mode, askNoCell }: Desk): void {
 export function runCommand(desk: Desk, command: RecorderCommand): void {
   const { recorder } = desk;
   if (command.do === 'mark') return chooseState(desk, command.state);
-  if (command.do === 'toggle') return flipToggle(recorder, command.mark);
+  if (command.do === 'toggle') return desk.mode.kind === 'walk' ? flipToggle(recorder, command.mark) : undefined;
   if (command.do === 'undo') return recorder.undo();
   if (command.do === 'no-cell') return pressNoCell(desk);
   const to = stepTo(recorder.view, command.step);

@@ -62,13 +62,7 @@ export function FinishSummary({ recorder, label, onBack }: FinishSummaryProps): 
       {state === 'failed' && <NotSavedNotice what="that the reading is finished" />}
       <div className="flex flex-col gap-gap">
         {!view.submitted && (
-          <FieldButton
-            tone="main"
-
-            className="text-xl"
-            disabled={marks.length === 0}
-            onClick={() => void press()}
-          >
+          <FieldButton tone="main" className="text-xl" disabled={marks.length === 0} onClick={() => void press()}>
             {state === 'saving' ? 'Saving …' : 'Submit reading'}
           </FieldButton>
         )}

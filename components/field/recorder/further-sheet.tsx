@@ -56,23 +56,15 @@ function NoteField({ desk }: { desk: Desk }): ReactElement {
   );
 }
 
-function FurtherBody({ desk, onClose }: Omit<FurtherSheetProps, 'open'>): ReactElement {
-  const { recorder, mode, detail, setDetail } = desk;
+/** What can be said of one cell besides its state; nothing of it is painted. */
+function CellDetails({ desk }: { desk: Desk }): ReactElement {
+  const { recorder, detail, setDetail } = desk;
   const mark = currentMark(recorder.view);
   const toggles = shownToggles(recorder.view);
-  const press = (state: CellState): void => {
-    chooseState(desk, state);
-    onClose();
-  };
   const putInstar = (instar: number | null): void =>
     mark ? putDetail(recorder, { instar }) : setDetail({ ...detail, instar });
   return (
-    <div className="flex flex-col gap-6">
-      <FurtherKeys
-        tally={recorder.view.tally}
-        chosen={mode.kind === 'paint' ? mode.state : (mark?.state ?? null)}
-        onPress={press}
-      />
+    <>
       <div className="grid grid-cols-2 gap-gap">
         <ToggleKey pressed={toggles.reused} onPress={() => flipToggle(recorder, 'reused')}>
           Reused
@@ -83,6 +75,25 @@ function FurtherBody({ desk, onClose }: Omit<FurtherSheetProps, 'open'>): ReactE
       </div>
       <InstarKeys value={mark ? mark.instar : (detail.instar ?? null)} onChange={putInstar} />
       <NoteField desk={desk} />
+    </>
+  );
+}
+
+function FurtherBody({ desk, onClose }: Omit<FurtherSheetProps, 'open'>): ReactElement {
+  const { recorder, mode } = desk;
+  const painting = mode.kind === 'paint';
+  const press = (state: CellState): void => {
+    chooseState(desk, state);
+    onClose();
+  };
+  return (
+    <div className="flex flex-col gap-6">
+      <FurtherKeys
+        tally={recorder.view.tally}
+        chosen={painting ? mode.state : (currentMark(recorder.view)?.state ?? null)}
+        onPress={press}
+      />
+      {!painting && recorder.view.current && <CellDetails desk={desk} />}
     </div>
   );
 }

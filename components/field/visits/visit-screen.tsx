@@ -7,7 +7,7 @@ import { nestTitle } from '@/components/field/nests/nest-lists';
 import { Fetching } from '@/components/field/parts/fetching';
 import { NotOnThisPhone } from '@/components/field/parts/not-here';
 import { Part } from '@/components/field/parts/part';
-import { memberName, usePerson } from '@/components/field/parts/person-context';
+import { mayRecord, memberName, usePerson } from '@/components/field/parts/person-context';
 import { Screen } from '@/components/field/parts/screen';
 import { fieldHref } from '@/components/field/routing/field-route';
 import { purposeWord } from '@/components/field/words/reading-words';
@@ -51,7 +51,7 @@ function VisitBody({ visit }: { visit: VisitView }): ReactElement {
       title={`${purposeWord(visit.purpose)}, ${writtenTime(visit.startedAt, today)}`}
       under={`${nest ? `${nestTitle(nest)} · ` : ''}started by ${who}`}
     >
-      <ReadingKey visit={visit} />
+      {mayRecord(person) && <ReadingKey visit={visit} />}
       <Part title="Readings">
         {visit.readings.length === 0 && <p>No reading yet. Two people at the nest make one each.</p>}
         <ul className="flex flex-col gap-gap">

@@ -11,7 +11,7 @@ export interface Correction extends Axial {
 }
 
 /** The longest reason the office takes, in code points. */
-export const LONGEST_REASON = 10_000;
+const LONGEST_REASON = 10_000;
 
 /** Why a reason can't be taken, in words; null when it can. */
 export function reasonTrouble(reason: string): string | null {

@@ -126,7 +126,8 @@ describe('a blind second reader', () => {
     const { reviewer, reviewer2 } = team.members;
     const visit = await makeVisit(team, nest);
     const field = await makeReading(team, { nest, visit, marks: n12Marks('field') });
-    const { reading: final } = await decided(await lock(team.members.biologist, field));
+    // Locked by the reader's own hand, so that it even stands under their name.
+    const { reading: final } = await decided(await lock(reviewer, field));
     const own = await makeReading(team, {
       nest,
       visit,

@@ -5,7 +5,7 @@ import type { TeamContext } from '@/lib/server/auth/team-context';
 import { database } from '@/lib/server/db/database';
 import { toBinary } from '@/lib/server/db/uuid-binary';
 import { DEMO_PASSWORD } from '@/lib/server/demo/story/person';
-import { demoSignIns } from '@/lib/server/queries/demo-sign-ins';
+import { demoSignIns } from '@/lib/server/auth/demo-sign-ins';
 import { nestOutcome } from '@/lib/server/queries/nest-outcome';
 import { teamTaxa } from '@/lib/server/queries/team-taxa';
 import { makeNest } from '@/tests/support/factories/make-nest';

@@ -1,6 +1,5 @@
 import { createHash } from 'node:crypto';
-import type { OpDraft } from '@/lib/offline/local-op';
-import { type LocalOp, queuedOp } from '@/lib/offline/local-op';
+import { type LocalOp, type OpDraft, queuedOp } from '@/lib/offline/local-op';
 import { type OpMaker, makeOp } from '@/lib/offline/make-op';
 import type { PhoneClock } from '@/lib/offline/phone-clock';
 import { type StoreMeta, newMeta } from '@/lib/offline/store';

@@ -2,7 +2,7 @@ import type { PhoneClock } from '@/lib/offline/phone-clock';
 import type { World } from './world';
 
 /** The instant at which every simulated season begins: 16 June 2026, 09:00 UTC. */
-export const SEASON_START = Date.UTC(2026, 5, 16, 9);
+const SEASON_START = Date.UTC(2026, 5, 16, 9);
 
 /** A phone's clock that can be set wrong. */
 export class SimClock implements PhoneClock {

@@ -50,7 +50,7 @@ export interface SimReport {
 
 /** How long it storms, how long the queue may take afterwards (I12), and how long until everyone has everything. */
 const STORM_MS = 120_000;
-export const DRAIN_MS = 60_000;
+const DRAIN_MS = 60_000;
 const NEWS_MS = 20_000;
 
 /** One run of the world with several phones and one office. */

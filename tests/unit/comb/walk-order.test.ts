@@ -1,15 +1,12 @@
 import { describe, expect, test } from 'vitest';
 import { type Axial, cellKey } from '@/lib/comb/axial';
 import { ring, spiral } from '@/lib/comb/walk';
-import { nextCell, rimCells } from '@/lib/comb/walk-order';
+import { type WalkInput, nextCell, rimCells } from '@/lib/comb/walk-order';
 
-const nothing = { known: [], marked: [], skipped: [], expectedTotal: null };
+const nothing: WalkInput = { known: [], marked: [], skipped: [], expectedTotal: null };
 
 /** Walks until it ends, marking each cell for which `exists` says so and finding the others missing. */
-function walk(
-  exists: (cell: Axial) => boolean,
-  part: Partial<typeof nothing> & { known?: Axial[]; expectedTotal?: number | null } = {},
-) {
+function walk(exists: (cell: Axial) => boolean, part: Partial<WalkInput> = {}) {
   const marked: Axial[] = [];
   const skipped: Axial[] = [];
   for (;;) {

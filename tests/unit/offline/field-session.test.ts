@@ -65,6 +65,7 @@ function phone(part: Partial<Cookie> = {}) {
     newId,
     webLock: () => noWebLock,
     dexie,
+    page: 'page',
     label: 'Android',
   };
   /** Opens the app in a fresh page of the same phone. */
@@ -89,10 +90,11 @@ const queued = async (session: FieldSession) => (await recordsOf(session).store.
 
 /** Waits for real storage, letting simulated time pass. */
 async function until(clock: ManualTimers, check: () => void | Promise<void>): Promise<void> {
-  await vi.waitFor(async () => {
-    await clock.pass(100);
+  const step = async () => {
+    await clock.pass(20);
     await check();
-  });
+  };
+  await vi.waitFor(step, { timeout: 8_000, interval: 5 });
 }
 
 describe('the field app', () => {
@@ -145,7 +147,7 @@ describe('the field app', () => {
     const session = await openApp();
     await until(clock, () => expect(viewOf(session)).toMatchObject({ enrolled: true }));
     cookie.user = null;
-    await recordsOf(session).commands.openNest({ code: 'N01' });
+    recordsOf(session).wake('online');
     await until(clock, () => expect(viewOf(session).kind).toBe('needs-sign-in'));
   });
 });
@@ -177,6 +179,7 @@ describe('a shared phone (F60)', () => {
     await until(clock, () => expect(viewOf(session)).toMatchObject({ enrolled: true }));
     cookie.user = 'oriel';
     await recordsOf(session).commands.openNest({ code: 'N01' });
+    recordsOf(session).wake('online');
     await until(clock, () => expect(viewOf(session)).toMatchObject({ person: { userId: 'oriel' } }));
     expect(await queued(session)).toBe(0);
   });
@@ -202,6 +205,7 @@ describe('storage that the browser has emptied (F26)', () => {
     const session = await openApp();
     expect(viewOf(session)).toMatchObject({ kind: 'ready', storageCleared: true });
     await recordsOf(session).commands.openNest({ code: 'N01' });
+    recordsOf(session).wake('online');
     await until(clock, async () => expect(await queued(session)).toBe(0));
   });
 
@@ -228,6 +232,7 @@ test('refused operations are offered again once the person has another role', as
   cookie.role = 'technician';
   await session.refresh();
   expect(viewOf(session)).toMatchObject({ person: { role: 'technician' } });
+  recordsOf(session).wake('online');
   await until(clock, async () =>
     expect(await recordsOf(session).store.counts()).toMatchObject({ queued: 0, refused: 0 }),
   );

@@ -13,35 +13,30 @@ const within = { visit: VISIT, reading: READING };
 
 const nest = (n: number, code: string, part?: Partial<LocalOp>) => row({ kind: 'nest.open', n, body: { code } }, part);
 
-function visit(n: number, startedAt: string, visitId = VISIT, part?: Partial<LocalOp>): LocalOp {
-  return row({ kind: 'visit.open', n, visit: visitId, body: { purpose: 'check', startedAt } }, part);
+function visit(n: number, startedAt: string, part: Partial<LocalOp> = {}): LocalOp {
+  const input = { kind: 'visit.open', n, visit: part.visit ?? VISIT, body: { purpose: 'check', startedAt } };
+  return row(input, part);
 }
 
-function reading(n: number, body: { [key: string]: Json } = {}, part?: Partial<LocalOp>, readingId = READING): LocalOp {
-  return row(
-    { kind: 'reading.open', n, visit: VISIT, reading: readingId, body: { kind: 'field', source: 'phone', ...body } },
-    part,
-  );
+function reading(n: number, kind = 'field', part: Partial<LocalOp> = {}): LocalOp {
+  const body = { kind, source: 'phone' };
+  return row({ kind: 'reading.open', n, visit: VISIT, reading: part.reading ?? READING, body }, part);
 }
 
-function mark(
-  n: number,
-  q: number,
-  state: string,
-  more: { [key: string]: Json } = {},
-  part?: Partial<LocalOp>,
-): LocalOp {
-  return row(
-    { kind: 'cell.mark', n, ...within, body: { q, r: 0, state, nectar: false, unsure: false, ...more } },
-    part,
-  );
+/** A mark at (q, 0); `more` is its state and what else it says. */
+function mark(n: number, [q, state]: [number, string], part: Partial<LocalOp> & { supersedes?: string } = {}): LocalOp {
+  const { supersedes, ...rest } = part;
+  const body = { q, r: 0, state, nectar: false, unsure: false, ...(supersedes ? { supersedes } : {}) };
+  return row({ kind: 'cell.mark', n, ...within, body }, rest);
 }
 
 const retract = (n: number, target: number) =>
   row({ kind: 'cell.retract', n, ...within, body: { target: id(target) } });
 
-const set = (n: number, value: Json, base: Json = null, field = 'name') =>
-  row({ kind: 'field.set', n, body: { entity: 'nest', field, value, base } });
+const setField = (n: number, body: { [key: string]: Json }) =>
+  row({ kind: 'field.set', n, body: { entity: 'nest', field: 'name', base: null, ...body } });
+
+const set = (n: number, value: Json, base: Json = null) => setField(n, { value, base });
 
 describe('a field', () => {
   test('has the value of the edit that nobody has edited further', () => {
@@ -78,7 +73,12 @@ describe('a reading', () => {
   const summary = (rows: LocalOp[]) => foldReadings(rows, ME)[0];
 
   test('draws its live marks: a mark replaces another, a retraction brings that back', () => {
-    const rows = [mark(1, 0, 'egg'), mark(2, 1, 'small'), mark(3, 0, 'medium', { supersedes: id(1) }), retract(4, 3)];
+    const rows = [
+      mark(1, [0, 'egg']),
+      mark(2, [1, 'small']),
+      mark(3, [0, 'medium'], { supersedes: id(1) }),
+      retract(4, 3),
+    ];
     const live = liveByCell(foldMarks(rows));
     expect([...live.values()].map(({ q, state }) => [q, state])).toEqual([
       [0, 'egg'],
@@ -88,12 +88,12 @@ describe('a reading', () => {
 
   test('tells for each mark how far it has come', () => {
     const rows = [
-      reading(1, {}, AT_OFFICE),
-      mark(2, 0, 'egg', {}, AT_OFFICE),
-      mark(3, 1, 'egg'),
-      mark(4, 2, 'egg', {}, { state: 'refused' }),
-      mark(5, 3, 'egg', {}, { state: 'held', outcome: 'quarantined' }),
-      mark(6, 4, 'egg', {}, { state: 'suspect' }),
+      reading(1, 'field', AT_OFFICE),
+      mark(2, [0, 'egg'], AT_OFFICE),
+      mark(3, [1, 'egg']),
+      mark(4, [2, 'egg'], { state: 'refused' }),
+      mark(5, [3, 'egg'], { state: 'held', outcome: 'quarantined' }),
+      mark(6, [4, 'egg'], { state: 'suspect' }),
     ];
     const found = summary(rows);
     if (!found) throw new Error('no reading');
@@ -109,7 +109,7 @@ describe('a reading', () => {
   });
 
   test('tells its history in words, newest first', () => {
-    const rows = [reading(1), mark(2, 0, 'egg'), mark(3, 1, 'small'), retract(4, 3)];
+    const rows = [reading(1), mark(2, [0, 'egg']), mark(3, [1, 'small']), retract(4, 3)];
     const found = summary(rows);
     if (!found) throw new Error('no reading');
     expect(foldReading(found, rows).history.map(({ words }) => words)).toEqual([
@@ -120,18 +120,18 @@ describe('a reading', () => {
   });
 
   test('leaves out a mark that this version cannot draw', () => {
-    expect(foldMarks([mark(1, 0, 'spun'), mark(2, 99, 'egg'), mark(3, 0.5, 'egg')]).marks).toEqual([]);
+    expect(foldMarks([mark(1, [0, 'spun']), mark(2, [99, 'egg']), mark(3, [0.5, 'egg'])]).marks).toEqual([]);
   });
 
   test('shows the office row where that contradicts an operation of this phone', () => {
-    const ours = mark(1, 0, 'egg', {}, { state: 'held', outcome: 'conflict' });
-    const theirs = mark(1, 0, 'capped', {}, { ...THEIRS, key: officeKey(id(1)) });
+    const ours = mark(1, [0, 'egg'], { state: 'held', outcome: 'conflict' });
+    const theirs = mark(1, [0, 'capped'], { ...THEIRS, key: officeKey(id(1)) });
     expect(foldMarks([ours, theirs]).marks.map(({ state }) => state)).toEqual(['capped']);
   });
 
   test('of someone else is hidden from a second reader until they have handed in', () => {
-    const mine = reading(2, { kind: 'second' }, {}, id(50));
-    const rows = [reading(1, {}, THEIRS), mine, mark(3, 0, 'egg', {}, THEIRS)];
+    const mine = reading(2, 'second', { reading: id(50) });
+    const rows = [reading(1, 'field', THEIRS), mine, mark(3, [0, 'egg'], THEIRS)];
     const hidden = summary(rows);
     expect(hidden).toMatchObject({ mine: false, blind: true });
     if (hidden) expect(foldReading(hidden, rows)).toMatchObject({ marks: [], tally: { cellsTotal: 0 }, history: [] });
@@ -146,10 +146,10 @@ describe('the nests', () => {
     const other = { nest: 'another-nest' };
     const rows = [
       nest(1, 'N01', AT_OFFICE),
-      visit(2, '2026-06-01T09:00:00-04:00', VISIT, AT_OFFICE),
+      visit(2, '2026-06-01T09:00:00-04:00', AT_OFFICE),
       reading(3),
       { ...nest(4, 'N02', THEIRS), ...other },
-      { ...visit(5, '2026-06-02T09:00:00-04:00', id(51), THEIRS), ...other },
+      { ...visit(5, '2026-06-02T09:00:00-04:00', { ...THEIRS, visit: id(51) }), ...other },
     ];
     expect(
       foldNests(rows, ME).map(({ code, visits, lastReadingId, waiting, standing }) => [
@@ -166,8 +166,8 @@ describe('the nests', () => {
   });
 
   test('compare visits as instants, whatever offsets they were written with', () => {
-    const early = visit(2, '2026-06-02T01:00:00+02:00', id(51));
-    const late = visit(3, '2026-06-01T20:00:00-04:00', id(52));
+    const early = visit(2, '2026-06-02T01:00:00+02:00', { visit: id(51) });
+    const late = visit(3, '2026-06-01T20:00:00-04:00', { visit: id(52) });
     expect(foldNests([nest(1, 'N01'), late, early], ME)[0]?.visitList.map(({ id: found }) => found)).toEqual([
       id(51),
       id(52),
@@ -185,7 +185,7 @@ describe('the nests', () => {
       place: { lat: 43.6, lon: -77.6, accuracyM: null },
     });
     expect(foldNests([opening, set(2, 'Oar rack')], ME)[0]).toMatchObject({ name: 'Oar rack' });
-    expect(foldNests([opening, set(2, null), set(3, null, null, 'place')], ME)[0]).toMatchObject({
+    expect(foldNests([opening, set(2, null), setField(3, { value: null, field: 'place' })], ME)[0]).toMatchObject({
       name: null,
       place: null,
     });

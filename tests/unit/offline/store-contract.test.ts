@@ -97,7 +97,7 @@ describe.each(STORES)('the storage $name', ({ make }) => {
     ];
     const store = await filled(make(), rows);
     await store.transact([], () => ({ result: null, keepEpoch: 2 }));
-    expect(keys(await store.opsOfReading(READING)).sort()).toEqual([2, 3, 4]);
+    expect(keys(await store.opsOfReading(READING)).sort((a, b) => a - b)).toEqual([2, 3, 4]);
   });
 
   test('finds the operations of a reading and of a nest', async () => {
@@ -107,7 +107,7 @@ describe.each(STORES)('the storage $name', ({ make }) => {
       row({ kind: 'nest.open', n: 3, nest: 'other' }),
     ]);
     expect(keys(await store.opsOfReading(READING))).toEqual([1]);
-    expect(keys(await store.opsOfNest(NEST)).sort()).toEqual([1, 2]);
+    expect(keys(await store.opsOfNest(NEST)).sort((a, b) => a - b)).toEqual([1, 2]);
   });
 
   test('hands the lease to its change and keeps what that returns', async () => {

@@ -3,14 +3,11 @@ import type { ReactElement } from 'react';
 import { BroodSection } from '@/components/lab/brood-section';
 import { CombColumn } from '@/components/lab/comb-column';
 import { FlagsList } from '@/components/lab/flags-list';
-import { HistoryList } from '@/components/lab/history-list';
-import { nestLine, placeWords } from '@/components/lab/lab-words';
+import { nestLine } from '@/components/lab/lab-words';
+import { NestFacts } from '@/components/lab/nest-facts';
 import { NestTitle } from '@/components/lab/nest-title';
 import { NoReading } from '@/components/lab/no-reading';
-import { OutcomeBlock } from '@/components/lab/outcome-block';
-import { ReadingList } from '@/components/lab/reading-list';
 import { WhenBlock } from '@/components/lab/when-block';
-import { settles } from '@/components/shell/role-words';
 import { dateWords } from '@/components/ui/date-words';
 import { Section } from '@/components/ui/section';
 import { requirePage } from '@/lib/server/auth/current-session';
@@ -36,7 +33,7 @@ export default async function NestPage({ params, searchParams }: NestPageProps):
   const [{ id }, { reading: asked }] = await Promise.all([params, searchParams]);
   const data = await foundOrAway(nestPageData(session, id, typeof asked === 'string' ? asked : undefined));
   const { nest, shown, review, estimate, asOf, outcome } = data;
-  const { zone, role } = session;
+  const { zone } = session;
   return (
     <>
       <NestTitle {...nest} />
@@ -62,33 +59,15 @@ export default async function NestPage({ params, searchParams }: NestPageProps):
             <FlagsList flags={estimate.flags} />
           </Section>
           <BroodSection estimate={estimate} asOf={asOf} />
-          <Section id="visits" title="Visits and readings" className="mt-8">
-            {nest.visits.length === 0 ? (
-              <p className="text-quiet">No visit yet.</p>
-            ) : (
-              <ReadingList
-                nest={nest.id}
-                visits={nest.visits}
-                shown={shown?.reading.id ?? null}
-                zone={zone}
-                year={asOf}
-                settles={settles(role)}
-              />
-            )}
-          </Section>
-          {review && (
-            <Section id="decided" title="Settled in the lab" className="mt-8">
-              <HistoryList review={review} zone={zone} year={asOf} />
-            </Section>
-          )}
-          {outcome && (
-            <Section id="outcome" title="Outcome" className="mt-8">
-              <OutcomeBlock outcome={outcome} />
-            </Section>
-          )}
-          <Section id="place" title="Where it hung" className="mt-8">
-            <p>{nest.place ? placeWords(nest.place, role === 'researcher') : 'No place was recorded.'}</p>
-          </Section>
+          <NestFacts
+            nest={nest}
+            shown={shown?.reading.id ?? null}
+            review={review}
+            outcome={outcome}
+            role={session.role}
+            zone={zone}
+            year={asOf}
+          />
         </div>
       </div>
     </>

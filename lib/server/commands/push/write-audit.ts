@@ -12,7 +12,7 @@ export interface AuditEvent {
   /** A short word such as `push` or `lock`. */
   action: string;
   subjectId: string | null;
-  /** Ids, numbers and hashes; never free text or places. */
+  /** Ids, numbers, hashes and the reason a person gave for a decision; never places. */
   detail: { [key: string]: Json };
   at: Date;
 }
