@@ -59,7 +59,13 @@ const TABLES: readonly [name: string, lines: readonly string[]][] = [
   ],
   [
     'login_attempts',
-    [`id ${ID} PRIMARY KEY`, `subject ${HASH}`, 'failed BOOLEAN NOT NULL', `at ${WHEN}`, 'KEY login_attempts_subject (subject, at)'],
+    [
+      `id ${ID} PRIMARY KEY`,
+      `subject ${HASH}`,
+      'failed BOOLEAN NOT NULL',
+      `at ${WHEN}`,
+      'KEY login_attempts_subject (subject, at)',
+    ],
   ],
   [
     'devices',

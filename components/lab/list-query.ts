@@ -1,3 +1,5 @@
+import { addDays } from '@/lib/kit/local-date';
+
 /** What the nests list can be narrowed and sorted by; all as they stand in the address. */
 export interface ListQuery {
   q?: string;
@@ -10,7 +12,10 @@ export interface ListQuery {
 
 type RawParams = Readonly<Record<string, string | string[] | undefined>>;
 
-const DATE = /^\d{4}-\d{2}-\d{2}$/;
+const DATE = /^[1-9]\d{3}-\d{2}-\d{2}$/;
+/** The last date that has a day after it which the office can hold. */
+const LAST_DATE = '9999-12-30';
+const LAST_PAGE = 9_999_999;
 
 function single(params: RawParams, name: string): string | undefined {
   const value = params[name];
@@ -18,9 +23,15 @@ function single(params: RawParams, name: string): string | undefined {
   return text === '' ? undefined : text;
 }
 
+/** Is this a day its month has? A browser's date field sends no other, but an address can be typed. */
+function isRealDate(text: string): boolean {
+  if (!DATE.test(text) || text > LAST_DATE || Number.isNaN(Date.parse(`${text}T00:00:00Z`))) return false;
+  return addDays(text, 0) === text;
+}
+
 function date(params: RawParams, name: string): string | undefined {
   const text = single(params, name);
-  return text && DATE.test(text) && !Number.isNaN(Date.parse(text)) ? text : undefined;
+  return text && isRealDate(text) ? text : undefined;
 }
 
 /** The columns the list sorts by; a leading `-` means from the largest. */
@@ -43,7 +54,7 @@ export function readListQuery(params: RawParams): ListQuery {
     from: date(params, 'from'),
     to: date(params, 'to'),
     sort: sort(params),
-    page: Number.isInteger(page) && page > 1 ? page : undefined,
+    page: Number.isInteger(page) && page > 1 && page <= LAST_PAGE ? page : undefined,
   };
 }
 

@@ -27,10 +27,3 @@ export interface Mark extends MarkContent {
   /** The wall time written on the phone, with its offset. */
   at: string;
 }
-
-/** A retraction: takes back one mark of the same reading. */
-export interface Retraction {
-  opId: string;
-  hlc: string;
-  target: string;
-}

@@ -18,13 +18,24 @@ export const CELL_STATES = [
 export type CellState = (typeof CELL_STATES)[number];
 
 /** The six states that have a large key of their own. */
-export const EVERYDAY_STATES = ['empty', 'egg', 'small', 'medium', 'large', 'capped'] as const satisfies readonly CellState[];
+export const EVERYDAY_STATES = [
+  'empty',
+  'egg',
+  'small',
+  'medium',
+  'large',
+  'capped',
+] as const satisfies readonly CellState[];
 
 /** The states behind the *more* key. */
-export const FURTHER_STATES = ['opened', 'dead', 'parasitised', 'webbed', 'damaged', 'unread'] as const satisfies readonly CellState[];
-
-/** The five ordered stages of living brood, youngest first. */
-export const BROOD_STAGES = ['egg', 'small', 'medium', 'large', 'capped'] as const satisfies readonly CellState[];
+export const FURTHER_STATES = [
+  'opened',
+  'dead',
+  'parasitised',
+  'webbed',
+  'damaged',
+  'unread',
+] as const satisfies readonly CellState[];
 
 /** Is this one of the twelve state words? */
 export function isCellState(value: unknown): value is CellState {

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { PROTOCOL } from '@/lib/protocol/limits';
 
 const json = z.json();

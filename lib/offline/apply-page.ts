@@ -60,7 +60,9 @@ function seqAfter({ start, answer }: Page): number | null {
     if (seq <= last) return null;
     last = seq;
   }
-  return next && next.epoch === start.epoch && next.seq >= last ? next.seq : null;
+  if (next?.epoch !== start.epoch) return null;
+  // Without rows the office may bring a cursor back that lies beyond its end: reading twice is harmless.
+  return answer.rows.length === 0 || next.seq >= last ? next.seq : null;
 }
 
 /**

@@ -1,3 +1,4 @@
+import { askForWake } from './background-wake';
 import { browserClock, browserId, browserRandom, browserTimers } from './browser-clock-edge';
 import { browserSha256 } from './browser-sha256';
 import { browserWebLock } from './browser-web-lock';
@@ -35,6 +36,7 @@ export function browserFieldApp(): FieldSession {
     sha256: browserSha256,
     newId: browserId,
     webLock: browserWebLock,
+    askForWake,
     page: browserClock.boot(),
     label: phoneLabel(),
   });

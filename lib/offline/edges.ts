@@ -15,6 +15,8 @@ export interface Edges {
   sha256: Sha256;
   newId(): string;
   webLock(name: string): WebLock;
+  /** Asks to be woken when the network is back, where the browser can do that. */
+  askForWake(): Promise<void>;
   /** Another IndexedDB implementation, for tests. */
   dexie?: DexieOptions;
   /** Names this load of the page: what it left unfinished, it may take up again at once. */

@@ -166,6 +166,7 @@ export class Records {
     const meta = await this.store.readMeta().catch(() => null);
     this.skewMs = meta?.skewMs ?? this.skewMs;
     if (end.kind === 'cleared') await this.afterClearing();
+    if (end.kind === 'again') await this.edges.askForWake().catch(() => undefined);
   }
 
   /** The browser has emptied the records: starts new ones, so that what comes next is kept. */

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { classifyAnswer } from './classify-answer';
 import { type Network, PROBE_TIMEOUT_MS } from './network';
 

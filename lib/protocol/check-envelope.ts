@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { parseHlc } from '@/lib/kit/hlc';
 import { type Result, err, ok } from '@/lib/kit/result';
 import { isUuidText } from '@/lib/kit/uuid';

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import type { Json } from './canonical-json';
 import type { EntityType } from './entity-of';
 import { nameText, placeValue } from './member-types';

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { isUuidText } from '@/lib/kit/uuid';
 import { MAX_NAME, MAX_TEXT } from './limits';
 

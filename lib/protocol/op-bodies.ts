@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod';
 import { CELL_STATES } from '@/lib/comb/states';
 import { idText as id, nameText as name, placeValue as place, wordsText as words } from './member-types';
 import type { OpKind } from './op';

@@ -42,7 +42,7 @@ export async function readCells(page: Page, counted?: number): Promise<string> {
 }
 
 /** The large key of a state. */
-export function stateKey(page: Page, name: string) {
+function stateKey(page: Page, name: string) {
   return page.getByRole('group', { name: 'Keys' }).getByRole('button', { name: new RegExp(`^${name}\\b`, 'i') });
 }
 

@@ -41,7 +41,7 @@ export function readingId(code: string, visit: string, reading: string): string 
 }
 
 /** The id of a nest by its code. */
-export function nestId(code: string): string {
+function nestId(code: string): string {
   return demoId(nestName({ code }));
 }
 

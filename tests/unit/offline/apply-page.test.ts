@@ -59,6 +59,11 @@ describe('a page', () => {
   });
 });
 
+test('a page without rows may bring the cursor back, when the office has less than it had', () => {
+  const known = { phone: meta({ cursor: 9 }), start: { epoch: 1, cursor: 9 } };
+  expect(apply([], known, { next: '1:7' }).meta?.cursor).toBe(7);
+});
+
 describe('a page is ignored', () => {
   test.each<[string, Case, Partial<PullAnswer>]>([
     ['when it starts behind the cursor', { phone: meta({ cursor: 5 }) }, {}],

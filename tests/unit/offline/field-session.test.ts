@@ -64,6 +64,7 @@ function phone(part: Partial<Cookie> = {}) {
     sha256,
     newId,
     webLock: () => noWebLock,
+    askForWake: async () => undefined,
     dexie,
     page: 'page',
     label: 'Android',

@@ -16,7 +16,7 @@ export function instantOf(wall: WallTime, offset: string): number {
 }
 
 /** Milliseconds that an offset such as `-04:00` puts local time ahead of UTC. */
-export function offsetMs(offset: string): number {
+function offsetMs(offset: string): number {
   return instantOf('1970-01-01T00:00', 'Z') - instantOf('1970-01-01T00:00', offset);
 }
 

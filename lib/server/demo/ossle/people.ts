@@ -8,7 +8,7 @@ export const YSOLDE: Person = { email: 'technician@ossle.example', name: 'Ysolde
 export const BRAM: Person = { email: 'reviewer@ossle.example', name: 'Bram Otterveld', role: 'reviewer' };
 
 /** Coordinator of the second team. */
-export const NOEMI: Person = { email: 'coordinator@ossle.example', name: 'Noemi Laszkar', role: 'coordinator' };
+const NOEMI: Person = { email: 'coordinator@ossle.example', name: 'Noemi Laszkar', role: 'coordinator' };
 
 /** Everyone of the second team. */
 export const OSSLE_PEOPLE: readonly Person[] = [YSOLDE, BRAM, NOEMI];

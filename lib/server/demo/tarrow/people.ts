@@ -23,7 +23,7 @@ export const LOOS: Person = { email: 'biologist@tarrow.example', name: 'Dr Wysta
 export const IMKE: Person = { email: 'coordinator@tarrow.example', name: 'Imke Dolan-Reyes', role: 'coordinator' };
 
 /** Outside researcher; sees places rounded. */
-export const AMADI: Person = { email: 'researcher@tarrow.example', name: 'Prof. Amadi Corriveau', role: 'researcher' };
+const AMADI: Person = { email: 'researcher@tarrow.example', name: 'Prof. Amadi Corriveau', role: 'researcher' };
 
 /** Everyone of the Trust. */
 export const TARROW_PEOPLE: readonly Person[] = [TOBIAH, ORIEL, SENNA, HALLORAN, JUNO, LOOS, IMKE, AMADI];
