@@ -1,6 +1,6 @@
 import type { z } from 'zod';
 import type { NetworkAnswer } from './network';
-import type { Trouble } from './sync-status';
+import type { Trouble } from './trouble';
 
 /** What an answer means for the queue. Only `ok` may take anything out of it. */
 export type Verdict<T> =

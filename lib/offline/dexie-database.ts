@@ -1,5 +1,5 @@
 import { Dexie, type DexieOptions, type Table } from 'dexie';
-import type { Lease } from './lease';
+import type { Lease } from './lease-row';
 import type { LocalOp } from './local-op';
 import type { RecorderPlace } from './recorder-view';
 import type { StoreMeta } from './store';

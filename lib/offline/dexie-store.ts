@@ -1,6 +1,6 @@
 import { Dexie } from 'dexie';
 import type { RecordsDatabase } from './dexie-database';
-import type { Lease } from './lease';
+import type { Lease } from './lease-row';
 import type { LocalOp } from './local-op';
 import type { Change, OpCounts, Snapshot, Store, StoreMeta } from './store';
 

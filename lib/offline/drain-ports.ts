@@ -1,7 +1,7 @@
 import type { Verdict } from './classify-answer';
 import type { LeasePorts } from './lease';
 import type { Network } from './network';
-import type { Trouble } from './sync-status';
+import type { Trouble } from './trouble';
 
 /** How far a push has come: the request on its way ends with operation `k` of `n`. */
 export interface Progress {

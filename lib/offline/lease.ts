@@ -1,13 +1,7 @@
+import type { Lease } from './lease-row';
 import type { PhoneClock } from './phone-clock';
 import type { Store } from './store';
 import { type Timers, sleep } from './timers';
-
-/** Which tab drains now, and until when others leave it alone. */
-export interface Lease {
-  holder: string;
-  /** Epoch milliseconds of the phone's clock. */
-  until: number;
-}
 
 /** A holder that is alive renews this often. */
 export const HEARTBEAT_MS = 5_000;

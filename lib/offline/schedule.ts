@@ -1,7 +1,7 @@
 import type { Random } from '@/lib/kit/random';
 import type { Drain } from './drain';
 import type { DrainEnd } from './drain-ports';
-import type { Trouble } from './sync-status';
+import type { Trouble } from './trouble';
 import { type Timers, sleep } from './timers';
 
 /** Something that may mean the network is back. */

@@ -1,4 +1,4 @@
-import type { Lease } from './lease';
+import type { Lease } from './lease-row';
 import type { LocalOp } from './local-op';
 import type { RecorderPlace } from './recorder-view';
 

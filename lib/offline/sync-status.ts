@@ -1,6 +1,7 @@
 import { localParts } from '@/lib/kit/local-date';
 import type { DrainEnd, Progress } from './drain-ports';
 import type { OpCounts } from './store';
+import type { Trouble } from './trouble';
 
 /** What a person has to do before everything can reach the office. */
 export type Need =
@@ -21,9 +22,6 @@ export type Need =
   | { what: 'set-aside'; count: number }
   /** The phone could not keep these. */
   | { what: 'not-saved'; count: number };
-
-/** Why the last attempt did not get through; null when it did or none was made. */
-export type Trouble = 'no-answer' | 'no-real-connection' | 'office-busy' | null;
 
 /** The sync state in the corner, true at every moment. */
 export type SyncStatus =

@@ -9,7 +9,7 @@ interface NotHereProps {
 }
 
 /** A screen for what cannot be shown: why, and the way home. */
-export function NotHere({ title, children }: NotHereProps): ReactElement {
+function NotHere({ title, children }: NotHereProps): ReactElement {
   return (
     <Screen title={title}>
       <div>{children}</div>

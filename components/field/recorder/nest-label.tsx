@@ -13,7 +13,7 @@ export interface NestLabel {
 }
 
 /** Before the nest's record is open, and when this phone does not hold it. */
-export const UNNAMED: NestLabel = { title: 'this nest', code: '', name: null, taxon: null };
+const UNNAMED: NestLabel = { title: 'this nest', code: '', name: null, taxon: null };
 
 interface NestLabelReaderProps {
   nest: string;

@@ -1,5 +1,6 @@
 import { countWords } from '@/components/ui/date-words';
-import type { SyncStatus, Trouble } from '@/lib/offline/sync-status';
+import type { SyncStatus } from '@/lib/offline/sync-status';
+import type { Trouble } from '@/lib/offline/trouble';
 
 const TROUBLE: Readonly<Record<NonNullable<Trouble>, string>> = {
   'no-answer': 'The office does not answer just now; it is tried again by itself.',

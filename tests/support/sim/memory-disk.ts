@@ -1,4 +1,4 @@
-import type { Lease } from '@/lib/offline/lease';
+import type { Lease } from '@/lib/offline/lease-row';
 import type { LocalOp } from '@/lib/offline/local-op';
 import type { RecorderPlace } from '@/lib/offline/recorder-view';
 import type { Change, Snapshot, StoreMeta } from '@/lib/offline/store';

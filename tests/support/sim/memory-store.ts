@@ -5,7 +5,11 @@ import type { MemoryDisk } from './memory-disk';
 /** How a simulated disk takes its time and fails. `work` runs at one instant between two waits, or never. */
 export type DiskRun = <T>(work: () => T) => Promise<T>;
 
-/** A disk that is never slow and never fails. */
+/**
+ * A disk that is never slow and never fails.
+ *
+ * @public The tests that plant faults take it from the module they replace.
+ */
 export const steadyDisk: DiskRun = async (work) => work();
 
 function isSetAside({ state, outcome, seen }: LocalOp): boolean {
