@@ -27,6 +27,11 @@ export default defineConfig({
   timeout: process.env.LONG === '1' ? 3_600_000 : 90_000,
   expect: { timeout: 10_000 },
   reporter: 'list',
+  // What is measured against a clock has the machine to itself, after everything else.
+  projects: [
+    { name: 'journeys', testIgnore: /large-comb/ },
+    { name: 'alone', testMatch: /large-comb/, dependencies: ['journeys'] },
+  ],
   use: {
     baseURL: `http://127.0.0.1:${process.env.PORT}`,
     viewport: { width: 390, height: 844 },
