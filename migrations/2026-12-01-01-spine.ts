@@ -5,7 +5,6 @@ const ID_OR_NULL = 'BINARY(16) NULL';
 const WHEN = 'DATETIME(3) NOT NULL';
 const WHEN_OR_NULL = 'DATETIME(3) NULL';
 const WORD = 'VARCHAR(32) CHARACTER SET ascii COLLATE ascii_bin NOT NULL';
-const WORD_OR_NULL = 'VARCHAR(32) CHARACTER SET ascii COLLATE ascii_bin NULL';
 const HASH = 'BINARY(32) NOT NULL';
 const CLOCK_TEXT = 'VARCHAR(32) CHARACTER SET ascii COLLATE ascii_bin NOT NULL';
 /** Text compared byte by byte, spaces at its end included: two spellings are never taken for one. */
@@ -359,7 +358,7 @@ const TABLES: readonly [name: string, lines: readonly string[]][] = [
       `id ${ID}`,
       `nest_id ${ID}`,
       `input_digest ${HASH}`,
-      `model_version ${WORD_OR_NULL}`,
+      `model_version ${WORD}`,
       'settings_version INT NOT NULL',
       'answer LONGTEXT NOT NULL',
       `created_at ${WHEN}`,

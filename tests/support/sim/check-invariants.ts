@@ -2,7 +2,7 @@ import { foldMarks, liveByCell } from '@/lib/offline/fold-readings';
 import { type LocalOp, officeKey, queuedOp } from '@/lib/offline/local-op';
 import type { PullRow } from '@/lib/protocol/pull';
 import type { MemoryDisk } from './memory-disk';
-import type { Run, SavedOp, SimPhone } from './simulate';
+import type { RunFacts, SavedOp, SimPhone } from './run-facts';
 
 /** A broken promise, named by the invariant of the sync protocol. */
 export interface Violation {
@@ -17,7 +17,7 @@ function onDisk(disk: MemoryDisk, opId: string, bodyHash: string): LocalOp | und
 }
 
 /** I1: what was shown as saved is on the disk. */
-function checkSaved({ saved }: Run, { disk, wiped }: SimPhone): Violation[] {
+function checkSaved({ saved }: RunFacts, { disk, wiped }: SimPhone): Violation[] {
   if (wiped) return [];
   return [...saved.values()]
     .filter((op) => op.disk === disk && !onDisk(disk, op.opId, op.bodyHash))
@@ -25,14 +25,14 @@ function checkSaved({ saved }: Run, { disk, wiped }: SimPhone): Violation[] {
 }
 
 /** I6: what left the queue is at the office. */
-function checkHeld({ server }: Run, { disk }: SimPhone): Violation[] {
+function checkHeld({ server }: RunFacts, { disk }: SimPhone): Violation[] {
   return [...disk.ops.values()]
     .filter((row) => row.state === 'held' && row.epoch === server.epoch && !server.holds(row.op.opId, row.op.bodyHash))
     .map((row) => ({ invariant: 'I6', what: `held, but the office has it not: ${row.key}` }));
 }
 
 /** I7: every office row up to the cursor is here. */
-function checkCursor({ server }: Run, { disk }: SimPhone): Violation[] {
+function checkCursor({ server }: RunFacts, { disk }: SimPhone): Violation[] {
   const { meta } = disk;
   if (!meta || meta.epoch !== server.epoch) return [];
   return server.data.log
@@ -41,12 +41,12 @@ function checkCursor({ server }: Run, { disk }: SimPhone): Violation[] {
 }
 
 /** What must hold on a phone at every moment, in particular right after a kill. */
-export function checkPhone(run: Run, phone: SimPhone): Violation[] {
+export function checkPhone(run: RunFacts, phone: SimPhone): Violation[] {
   return [...checkSaved(run, phone), ...checkHeld(run, phone), ...checkCursor(run, phone)];
 }
 
 /** I3, I8: one row an operation, numbers without a gap. */
-function checkLog({ server, made }: Run): Violation[] {
+function checkLog({ server, made }: RunFacts): Violation[] {
   const found: Violation[] = [];
   const ids = new Set<string>();
   server.data.log.forEach((row, index) => {
@@ -65,7 +65,7 @@ function reasonOf(row: LocalOp | undefined): string {
 }
 
 /** I2, I10, I11: a saved operation is at the office once; one that the office cannot take is still on the phone. */
-function checkOne(run: Run, { opId, bodyHash, disk }: SavedOp): Violation | null {
+function checkOne(run: RunFacts, { opId, bodyHash, disk }: SavedOp): Violation | null {
   const { server } = run;
   const aside = server.data.aside.get(`${opId} ${bodyHash}`);
   const inLog = server.row(opId)?.bodyHash === bodyHash;
@@ -82,7 +82,7 @@ function checkOne(run: Run, { opId, bodyHash, disk }: SavedOp): Violation | null
   };
 }
 
-function checkDelivered(run: Run): Violation[] {
+function checkDelivered(run: RunFacts): Violation[] {
   return [...run.saved]
     .filter(([key]) => !run.exempt.has(key))
     .map(([, op]) => checkOne(run, op))
@@ -90,7 +90,7 @@ function checkDelivered(run: Run): Violation[] {
 }
 
 /** I9: what a phone has from the office is what the office has. */
-function checkSame({ server }: Run, { disk }: SimPhone): Violation[] {
+function checkSame({ server }: RunFacts, { disk }: SimPhone): Violation[] {
   const { meta } = disk;
   if (meta?.epoch !== server.epoch || meta.cursor !== server.data.log.length) {
     return [
@@ -116,7 +116,7 @@ function comb(rows: readonly LocalOp[]): string[] {
 }
 
 /** I9: every phone draws the combs that the office has. What only an emptied phone had may be missing there. */
-function checkCombs({ server, exempt }: Run, { disk }: SimPhone): Violation[] {
+function checkCombs({ server, exempt }: RunFacts, { disk }: SimPhone): Violation[] {
   if (exempt.size > 0) return [];
   const here = comb([...disk.ops.values()]);
   const there = comb(server.data.log.map((row) => ({ ...queuedOp(row, row.actor, 0), state: 'remote' })));
@@ -131,7 +131,7 @@ function checkSuspects({ disk }: SimPhone): Violation[] {
 }
 
 /** What must hold once the storm is over and everyone has been served. */
-export function checkEnd(run: Run): Violation[] {
+export function checkEnd(run: RunFacts): Violation[] {
   const phones = run.phones.flatMap((phone) => [
     ...checkPhone(run, phone),
     ...checkSame(run, phone),

@@ -5,6 +5,7 @@ import { MemoryDisk } from './memory-disk';
 import { ModelServer, type ServerFault } from './model-server';
 import { nextDeed } from './person';
 import { SimClock } from './sim-clock';
+import type { RunFacts, SavedOp, SimPhone } from './run-facts';
 import { SimTab } from './sim-tab';
 import { CALM, type Weather, roughWeather } from './weather';
 import { World } from './world';
@@ -19,23 +20,6 @@ export interface SimOptions {
   countedIds?: boolean;
   /** Every phone has two tabs. */
   twoTabs?: boolean;
-}
-
-/** An operation a person saw as saved. */
-export interface SavedOp {
-  opId: string;
-  bodyHash: string;
-  disk: MemoryDisk;
-}
-
-/** A phone: one disk, one clock, one or two tabs. */
-export interface SimPhone {
-  disk: MemoryDisk;
-  clock: SimClock;
-  user: string;
-  tabs: SimTab[];
-  /** True once the browser has emptied it: what only it had may be gone. */
-  wiped: boolean;
 }
 
 /** What a run did and what it found. */
@@ -54,7 +38,7 @@ const DRAIN_MS = 60_000;
 const NEWS_MS = 20_000;
 
 /** One run of the world with several phones and one office. */
-class Run {
+class Run implements RunFacts {
   readonly world: World;
   readonly server: ModelServer;
   readonly phones: SimPhone[] = [];
@@ -243,8 +227,6 @@ class Run {
       this.violations.push({ invariant: 'I12', what: `still queued after heal: ${row.kind} ${row.key}` });
   }
 }
-
-export type { Run };
 
 /**
  * Plays one seed: phones record through a storm, the storm ends, and everything must come out right. Equal seeds and

@@ -4,7 +4,7 @@ import { type Tally, tallyOf } from '@/lib/comb/tally';
 import type { Op } from '@/lib/protocol/op';
 import { OP_BODIES } from '@/lib/protocol/op-bodies';
 import { demoId } from '@/lib/server/demo/build/demo-id';
-import { nestName, readingName } from '@/lib/server/demo/build/names';
+import { readingName } from '@/lib/server/demo/build/names';
 import { seasonSteps } from '@/lib/server/demo/build/season-steps';
 import type { TeamStory } from '@/lib/server/demo/story/team-story';
 
@@ -38,11 +38,6 @@ export function readingMarks(ops: readonly Op[], reading: string): Mark[] {
 /** The id of a reading by nest code, visit and reading key. */
 export function readingId(code: string, visit: string, reading: string): string {
   return demoId(readingName({ code }, { key: visit }, { key: reading }));
-}
-
-/** The id of a nest by its code. */
-function nestId(code: string): string {
-  return demoId(nestName({ code }));
 }
 
 /** Only the counts that are not zero, as a table row would give them. */
