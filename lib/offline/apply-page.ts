@@ -87,6 +87,7 @@ export function applyPage(page: Page) {
         cursor,
         hlc: advancedHlc(meta, answer.rows, now),
         safeSeq: answer.safeSeq,
+        deviceEpoch: answer.epoch,
         skewMs: skewMs ?? meta.skewMs,
         resync: meta.resync && answer.more,
       },

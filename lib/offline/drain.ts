@@ -47,11 +47,15 @@ async function moveEpoch(ports: DrainPorts, { from, epoch }: { from: number; epo
   return true;
 }
 
-/** A restore may have forgotten this phone: then it enrols again. A device withdrawn on purpose stays withdrawn. */
+/**
+ * A restore may have forgotten this phone: then it enrols again. A device that the office of this epoch has known was
+ * withdrawn on purpose and stays withdrawn.
+ */
 async function wasForgotten(ports: DrainPorts): Promise<boolean> {
+  if (!ports.enrols) return false;
   const meta = await ports.store.readMeta();
   const epoch = await officeEpoch(ports);
-  return meta !== null && epoch !== null && epoch !== meta.epoch;
+  return meta !== null && epoch !== null && epoch !== meta.deviceEpoch;
 }
 
 /** Makes the drain of one tab. It keeps its pace from pass to pass. */

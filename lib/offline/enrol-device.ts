@@ -15,7 +15,7 @@ export async function officeEpoch(ports: Pick<DrainPorts, 'network' | 'clock'>):
 function nameDevice(deviceId: string, epoch: number) {
   return ({ meta }: Snapshot): Change<void> => ({
     result: undefined,
-    meta: meta ? { ...meta, deviceId, epoch: meta.epoch === 0 ? epoch : meta.epoch } : undefined,
+    meta: meta ? { ...meta, deviceId, deviceEpoch: epoch, epoch: meta.epoch === 0 ? epoch : meta.epoch } : undefined,
   });
 }
 

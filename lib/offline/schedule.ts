@@ -91,7 +91,8 @@ export function startSchedule(ports: SchedulePorts): Schedule {
 
   function rest(end: DrainEnd): Promise<void> {
     if (end.kind === 'done') return idle();
-    if (end.kind === 'elsewhere') return alarm.sleep(TICK_MS);
+    // Emptied storage is founded anew right away, so there is soon something to send again.
+    if (end.kind === 'elsewhere' || end.kind === 'cleared') return alarm.sleep(TICK_MS);
     if (end.kind !== 'again') return alarm.sleep(BACKOFF_MOST_MS);
     const wait = backoffMs(failures, ports.random);
     return backOff(Math.max(wait, end.afterMs ?? 0), end.afterMs === null);

@@ -49,7 +49,8 @@ export function settleResults(settlement: Settlement) {
       const after = result && settled(row, result, settlement);
       if (after) changed.push(after);
     }
-    const learnt = { ...meta, safeSeq: answer.safeSeq, skewMs: skewMs ?? meta.skewMs };
+    const { safeSeq, epoch: deviceEpoch } = answer;
+    const learnt = { ...meta, safeSeq, deviceEpoch, skewMs: skewMs ?? meta.skewMs };
     return { result: changed.length, ops: changed, meta: learnt };
   };
 }

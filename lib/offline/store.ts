@@ -10,6 +10,8 @@ export interface StoreMeta {
   userId: string;
   /** The device the office enrolled; null before the first time. */
   deviceId: string | null;
+  /** The last epoch in which the office was seen to know that device; 0 when never. */
+  deviceEpoch: number;
   /** Incarnation of the office's data; 0 before the first enrolment. */
   epoch: number;
   /** Every office row up to this `seq` is stored here. */
@@ -95,6 +97,7 @@ export function newMeta(sentinel: string, userId: string): StoreMeta {
     sentinel,
     userId,
     deviceId: null,
+    deviceEpoch: 0,
     epoch: 0,
     cursor: 0,
     safeSeq: 0,

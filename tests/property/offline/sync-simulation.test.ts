@@ -12,6 +12,8 @@ const BLOCK = LONG ? 1_000 : 60;
 /** Seeds that once broke a promise, and what was wrong then. */
 const ONCE_BROKEN = [
   { seed: 2233, wrong: 'waits grown while offline went on when the office could be reached but failed' },
+  { seed: 5569, wrong: 'a tab wrote the device name of an older epoch last, and the phone took itself for withdrawn' },
+  { seed: 27376, wrong: 'a phone whose storage was emptied waited five minutes before it sent again' },
 ] as const;
 
 const blocks = Array.from({ length: SEEDS / BLOCK }, (_, i) => ({ from: i * BLOCK + 1, to: (i + 1) * BLOCK }));

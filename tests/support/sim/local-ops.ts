@@ -67,5 +67,5 @@ export function row(input: OpInput, part: Partial<LocalOp> = {}): LocalOp {
 
 /** A meta row of an enrolled phone. */
 export function meta(part: Partial<StoreMeta> = {}): StoreMeta {
-  return { ...newMeta('sentinel', ME), deviceId: 'device', epoch: 1, ...part };
+  return { ...newMeta('sentinel', ME), deviceId: 'device', deviceEpoch: 1, epoch: 1, ...part };
 }

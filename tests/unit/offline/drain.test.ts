@@ -214,6 +214,18 @@ describe('after a restore of the office', () => {
   });
 });
 
+test('a phone that lives in the new epoch with a name of the old one enrols again', async () => {
+  // Two tabs enrolled at once while the office was restored in between, and the older name was written last.
+  const { disk, drain, numbers } = phone(1, (request) => {
+    const known = request.deviceId !== 'device' || !request.path.includes('/sync/');
+    return known || request.path.endsWith('/enrol') ? willing(request) : problemAnswer(403, 'device-revoked');
+  });
+  disk.meta = meta({ deviceEpoch: 0 });
+  expect(await drain(pass)).toEqual({ kind: 'done' });
+  expect(disk.meta).toMatchObject({ deviceId: 'minted', deviceEpoch: 1 });
+  expect(numbers('held')).toEqual([1]);
+});
+
 test('a phone that was withdrawn stays withdrawn and keeps everything', async () => {
   const { drain, network, numbers } = phone(1, (request) =>
     request.path === '/api/health' ? jsonAnswer(200, { ok: true, epoch: 1 }) : problemAnswer(403, 'device-revoked'),

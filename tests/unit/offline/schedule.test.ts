@@ -78,6 +78,12 @@ describe('a pass starts', () => {
     expect(drain).toHaveBeenCalledTimes(2);
   });
 
+  test.each(['elsewhere', 'cleared'] as const)('within seconds after one that ended with %s', async (kind) => {
+    const { timers, drain } = start([{ kind }]);
+    await timers.pass(TICK_MS);
+    expect(drain).toHaveBeenCalledTimes(2);
+  });
+
   test('every minute for news', async () => {
     const { timers, drain } = start([]);
     await timers.pass(NEWS_MS);
