@@ -22,7 +22,12 @@ export interface Desk {
 }
 
 /** Every place one can step to: marked cells, cells known from the last visit, and open places on the rim. */
-export function stopsOf({ marks, last, rim, skipped }: Pick<RecorderView, 'marks' | 'last' | 'rim' | 'skipped'>): Axial[] {
+export function stopsOf({
+  marks,
+  last,
+  rim,
+  skipped,
+}: Pick<RecorderView, 'marks' | 'last' | 'rim' | 'skipped'>): Axial[] {
   const keys = new Set([...marks.keys(), ...last.keys(), ...rim.map(cellKey)]);
   return [...keys].filter((key) => marks.has(key) || !skipped.has(key)).map(parseCellKey);
 }
