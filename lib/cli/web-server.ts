@@ -2,6 +2,7 @@ import type { ChildProcess } from 'node:child_process';
 import { createConnection } from 'node:net';
 import { join } from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
+import { pathToFileURL } from 'node:url';
 import { type ChildOptions, hasEnded, startChild } from './child';
 import { CommandError } from './command-error';
 
@@ -42,9 +43,10 @@ export async function requireFreePort(port: number): Promise<void> {
 export async function startWebServer({ port, env, ...how }: WebServerOptions): Promise<ChildProcess> {
   await requireFreePort(port);
   const next = join(process.cwd(), 'node_modules', 'next', 'dist', 'bin', 'next');
+  const guard = pathToFileURL(join(process.cwd(), 'lib', 'cli', 'refuse-trace.mjs')).href;
   return startChild({
     command: process.execPath,
-    args: [next, 'start', '--hostname', HOST, '--port', String(port)],
+    args: ['--import', guard, next, 'start', '--hostname', HOST, '--port', String(port)],
     env: { NODE_ENV: 'production', NEXT_TELEMETRY_DISABLED: '1', PORT: String(port), ...env },
     ...how,
   });
