@@ -1,7 +1,7 @@
 import type { DurationRow } from '@/lib/brood/durations';
 import type { Setting } from '@/lib/brood/settings';
 import { TRUE_CLASSES, rowTrouble } from './confusion-rows';
-import type { SettingsContent } from './content';
+import type { DurationFactor, SettingsContent } from './content';
 import { SETTING_ITEMS } from './setting-groups';
 
 /** Something in settings that cannot stand, in words that name it. */
@@ -24,10 +24,11 @@ function valueTroubles([name, { value, source }]: [string, Setting]): SettingsTr
   const field = `values.${name}`;
   const item = SETTING_ITEMS.get(name);
   if (!item) return [{ field, text: `${name} is not a setting.` }];
-  const { label, min, max, unit } = item;
+  const { label, min, max, unit, isWhole } = item;
   const isIn = Number.isFinite(value) && value >= min && value <= max;
   const range = isIn ? null : `must be between ${min} and ${max}${unit && ` ${unit}`}.`;
-  return [range, sourceTrouble(source)].flatMap((text) =>
+  const whole = isWhole && !Number.isInteger(value) ? 'must be a whole number.' : null;
+  return [range, whole, sourceTrouble(source)].flatMap((text) =>
     text ? [{ field, text: `${sentence(label)}: ${text}` }] : [],
   );
 }
@@ -78,6 +79,23 @@ function temperatureTroubles({ values, durations }: SettingsContent): SettingsTr
   return troubles;
 }
 
+/** Development twice or half as fast as published is as far as a team's own nests are believed. */
+const FACTOR = { logMean: Math.log(2), logSd: 1 };
+
+function factorTroubles(factors: readonly DurationFactor[]): SettingsTrouble[] {
+  return factors.flatMap(({ taxon, logMean, logSd, source }, i) => {
+    const isTwice = factors.findIndex((other) => other.taxon === taxon) !== i;
+    const texts = [
+      Math.abs(logMean) <= FACTOR.logMean ? null : 'must lie between half and twice as fast.',
+      logSd >= 0 && logSd <= FACTOR.logSd ? null : `the spread between nests must be between 0 and ${FACTOR.logSd}.`,
+      isTwice ? 'stands there twice.' : null,
+      sourceTrouble(source),
+    ];
+    const field = `durationFactors.${taxon}`;
+    return texts.flatMap((text) => (text ? [{ field, text: `Factor for ${taxon}: ${text}` }] : []));
+  });
+}
+
 /** Everything in settings that cannot stand; empty when they can be signed. */
 export function checkContent(content: SettingsContent): SettingsTrouble[] {
   const rows = TRUE_CLASSES.flatMap((name) => {
@@ -92,5 +110,6 @@ export function checkContent(content: SettingsContent): SettingsTrouble[] {
     ...content.durations.flatMap(durationTroubles),
     ...taxonTroubles(content.durations),
     ...temperatureTroubles(content),
+    ...factorTroubles(content.durationFactors),
   ];
 }

@@ -1,7 +1,7 @@
 import type { DurationRow } from '@/lib/brood/durations';
 import type { Trust } from '@/lib/brood/trust';
 import { type ConfusionRow, TRUE_CLASSES } from './confusion-rows';
-import type { SettingsContent } from './content';
+import type { DurationFactor, SettingsContent } from './content';
 import { SETTING_ITEMS } from './setting-groups';
 
 /** One thing that differs between two versions. */
@@ -30,6 +30,10 @@ function durationText({ egg, larva, capped, referenceC }: DurationRow): string {
   return `${[egg, larva, capped].map(numberText).join(' / ')} d at ${numberText(referenceC)} °C`;
 }
 
+function factorText({ logMean, logSd }: DurationFactor): string {
+  return `${numberText(Math.exp(-logMean))} times as long, spread between nests ${numberText(logSd)}`;
+}
+
 const held = (text: string, { trust, source }: { trust: Trust; source: string }): string =>
   `${text} (${trust}; ${source})`;
 
@@ -50,10 +54,14 @@ function allTexts(content: SettingsContent): Map<string, [label: string, text: s
   const durations = content.durations.map(
     (row) => [`durations.${row.taxon}`, [`durations of ${row.taxon}`, held(durationText(row), row)]] as const,
   );
+  const factors = content.durationFactors.map(
+    (factor) =>
+      [`durationFactors.${factor.taxon}`, [`factor for ${factor.taxon}`, held(factorText(factor), factor)]] as const,
+  );
   return new Map<string, [string, string]>([
     ...valueTexts(content),
     ...rows.map(([field, [label, text]]) => [field, [label, text]] as [string, [string, string]]),
-    ...durations.map(([field, [label, text]]) => [field, [label, text]] as [string, [string, string]]),
+    ...[...durations, ...factors].map(([field, [label, text]]) => [field, [label, text]] as [string, [string, string]]),
   ]);
 }
 

@@ -1,7 +1,7 @@
 import type { Trust } from '@/lib/brood/trust';
 
-/** What may truly be at a place of the comb. `empty` also stands for brood lost, `opened` for an adult come out. */
-export const TRUE_CLASSES = ['absent', 'empty', 'egg', 'L1', 'L2', 'L3', 'L4', 'L5', 'pupa', 'opened'] as const;
+/** What may truly be at a place of the comb. `empty` also stands for brood lost, `emerged` for an adult come out. */
+export const TRUE_CLASSES = ['absent', 'empty', 'egg', 'L1', 'L2', 'L3', 'L4', 'L5', 'pupa', 'emerged'] as const;
 
 /** What a reader may record there. */
 export const RECORDED_CLASSES = ['absent', 'empty', 'egg', 'small', 'medium', 'large', 'capped', 'opened'] as const;
@@ -39,7 +39,7 @@ export const DEFAULT_CONFUSION: ConfusionRows = {
   L4: assumed({ medium: 0.88, small: 0.06, large: 0.06 }),
   L5: assumed({ large: 0.93, medium: 0.05, capped: 0.02 }),
   pupa: assumed({ capped: 0.985, large: 0.015 }),
-  opened: assumed({ opened: 0.9, empty: 0.1 }),
+  emerged: assumed({ opened: 0.9, empty: 0.1 }),
 };
 
 /** Rounding that a person typing shares may leave. */

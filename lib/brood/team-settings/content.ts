@@ -1,6 +1,6 @@
 import { DEFAULT_DURATIONS, type DurationRow } from '@/lib/brood/durations';
 import type { Setting } from '@/lib/brood/settings';
-import { isTrust } from '@/lib/brood/trust';
+import { type Trust, isTrust } from '@/lib/brood/trust';
 import {
   type ConfusionRow,
   type ConfusionRows,
@@ -12,11 +12,24 @@ import {
 } from './confusion-rows';
 import { SETTING_ITEMS } from './setting-groups';
 
+/** How the nests of a taxon develop relative to its durations, learnt from the team's own: log of the rate. */
+export interface DurationFactor {
+  /** The taxon of the row of durations it applies to. */
+  taxon: string;
+  /** Mean of the log rate; above 0 is faster than the durations. */
+  logMean: number;
+  /** Standard deviation of the log rate from nest to nest, what is not known of the mean included. */
+  logSd: number;
+  trust: Trust;
+  source: string;
+}
+
 /** Everything one version of a team's settings holds. */
 export interface SettingsContent {
   values: Readonly<Record<string, Setting>>;
   confusion: ConfusionRows;
   durations: readonly DurationRow[];
+  durationFactors: readonly DurationFactor[];
 }
 
 /** What a team starts with. */
@@ -24,6 +37,7 @@ export const DEFAULT_CONTENT: SettingsContent = {
   values: Object.fromEntries([...SETTING_ITEMS].map(([name, item]) => [name, item.default])),
   confusion: DEFAULT_CONFUSION,
   durations: DEFAULT_DURATIONS,
+  durationFactors: [],
 };
 
 type Members = Readonly<Record<string, unknown>>;
@@ -50,6 +64,15 @@ function storedRow(value: unknown): HeldRow | null {
   return { row: held, trust, source };
 }
 
+function storedFactors(value: unknown): DurationFactor[] {
+  if (!Array.isArray(value)) return [];
+  return value.flatMap((item) => {
+    const { taxon, logMean, logSd, trust, source } = membersOf(item);
+    const isWhole = typeof taxon === 'string' && typeof logMean === 'number' && typeof logSd === 'number';
+    return isWhole && isTrust(trust) && typeof source === 'string' ? [{ taxon, logMean, logSd, trust, source }] : [];
+  });
+}
+
 /**
  * Reads stored settings: numbers by name and `confusion` by row. What is missing or not whole keeps the product's
  * default, so that an older version can always be read.
@@ -66,10 +89,11 @@ export function storedContent(json: string, durations: readonly DurationRow[]): 
     values: Object.fromEntries(values),
     confusion: Object.fromEntries(confusion) as ConfusionRows,
     durations: durations.length > 0 ? durations : DEFAULT_DURATIONS,
+    durationFactors: storedFactors(stored.durationFactors),
   };
 }
 
-/** The text that numbers and confusion are stored as; durations have rows of their own. */
-export function contentText({ values, confusion }: SettingsContent): string {
-  return JSON.stringify({ ...values, confusion });
+/** The text that all but the durations is stored as; those have rows of their own. */
+export function contentText({ values, confusion, durationFactors }: SettingsContent): string {
+  return JSON.stringify({ ...values, confusion, durationFactors });
 }

@@ -1,3 +1,4 @@
+import { DEFAULT_LEARNING, LEARNING_RULES } from '@/lib/brood/learning/learning-settings';
 import { DEFAULT_SETTINGS, SETTING_RULES, type Setting } from '@/lib/brood/settings';
 import { TEMPERATURE_RULES } from '@/lib/brood/temperature/temperature-settings';
 import { SETTING_WORDS } from './setting-words';
@@ -8,6 +9,8 @@ export interface NumberRule {
   unit: string;
   min: number;
   max: number;
+  /** Only whole numbers make sense. */
+  isWhole?: boolean;
 }
 
 /** One number with everything a person needs to judge it. */
@@ -31,15 +34,20 @@ export function settingGroup(
   rules: Readonly<Record<string, NumberRule>>,
   defaults: Readonly<Record<string, Setting>>,
 ): SettingGroup {
-  const items = Object.entries(rules).flatMap(([name, { label, unit, min, max }]) => {
+  const items = Object.entries(rules).flatMap(([name, rule]) => {
     const held = defaults[name];
-    return held ? [{ name, label, unit, min, max, does: SETTING_WORDS[name] ?? '', default: held }] : [];
+    return held ? [{ name, ...rule, does: SETTING_WORDS[name] ?? '', default: held }] : [];
   });
   return { id, title, items };
 }
 
 const PARTS: readonly { id: string; title: string; names: readonly string[] }[] = [
   { id: 'stages', title: 'Stages', names: ['instar5Share', 'foundingLead'] },
+  {
+    id: 'laying',
+    title: 'Laying and growth of the comb',
+    names: ['layFirst', 'layNext', 'generations', 'cellsPerDay', 'orderSpread', 'orderSpreadPerCell'],
+  },
   {
     id: 'variation',
     title: 'How much broods and nests differ',
@@ -74,7 +82,7 @@ export const SETTING_GROUPS: readonly SettingGroup[] = [
     rulesOf((name) => !PLACED.has(name)),
     DEFAULT_SETTINGS.values,
   ),
-];
+].filter(({ items }) => items.length > 0);
 
 /** Every number by name. */
 export const SETTING_ITEMS: ReadonlyMap<string, SettingItem> = new Map(

@@ -2,6 +2,13 @@
 export const SETTING_WORDS: Readonly<Record<string, string>> = {
   instar5Share: 'A larger share makes cells with large larvae older and the others younger.',
   foundingLead: 'Moves every founding date, and nothing else.',
+  layFirst: 'A lower one lets cells stand empty for longer before their first egg.',
+  layNext: 'A lower one lets cells stand empty for longer between two broods.',
+  generations: 'How many broods after another a cell is followed through.',
+  slipFloor: 'A larger one lets impossible histories stand with less said about them.',
+  cellsPerDay: 'A larger one makes the outer cells of a first visit younger.',
+  orderSpread: 'A larger one lets cells near the pedicel be built out of order.',
+  orderSpreadPerCell: 'A larger one lets cells at the rim be built out of order.',
   cvEgg: 'Wider ranges wherever an egg was seen.',
   cvInstar: 'Wider ranges wherever a larva was seen.',
   cvCapped: 'Wider ranges wherever a cap was seen.',
@@ -20,5 +27,7 @@ export const SETTING_WORDS: Readonly<Record<string, string>> = {
   amberWindow: 'A longer one warns earlier that a nest should not be moved any more.',
   redWindow: 'A longer one stops moves before the first adult is due.',
   guardWindow: 'A longer one asks for the lead biologist’s yes earlier.',
+  learnPseudoCount: 'A larger one lets the team’s own double readings change the confusion rows more slowly.',
+  learnDurationSd: 'A larger one lets the team’s own nests change the durations faster.',
   relayWindow: 'A longer one asks about more cells that went from capped to egg.',
 };

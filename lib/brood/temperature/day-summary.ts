@@ -2,6 +2,7 @@ import { addDays, localDate } from '@/lib/kit/local-date';
 import { startOfLocalDay } from '@/lib/kit/start-of-local-day';
 import type { FilledRange } from './clock-parts';
 import type { DevelopmentClock } from './development-clock';
+import { developmentDays } from './development-days';
 import type { TemperatureRecord } from './record';
 
 const HOUR_MS = 3_600_000;
@@ -55,22 +56,6 @@ function hoursOutside({ from, to }: DevelopmentClock, [start, end]: readonly [nu
   return (Math.max(0, (from ?? start) - start) + Math.max(0, end - (to ?? end))) / HOUR_MS;
 }
 
-/** The integral of a clock's rates over a stretch of time, days of the durations. */
-function developmentIn({ rates }: DevelopmentClock, [start, end]: readonly [number, number]): number {
-  let sum = 0;
-  let rate = 1;
-  let since = start;
-  for (const [at, next] of rates) {
-    if (at >= end) break;
-    if (at > since) {
-      sum += (at - since) * rate;
-      since = at;
-    }
-    rate = next;
-  }
-  return (sum + (end - since) * rate) / (24 * HOUR_MS);
-}
-
 /** The days of a record, from the first to the last. */
 export function daySummaries(record: TemperatureRecord, clock: DevelopmentClock, zone: string): DaySummary[] {
   if (clock.from === null || clock.to === null) return [];
@@ -85,7 +70,7 @@ export function daySummaries(record: TemperatureRecord, clock: DevelopmentClock,
       max: measured.get(date)?.max ?? null,
       drawnHours: hoursIn(clock.filled, 'interpolated', span),
       calendarHours: hoursIn(clock.filled, 'calendar', span) + hoursOutside(clock, span),
-      development: developmentIn(clock, span),
+      development: developmentDays(clock, span),
     });
   }
   return days;

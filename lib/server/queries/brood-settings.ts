@@ -6,7 +6,9 @@ import {
   type Setting,
   type SettingName,
 } from '@/lib/brood/settings';
+import { type ConfusionRows, DEFAULT_CONFUSION } from '@/lib/brood/team-settings/confusion-rows';
 import type { SettingsContent } from '@/lib/brood/team-settings/content';
+import type { Trust } from '@/lib/brood/trust';
 import { latestVersion } from './settings/settings-rows';
 import type { TeamScope } from './team-scope';
 
@@ -21,11 +23,26 @@ function isSettingName(name: string): name is SettingName {
   return Object.hasOwn(SETTING_RULES, name);
 }
 
+/** Weakest first. */
+const TRUST_ORDER: readonly Trust[] = ['assumption', 'very low', 'low', 'medium'];
+
+/** The confusion rows as one matrix with the weakest trust among them; nothing where they are the product's own. */
+function ownConfusion(confusion: ConfusionRows, version: string) {
+  if (JSON.stringify(confusion) === JSON.stringify(DEFAULT_CONFUSION)) return {};
+  const held = Object.entries(confusion);
+  const trusts = new Set(held.map(([, { trust }]) => trust));
+  const trust = TRUST_ORDER.find((word) => trusts.has(word)) ?? 'assumption';
+  const rows = Object.fromEntries(held.map(([name, { row }]) => [name, { ...row }]));
+  return { confusion: { rows, trust, source: `settings version ${version}, row by row` } };
+}
+
 /** The part of a team's settings that the brood model reads. */
-export function broodSettingsOf({ values, durations }: SettingsContent, version: string): BroodSettings {
+export function broodSettingsOf(content: SettingsContent, version: string): BroodSettings {
+  const { values, durations, confusion, durationFactors } = content;
   const own: Record<SettingName, Setting> = { ...DEFAULT_SETTINGS.values };
   for (const [name, setting] of Object.entries(values)) if (isSettingName(name)) own[name] = setting;
-  return { version, values: own, durations };
+  const factors = durationFactors.length > 0 ? { durationFactors } : {};
+  return { version, values: own, durations, ...factors, ...ownConfusion(confusion, version) };
 }
 
 /**

@@ -18,12 +18,19 @@ const DURATION = z.strictObject({
   ...{ referenceC: z.number(), publishedTotal: z.number().optional(), ...ORIGIN },
 });
 
+const FACTOR = z.strictObject({
+  ...{ taxon: TEXT.refine((text) => text.trim() !== ''), logMean: z.number(), logSd: z.number() },
+  ...ORIGIN,
+});
+
 /** Body of `PUT /api/settings/draft`: what changes; anything left out stays as it is in the draft. */
 export const DRAFT_INPUT = z.strictObject({
   values: z.record(z.string(), VALUE).optional(),
   confusion: z.partialRecord(z.enum(TRUE_CLASSES), ROW).optional(),
   /** All rows, in place of those before. */
   durations: z.array(DURATION).max(200).optional(),
+  /** All factors, in place of those before. */
+  durationFactors: z.array(FACTOR).max(200).optional(),
 });
 
 /** What changes in a draft. */

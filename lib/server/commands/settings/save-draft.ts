@@ -9,12 +9,16 @@ import { draftOf, latestVersion } from '@/lib/server/queries/settings/settings-r
 import type { TeamScope } from '@/lib/server/queries/team-scope';
 import type { DraftInput } from './draft-input';
 
-function changed(content: SettingsContent, { values, confusion, durations }: DraftInput): SettingsContent {
+function changed(
+  content: SettingsContent,
+  { values, confusion, durations, durationFactors }: DraftInput,
+): SettingsContent {
   return {
     values: { ...content.values, ...values },
     // Rows come checked for their names only; `checkContent` looks into them.
     confusion: { ...content.confusion, ...confusion } as ConfusionRows,
     durations: durations?.map((row) => ({ ...row, taxon: row.taxon.trim() })) ?? content.durations,
+    durationFactors: durationFactors ?? content.durationFactors,
   };
 }
 
