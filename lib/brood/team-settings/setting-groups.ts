@@ -82,6 +82,7 @@ export const SETTING_GROUPS: readonly SettingGroup[] = [
     rulesOf((name) => !PLACED.has(name)),
     DEFAULT_SETTINGS.values,
   ),
+  settingGroup({ id: 'learning', title: 'Learning from the team’s own readings' }, LEARNING_RULES, DEFAULT_LEARNING),
 ].filter(({ items }) => items.length > 0);
 
 /** Every number by name. */
