@@ -6,7 +6,7 @@ import { Field } from '@/components/ui/field';
 import { Input } from '@/components/ui/input';
 import { Notice } from '@/components/ui/notice';
 import { readDayEntry } from './read-day-entry';
-import { useKeep } from './use-keep';
+import { useKeep } from '@/components/lab/use-keep';
 
 interface DayEntryProps {
   nest: string;

@@ -8,7 +8,7 @@ import { FileQuestions } from './file-questions';
 import { ReplaceChoice, type Replacing } from './replace-choice';
 import type { KeptView } from './temperature-shapes';
 import { UploadPreview } from './upload-preview';
-import { useKeep } from './use-keep';
+import { useKeep } from '@/components/lab/use-keep';
 import { type Upload, useUpload } from './use-upload';
 
 interface FileUploadProps {

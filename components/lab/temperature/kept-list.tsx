@@ -9,7 +9,7 @@ import { TextArea } from '@/components/ui/input';
 import { localDate } from '@/lib/kit/local-date';
 import { keptName } from './kept-name';
 import type { KeptView } from './temperature-shapes';
-import { useKeep } from './use-keep';
+import { useKeep } from '@/components/lab/use-keep';
 
 interface KeptListProps {
   nest: string;
