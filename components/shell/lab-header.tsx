@@ -17,6 +17,7 @@ const PARTS: readonly { href: string; title: string; not?: RoleName }[] = [
   { href: '/nests', title: 'Nests' },
   { href: '/hosts', title: 'Hosts', not: 'researcher' },
   { href: '/downloads', title: 'Downloads', not: 'technician' },
+  { href: '/settings', title: 'Settings' },
 ];
 
 /** The head of every lab page: mark, parts, the phone app, who is signed in. */

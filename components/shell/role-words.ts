@@ -20,3 +20,13 @@ export function roleWords(role: string): string {
 export function settles(role: RoleName): boolean {
   return role === 'reviewer' || role === 'biologist';
 }
+
+/** Does this role keep temperature records of nests? */
+export function recordsTemperature(role: RoleName): boolean {
+  return role !== 'researcher';
+}
+
+/** Does this role write and sign the settings? */
+export function ownsSettings(role: RoleName): boolean {
+  return role === 'biologist';
+}

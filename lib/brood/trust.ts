@@ -2,7 +2,7 @@
 export type Trust = 'medium' | 'low' | 'very low' | 'assumption';
 
 /** The trust words, for checking what comes from outside. */
-const TRUST_WORDS = ['medium', 'low', 'very low', 'assumption'] as const satisfies readonly Trust[];
+export const TRUST_WORDS = ['medium', 'low', 'very low', 'assumption'] as const satisfies readonly Trust[];
 
 /** Is this one of the trust words? */
 export function isTrust(value: unknown): value is Trust {

@@ -1,5 +1,4 @@
 import 'server-only';
-import { type DurationRow } from '@/lib/brood/durations';
 import {
   type BroodSettings,
   DEFAULT_SETTINGS,
@@ -7,7 +6,10 @@ import {
   type Setting,
   type SettingName,
 } from '@/lib/brood/settings';
-import { isTrust } from '@/lib/brood/trust';
+import { type ConfusionRows, DEFAULT_CONFUSION } from '@/lib/brood/team-settings/confusion-rows';
+import type { SettingsContent } from '@/lib/brood/team-settings/content';
+import type { Trust } from '@/lib/brood/trust';
+import { latestVersion } from './settings/settings-rows';
 import type { TeamScope } from './team-scope';
 
 /** The settings behind an estimate, with the number of the version they are. */
@@ -17,43 +19,30 @@ export interface TeamBroodSettings {
   settings: BroodSettings;
 }
 
-/** One stored number; null when it is not a whole setting, so that the default stands in. */
-function storedSetting(value: unknown): Setting | null {
-  if (value === null || typeof value !== 'object') return null;
-  const { value: number, trust, source }: { value?: unknown; trust?: unknown; source?: unknown } = value;
-  return typeof number === 'number' && isTrust(trust) && typeof source === 'string'
-    ? { value: number, trust, source }
-    : null;
-}
-
-/** The numbers of a stored version; a name it lacks keeps the product's default. */
-function storedValues(json: string): BroodSettings['values'] {
-  const parsed: unknown = JSON.parse(json);
-  const values: Record<SettingName, Setting> = { ...DEFAULT_SETTINGS.values };
-  if (parsed === null || typeof parsed !== 'object') return values;
-  for (const [name, value] of Object.entries(parsed)) {
-    const setting = storedSetting(value);
-    if (setting && isSettingName(name)) values[name] = setting;
-  }
-  return values;
-}
-
 function isSettingName(name: string): name is SettingName {
   return Object.hasOwn(SETTING_RULES, name);
 }
 
-async function storedDurations({ team, db, transaction }: TeamScope, version: number): Promise<DurationRow[]> {
-  const where = { team_id: team, version };
-  const rows = await db.models.DurationSet.findAll({ where, order: [['taxon', 'ASC']], raw: true, transaction });
-  return rows.map(({ taxon, egg_days, larva_days, capped_days, reference_c, trust, source }) => ({
-    taxon,
-    egg: egg_days,
-    larva: larva_days,
-    capped: capped_days,
-    referenceC: reference_c,
-    trust: isTrust(trust) ? trust : 'very low',
-    source,
-  }));
+/** Weakest first. */
+const TRUST_ORDER: readonly Trust[] = ['assumption', 'very low', 'low', 'medium'];
+
+/** The confusion rows as one matrix with the weakest trust among them; nothing where they are the product's own. */
+function ownConfusion(confusion: ConfusionRows, version: string) {
+  if (JSON.stringify(confusion) === JSON.stringify(DEFAULT_CONFUSION)) return {};
+  const held = Object.entries(confusion);
+  const trusts = new Set(held.map(([, { trust }]) => trust));
+  const trust = TRUST_ORDER.find((word) => trusts.has(word)) ?? 'assumption';
+  const rows = Object.fromEntries(held.map(([name, { row }]) => [name, { ...row }]));
+  return { confusion: { rows, trust, source: `settings version ${version}, row by row` } };
+}
+
+/** The part of a team's settings that the brood model reads. */
+export function broodSettingsOf(content: SettingsContent, version: string): BroodSettings {
+  const { values, durations, confusion, durationFactors } = content;
+  const own: Record<SettingName, Setting> = { ...DEFAULT_SETTINGS.values };
+  for (const [name, setting] of Object.entries(values)) if (isSettingName(name)) own[name] = setting;
+  const factors = durationFactors.length > 0 ? { durationFactors } : {};
+  return { version, values: own, durations, ...factors, ...ownConfusion(confusion, version) };
 }
 
 /**
@@ -61,20 +50,7 @@ async function storedDurations({ team, db, transaction }: TeamScope, version: nu
  * durations from `duration_sets`.
  */
 export async function teamBroodSettings(scope: TeamScope): Promise<TeamBroodSettings> {
-  const row = await scope.db.models.SettingsVersion.findOne({
-    where: { team_id: scope.team },
-    order: [['version', 'DESC']],
-    raw: true,
-    transaction: scope.transaction,
-  });
-  if (!row) return { version: 0, settings: DEFAULT_SETTINGS };
-  const durations = await storedDurations(scope, row.version);
-  return {
-    version: row.version,
-    settings: {
-      version: String(row.version),
-      values: storedValues(row.settings),
-      durations: durations.length > 0 ? durations : DEFAULT_SETTINGS.durations,
-    },
-  };
+  const { version, content } = await latestVersion(scope);
+  if (version === 0) return { version, settings: DEFAULT_SETTINGS };
+  return { version, settings: broodSettingsOf(content, String(version)) };
 }

@@ -7,6 +7,7 @@ import { nestLine } from '@/components/lab/lab-words';
 import { NestFacts } from '@/components/lab/nest-facts';
 import { NestTitle } from '@/components/lab/nest-title';
 import { NoReading } from '@/components/lab/no-reading';
+import { TemperatureSection } from '@/components/lab/temperature/temperature-section';
 import { WhenBlock } from '@/components/lab/when-block';
 import { dateWords } from '@/components/ui/date-words';
 import { Section } from '@/components/ui/section';
@@ -32,7 +33,7 @@ export default async function NestPage({ params, searchParams }: NestPageProps):
   const session = await requirePage('nests.read');
   const [{ id }, { reading: asked }] = await Promise.all([params, searchParams]);
   const data = await foundOrAway(nestPageData(session, id, typeof asked === 'string' ? asked : undefined));
-  const { nest, shown, review, estimate, asOf, outcome } = data;
+  const { nest, shown, review, estimate, asOf, outcome, temperature } = data;
   const { zone } = session;
   return (
     <>
@@ -59,6 +60,7 @@ export default async function NestPage({ params, searchParams }: NestPageProps):
             <FlagsList flags={estimate.flags} />
           </Section>
           <BroodSection estimate={estimate} asOf={asOf} />
+          <TemperatureSection nest={nest.id} temperature={temperature} role={session.role} inYear={asOf} />
           <NestFacts
             nest={nest}
             shown={shown?.reading.id ?? null}

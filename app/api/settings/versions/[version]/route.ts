@@ -1,0 +1,9 @@
+import { methods } from '@/lib/server/http/methods';
+import { route } from '@/lib/server/http/route';
+import { settingsVersion } from '@/lib/server/queries/settings/settings-answer';
+
+export const dynamic = 'force-dynamic';
+
+export const { GET, HEAD, POST, PUT, PATCH, DELETE, OPTIONS } = methods({
+  GET: route({ action: 'settings.read', handler: async ({ ctx, path }) => settingsVersion(ctx, path.version ?? '') }),
+});
