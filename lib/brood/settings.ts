@@ -1,4 +1,5 @@
 import { DEFAULT_DURATIONS, type DurationRow } from './durations';
+import { DEFAULT_TEMPERATURE, TEMPERATURE_RULES } from './temperature/temperature-settings';
 import type { Trust } from './trust';
 
 /** One number of the model, with how far it can be trusted and where it comes from. */
@@ -33,6 +34,7 @@ export const SETTING_RULES = {
   redWindow: { label: 'season gate turns red before first emergence', unit: 'days', min: 0, max: 60 },
   guardWindow: { label: 'capped nests this close to first emergence are guarded', unit: 'days', min: 0, max: 60 },
   relayWindow: { label: 'capped to egg within this time is asked about', unit: 'days', min: 0, max: 60 },
+  ...TEMPERATURE_RULES,
 } as const satisfies Record<string, SettingRule>;
 
 /** The name of one number of the model. */
@@ -71,6 +73,7 @@ export const DEFAULT_SETTINGS: BroodSettings = {
     redWindow: assumed(0, GATE_SOURCE),
     guardWindow: assumed(3, GATE_SOURCE),
     relayWindow: assumed(7, GATE_SOURCE),
+    ...DEFAULT_TEMPERATURE,
   },
   durations: DEFAULT_DURATIONS,
 };
