@@ -13,6 +13,10 @@ import { defineAuditEntry } from './audit-entry';
 import { defineHost } from './host';
 import { defineTaxon } from './taxon';
 import { defineSettingsVersion } from './settings-version';
+import { defineSettingsDraft } from './settings-draft';
+import { defineTemperature } from './temperature';
+import { defineTemperatureDay } from './temperature-day';
+import { defineTemperatureReading } from './temperature-reading';
 import { defineDurationSet } from './duration-set';
 import { defineNest } from './nest';
 import { defineVisit } from './visit';
@@ -43,6 +47,10 @@ export function defineModels(sequelize: Sequelize) {
     Host: defineHost(sequelize),
     Taxon: defineTaxon(sequelize),
     SettingsVersion: defineSettingsVersion(sequelize),
+    SettingsDraft: defineSettingsDraft(sequelize),
+    Temperature: defineTemperature(sequelize),
+    TemperatureDay: defineTemperatureDay(sequelize),
+    TemperatureReading: defineTemperatureReading(sequelize),
     DurationSet: defineDurationSet(sequelize),
     Nest: defineNest(sequelize),
     Visit: defineVisit(sequelize),

@@ -1,4 +1,11 @@
-import { DataTypes, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  DataTypes,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 
 /** A signed set of programme settings; records say which version applied. */
 export class SettingsVersion extends Model<InferAttributes<SettingsVersion>, InferCreationAttributes<SettingsVersion>> {
@@ -7,6 +14,7 @@ export class SettingsVersion extends Model<InferAttributes<SettingsVersion>, Inf
   declare settings: string;
   declare signed_by: Buffer | null;
   declare signed_at: Date;
+  declare reason: CreationOptional<string | null>;
 }
 
 /** Puts the model of `settings_versions` on a connection. */
@@ -19,6 +27,7 @@ export function defineSettingsVersion(sequelize: Sequelize): typeof SettingsVers
       settings: { type: DataTypes.TEXT('long'), allowNull: false },
       signed_by: { type: 'BINARY(16)', allowNull: true },
       signed_at: { type: DataTypes.DATE(3), allowNull: false },
+      reason: { type: DataTypes.TEXT('medium'), allowNull: true },
     },
     { sequelize, modelName: 'SettingsVersion', tableName: 'settings_versions', timestamps: false },
   );

@@ -1,5 +1,7 @@
 import type { CellState } from '@/lib/comb/states';
 import type { BroodSettings } from './settings';
+import type { TemperatureRecord } from './temperature/record';
+import type { Place } from './temperature/sun-times';
 
 /** What one reading says about one cell, as far as its dates can depend on it. */
 export interface BroodMark {
@@ -37,6 +39,10 @@ export interface BroodInput {
   settings?: BroodSettings;
   /** Is there a temperature record for the nest? This model counts calendar days and says so when there is one. */
   hasTemperature?: boolean;
+  /** What was measured at the nest; `developmentClock` turns it into days of the durations. */
+  temperature?: TemperatureRecord | null;
+  /** Where the nest hangs, for sunrise and sunset. */
+  place?: Place | null;
   /** Shortens the canonical input text to `inputDigest`; without it the text itself is the digest. */
   digest?: (text: string) => string;
 }

@@ -38,6 +38,8 @@ export interface RouteSpec<Input, Param extends string> {
   action: Action | 'signed-in';
   /** The schema of the JSON body; a route without one never reads a body. */
   input?: z.ZodType<Input>;
+  /** Largest body in bytes, where the usual limit is too small. */
+  maxBytes?: number;
   /** The query parameters it knows; any other is an error. */
   query?: readonly Param[];
   /** Must, or may, the request name its enrolled device in `X-Device`? */
@@ -96,7 +98,7 @@ export function route<Input = undefined, Param extends string = never>(spec: Rou
       const session = await signedIn(request, spec.action);
       const ctx = session.context;
       const device = await namedDevice(request, ctx, spec.device);
-      const body = spec.input ? await readJson(request) : null;
+      const body = spec.input ? await readJson(request, spec.maxBytes) : null;
       const call: RouteCall<Input, Param> = {
         ctx,
         // A route without a schema has `Input` undefined, which the compiler cannot see from here.

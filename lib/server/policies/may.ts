@@ -14,6 +14,8 @@ const RIGHTS = {
   'nests.read': EVERYONE,
   'readings.read': EVERYONE,
   'brood.read': EVERYONE,
+  'temperature.read': EVERYONE,
+  'temperature.write': ['technician', 'reviewer', 'biologist', 'coordinator'],
   'readings.settle': SETTLERS,
   'readings.lock': SETTLERS,
   'readings.amend': SETTLERS,

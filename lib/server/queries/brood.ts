@@ -10,10 +10,11 @@ import { blindVisits, isHidden } from './blind-visits';
 import { teamBroodSettings } from './brood-settings';
 import { censusOf } from './census';
 import { idKey } from './id-key';
-import { nestById, visitsOfNests } from './nest-rows';
+import { type NestRow, nestById, visitsOfNests } from './nest-rows';
 import { readingCells } from './reading-cells';
 import { readingsOfNests } from './reading-rows';
 import { type TeamScope, teamScope } from './team-scope';
+import { nestRecord } from './temperature/nest-record';
 
 /** An estimate with the number of the settings version behind it. */
 export interface NestBrood {
@@ -24,6 +25,11 @@ export interface NestBrood {
 /** Shortens the input of an estimate to the digest it is stored under. */
 function sha256(text: string): string {
   return createHash('sha256').update(text, 'utf8').digest('hex');
+}
+
+/** A digest of the input and, where there is one, of the temperature record behind it. */
+function digestWith(temperature: string): (text: string) => string {
+  return (text) => sha256(temperature === '' ? text : `${text}\n${temperature}`);
 }
 
 /**
@@ -50,6 +56,22 @@ async function broodReadings(scope: TeamScope, nest: Buffer): Promise<BroodReadi
   }));
 }
 
+/** What an estimate of one nest is made from, but for the settings. */
+export async function broodInput(scope: TeamScope, nest: NestRow, { zone, asOf }: { zone: string; asOf: number }) {
+  const { record, place, digest } = await nestRecord(scope, nest);
+  return {
+    nest: fromBinary(nest.id),
+    zone,
+    asOf,
+    readings: await broodReadings(scope, nest.id),
+    taxon: nest.taxon,
+    hasTemperature: record !== null,
+    temperature: record,
+    place,
+    digest: digestWith(digest),
+  };
+}
+
 /**
  * `GET /api/nests/<id>/brood`: when the brood of a nest was laid, is capped and comes out, as ranges.
  *
@@ -60,15 +82,6 @@ export async function nestBrood(ctx: TeamContext, id: string, asOf: number): Pro
   const scope = teamScope(ctx);
   const nest = await nestById(scope, id);
   const { version, settings } = await teamBroodSettings(scope);
-  const readings = await broodReadings(scope, nest.id);
-  const input = {
-    nest: fromBinary(nest.id),
-    zone: ctx.zone,
-    asOf,
-    readings,
-    taxon: nest.taxon,
-    settings,
-    digest: sha256,
-  };
-  return { estimate: estimateNest(input), settingsVersion: version };
+  const input = await broodInput(scope, nest, { zone: ctx.zone, asOf });
+  return { estimate: estimateNest({ ...input, settings }), settingsVersion: version };
 }

@@ -11,6 +11,8 @@ const TABLE: Record<Action, string> = {
   'nests.read': 'yyyyy',
   'readings.read': 'yyyyy',
   'brood.read': 'yyyyy',
+  'temperature.read': 'yyyyy',
+  'temperature.write': 'yyyy-',
   'readings.settle': '-yy--',
   'readings.lock': '-yy--',
   'readings.amend': '-yy--',
