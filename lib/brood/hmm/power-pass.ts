@@ -120,11 +120,12 @@ export function massPass(chain: Uniformised, mass: Float64Array, request: PassRe
  * Carries values backward, like `massPass`; watched times count backwards from where the values are known.
  *
  * @param blocks the states whose values are asked for and all that they can pass through; others count as 0.
+ * @param isEndNeeded false when only the watched sums are asked for.
  */
 export function valuePass(
   chain: Uniformised,
   value: Float64Array,
-  { blocks = blocksOf(chain, 1), ...request }: PassRequest & { blocks?: Blocks },
+  { blocks = blocksOf(chain, 1), isEndNeeded = true, ...request }: PassRequest & { blocks?: Blocks; isEndNeeded?: boolean },
 ): PassResult {
   const { days, watch = [], weightsOf = poissonWeights } = request;
   if (days === 0 || chain.clock === 0) return standing(value, watch, blocks);
@@ -142,7 +143,7 @@ export function valuePass(
       [current, next] = [next, current];
     }
     note(n, current);
-    if (n >= first) addScaled(end, { vector: current, weight: weights[n - first] ?? 0 }, blocks);
+    if (isEndNeeded && n >= first) addScaled(end, { vector: current, weight: weights[n - first] ?? 0 }, blocks);
   }
   return { end, watched: atTimes(chain, sequences, request), used: blocks };
 }

@@ -30,6 +30,8 @@ export interface BroodModel {
   relayGate: Gate;
   /** Laying into a new cell, per day. */
   layFirst: number;
+  /** True class of each state, as the confusion matrix names it. */
+  classes: readonly string[];
   /** Confusion of what is recorded; rows as readers make them, no floor. */
   confusion: Confusion;
 }
@@ -75,6 +77,7 @@ export function broodModel(row: DurationRow, settings: BroodSettings, confusion:
       .slice(0, -1)
       .flatMap((g) => Object.values(states.ends(g)).map((state: number) => [state, layNext.value] as const)),
     layFirst: layFirst.value,
+    classes: states.keys.map((key, s) => (key.startsWith('EM#') ? 'emerged' : (states.classes[s] ?? ''))),
     confusion,
   };
 }
