@@ -62,7 +62,11 @@ function plus(sum: Float64Array, more: Float64Array, weight: number): void {
 }
 
 /** What was built before the segment moves on through it. */
-function moveOn(kernel: NestKernel, segment: Segment, mass: Float64Array): Omit<ForwardPart, 'log'> & { end: Float64Array } {
+function moveOn(
+  kernel: NestKernel,
+  segment: Segment,
+  { mass, isFlowNeeded }: { mass: Float64Array; isFlowNeeded: boolean },
+): Omit<ForwardPart, 'log'> & { end: Float64Array } {
   const { days, steps, rate } = segment;
   const chain = kernel.full(rate);
   const step = days / steps;
@@ -76,10 +80,7 @@ function moveOn(kernel: NestKernel, segment: Segment, mass: Float64Array): Omit<
     days,
     least: LEAST,
     weightsOf: kernel.weightsOf,
-    watch: [
-      { gate: kernel.model.relayGate, at },
-      { gate: kernel.cappingGate(rate), at },
-    ],
+    watch: isFlowNeeded ? [kernel.model.relayGate, kernel.cappingGate(rate)].map((gate) => ({ gate, at })) : [],
   });
   const { laid } = firstEggs(new Float64Array(steps), {
     layFirst: kernel.model.layFirst,
@@ -99,28 +100,39 @@ function take(standing: Standing, likelihood: Float64Array, absent: number): Sta
   return { mass: mass.map((p) => p / total), unbuilt: unbuilt / total, log: standing.log + Math.log(total) };
 }
 
-/** Follows a cell forward through everything seen of it. */
+/**
+ * Follows a cell forward through everything seen of it.
+ *
+ * @param cell `isFlowNeeded` false when only the likelihood and the states are asked for.
+ */
 export function forwardCell(
   kernel: NestKernel,
   timeline: Timeline,
-  cell: { prior: BuildingPrior; seen: readonly (Float64Array | null)[]; newcomers: SharedNewcomers },
+  cell: {
+    prior: BuildingPrior;
+    seen: readonly (Float64Array | null)[];
+    newcomers: SharedNewcomers;
+    isFlowNeeded: boolean;
+  },
 ): ForwardPass {
-  const { prior, seen, newcomers } = cell;
+  const { prior, seen, newcomers, isFlowNeeded } = cell;
   let standing: Standing = { mass: new Float64Array(kernel.model.states.count), unbuilt: 1, log: 0 };
   const parts: ForwardPart[] = [];
   const atLooks: Float64Array[] = [];
   let edge = 0;
   let isImpossible = false;
   for (const [s, segment] of timeline.segments.entries()) {
-    const { end, ...moved } = moveOn(kernel, segment, standing.mass);
+    const { end, ...moved } = moveOn(kernel, segment, { mass: standing.mass, isFlowNeeded });
     const before = (prior.absent[edge] ?? 0) * standing.unbuilt;
     edge += segment.steps;
     if (before > LEAST) {
       const fresh = newcomers(prior, s);
       plus(end, fresh.end, standing.unbuilt);
-      plus(moved.first, fresh.first, standing.unbuilt);
-      plus(moved.later, fresh.later, standing.unbuilt);
-      plus(moved.capping, fresh.capping, standing.unbuilt);
+      if (isFlowNeeded) {
+        plus(moved.first, fresh.first, standing.unbuilt);
+        plus(moved.later, fresh.later(), standing.unbuilt);
+        plus(moved.capping, fresh.capping(), standing.unbuilt);
+      }
       fresh.used.forEach((is, b) => {
         if (is === 1) moved.used[b] = 1;
       });

@@ -17,7 +17,10 @@ export function isContradictory(
   if (all.length < 2 && !all.some(({ reused }) => reused)) return false;
   const newcomers = sharedNewcomers(kernel, timeline);
   const follow = (floor: number) =>
-    forwardCell(kernel, timeline, { prior, seen: likelihoods(kernel.model, looks, floor), newcomers });
+    forwardCell(kernel, timeline, {
+      ...{ prior, newcomers, isFlowNeeded: false },
+      seen: likelihoods(kernel.model, looks, floor),
+    });
   const plain = follow(0);
   const floored = follow(kernel.model.settings.values.slipFloor.value);
   return plain.isImpossible || plain.logLik - floored.logLik < Math.log(SHARE);

@@ -1,4 +1,4 @@
-import { parseCellKey } from '@/lib/comb/axial';
+import { parseCellKey, ringOf } from '@/lib/comb/axial';
 import type { DurationRow } from '@/lib/brood/durations';
 import type { BroodSettings } from '@/lib/brood/settings';
 import { type BroodModel, broodModel } from './brood-model';
@@ -42,19 +42,13 @@ export interface DatedNest {
   groups: readonly DatedGroup[];
 }
 
-/** Distance of a cell from the pedicel cell, in cell widths. */
-function distance(key: string): number {
-  const { q, r } = parseCellKey(key);
-  return Math.sqrt(q * q + q * r + r * r);
-}
-
-/** Building priors by cell: by rank of the distance from the pedicel cell among all cells seen. */
+/** Building priors by cell: by rank of the distance in cells from the pedicel cell among all cells seen. */
 function priorsOf(history: NestHistory, timeline: Timeline, { values }: BroodSettings): Map<string, BuildingPrior> {
   const keys = [...history.cells.keys()];
   const curve = combCurve(history.counts, values.cellsPerDay.value);
   const firstCount = history.counts[0]?.cells ?? 0;
   const isGrowthSeen = history.counts.length >= 3;
-  const ranks = midRanks(keys.map(distance));
+  const ranks = midRanks(keys.map((key) => ringOf(parseCellKey(key))));
   const known = new Map<number, BuildingPrior>();
   return new Map(
     keys.map((key, i) => {

@@ -31,39 +31,55 @@ interface Peak {
   sd: number;
 }
 
+/** A point of the function. */
+interface Point {
+  z: number;
+  f: number;
+}
+
 /** The parabola through three points: its top and width; null when it has no top. */
-function parabola(low: number, middle: number, high: number): Peak | null {
-  const curvature = low - 2 * middle + high;
+function parabola([a, b, c]: readonly [Point, Point, Point]): Peak | null {
+  const [left, right] = [(b.f - a.f) / (b.z - a.z), (c.f - b.f) / (c.z - b.z)];
+  const curvature = (2 * (right - left)) / (c.z - a.z);
   if (!(curvature < 0)) return null;
-  return { at: (low - high) / (2 * curvature), sd: 1 / Math.sqrt(-curvature) };
+  const slope = left + (curvature * (b.z - a.z)) / 2;
+  return { at: b.z - slope / curvature, sd: 1 / Math.sqrt(-curvature) };
 }
 
-const MOST_MOVES = 6;
+/** The best point with one neighbour on each side, or the three best-lying points at a side. */
+function aroundBest(points: readonly Point[]): readonly [Point, Point, Point] {
+  const sorted = [...points].sort((p, q) => p.z - q.z);
+  const best = sorted.reduce((top, { f }, i) => (f > (sorted[top]?.f ?? -Infinity) ? i : top), 0);
+  const first = Math.min(Math.max(best - 1, 0), sorted.length - 3);
+  const [a, b, c] = sorted.slice(first, first + 3);
+  if (!a || !b || !c) throw new RangeError('a parabola needs three points');
+  return [a, b, c];
+}
 
-/** Finds the peak of a smooth function of one variable by parabolas; the width comes from the last one. */
+const MOST_POINTS = 12;
+/** Nodes a little beside the peak, or a little too wide, do no harm: they carry their own weights. */
+const CLOSE_ENOUGH = 0.3;
+
+/**
+ * Finds the peak of a smooth function of one variable, and its width, by parabolas through the best points so far.
+ * A point is added beside the top as well, so that the width is that of the peak and not of its surroundings.
+ */
 function findPeak(f: (z: number) => number): Peak {
-  let [at, half, sd] = [0, 1, 1];
-  for (let i = 0; i < MOST_MOVES; i++) {
-    const [low, middle, high] = [f(at - half), f(at), f(at + half)];
-    const top = parabola(low, middle, high);
-    const uphill = low > high ? -2 : 2;
-    const move = top ? Math.max(-2, Math.min(2, top.at)) : uphill;
-    if (top) sd = Math.min(1, Math.max(0.02, top.sd * half));
-    at += move * half;
-    const isSettled = top !== null && Math.abs(move) * half < 0.35 * sd && half < 2.5 * sd;
-    if (isSettled) break;
-    half = Math.min(half, Math.max(0.75 * sd, 0.05));
+  const points = [-1, 0, 1].map((z) => ({ z, f: f(z) }));
+  let top: Peak = { at: 0, sd: 1 };
+  while (points.length < MOST_POINTS) {
+    const three = aroundBest(points);
+    const found = parabola(three);
+    const [low, , high] = three;
+    if (found) top = { at: Math.min(high.z + 1, Math.max(low.z - 1, found.at)), sd: Math.min(1, Math.max(0.01, found.sd)) };
+    else top = { at: high.f > low.f ? high.z + 1 : low.z - 1, sd: 1 };
+    const near = points.filter(({ z }) => Math.abs(z - top.at) < CLOSE_ENOUGH * top.sd);
+    const isNarrow = high.z - low.z < 4.5 * top.sd;
+    if (found && near.length > 0 && isNarrow) break;
+    const beside = top.at + (top.at - low.z > high.z - top.at ? -1 : 1) * top.sd;
+    points.push(...[near.length > 0 ? beside : top.at].map((z) => ({ z, f: f(z) })));
   }
-  return { at, sd };
-}
-
-function kept(f: (z: number) => number): (z: number) => number {
-  const known = new Map<number, number>();
-  return (z) => {
-    const value = known.get(z) ?? f(z);
-    known.set(z, value);
-    return value;
-  };
+  return top;
 }
 
 /**
@@ -73,7 +89,7 @@ function kept(f: (z: number) => number): (z: number) => number {
 export function nestPosterior(model: BroodModel, prior: FactorPrior, frame: NestFrame): NestPosterior {
   const rhoOf = (z: number) => Math.exp(prior.mean + prior.sd * z);
   if (prior.sd === 0 || frame.groups.length === 0) return fixedFactor(model, prior, frame);
-  const { at, sd } = findPeak(kept((z) => nodeLogLik(nestKernel(model, rhoOf(z)), frame) - (z * z) / 2));
+  const { at, sd } = findPeak((z) => nodeLogLik(nestKernel(model, rhoOf(z)), frame) - (z * z) / 2);
   const nodes = normalNodes().map(({ z, weight }) => {
     const value = at + sd * z;
     const { logLik, groups } = nodeAnswer(nestKernel(model, rhoOf(value)), frame);

@@ -39,7 +39,7 @@ export interface NestFrame {
 export function nodeLogLik(kernel: NestKernel, { timeline, groups }: NestFrame): number {
   const newcomers = sharedNewcomers(kernel, timeline);
   return groups.reduce(
-    (sum, { prior, seen, cells }) => sum + cells * forwardCell(kernel, timeline, { prior, seen, newcomers }).logLik,
+    (sum, { prior, seen, cells }) => sum + cells * forwardCell(kernel, timeline, { prior, seen, newcomers, isFlowNeeded: false }).logLik,
     0,
   );
 }
@@ -94,10 +94,12 @@ function backwardByRecord(kernel: NestKernel, { timeline, groups }: NestFrame, f
 export function nodeAnswer(kernel: NestKernel, frame: NestFrame): { logLik: number; groups: GroupAnswer[] } {
   const { timeline, groups, futures } = frame;
   const newcomers: SharedNewcomers = sharedNewcomers(kernel, timeline);
-  const forwards = groups.map(({ prior, seen }) => forwardCell(kernel, timeline, { prior, seen, newcomers }));
+  const forwards = groups.map(({ prior, seen }) =>
+    forwardCell(kernel, timeline, { prior, seen, newcomers, isFlowNeeded: true }),
+  );
   const backwards = backwardByRecord(kernel, frame, forwards);
   const answers = groups.map((group, i): GroupAnswer => {
-    const forward = forwards[i] ?? forwardCell(kernel, timeline, { ...group, newcomers });
+    const forward = forwards[i] ?? forwardCell(kernel, timeline, { ...group, newcomers, isFlowNeeded: true });
     const { first, laid, capped } = combine(forward, backwards.get(group.record) ?? [], timeline.edges.length - 1);
     const future = futures[group.seen.length - 1];
     const outlook = future ? outlookOf(kernel, forward.last, future) : null;
