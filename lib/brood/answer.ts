@@ -1,5 +1,6 @@
 import type { CellState } from '@/lib/comb/states';
 import type { DurationRow } from './durations';
+import type { HeatWarning } from './temperature/clock-parts';
 
 /** A median and three central ranges, earliest first. */
 export interface Spread {
@@ -25,7 +26,7 @@ export interface CellEstimate {
   r: number;
   /** The state last recorded, `unread` only when nothing else ever was. */
   state: CellState;
-  /** Which brood of this cell is meant: 0 when no egg was ever seen in it. */
+  /** Which brood of this cell is meant, the most likely one; 0 when most likely none was laid yet. */
   generation: number;
   /** Null when the cell holds no living brood that can be dated. */
   laid: DateRange | null;
@@ -74,7 +75,8 @@ export type FlagCode =
   | 'not-looked-at'
   | 'instar-mismatch'
   | 'other-genus'
-  | 'temperature-unused';
+  | 'contradictory'
+  | HeatWarning['code'];
 
 /** Something surprising about one cell, or about the nest when there is no `cell`. Nothing is refused for it. */
 export interface BroodFlag {
@@ -99,6 +101,6 @@ export interface BroodEstimate {
   nest: NestEstimate;
   flags: BroodFlag[];
   assumptions: string[];
-  /** Standard deviation, in days, of the laying date of the most advanced brood before and after the readings. */
+  /** Standard deviation, in days, of the laying date of the brood that comes out first: from its place on the comb alone, and with the readings. */
   information: { priorSd: number; posteriorSd: number };
 }

@@ -1,5 +1,6 @@
 import type { DurationChoice } from './durations';
 import type { BroodSettings } from './settings';
+import type { DevelopmentClock } from './temperature/development-clock';
 
 /** What the texts depend on. */
 interface AssumptionInput {
@@ -7,10 +8,8 @@ interface AssumptionInput {
   settings: BroodSettings;
   /** Cells of the present view that were marked unsure. */
   unsureCells: number;
-  /** More than one reading was looked at. */
-  hasHistory: boolean;
-  /** The founding date is a latest possible one. */
-  isFoundingBound: boolean;
+  /** What the development clock runs by. */
+  clock: DevelopmentClock['kind'];
 }
 
 const percent = (value: number): string => `${Math.round(value * 100)} %`;
@@ -42,28 +41,52 @@ function spreadText({ values }: BroodSettings): string {
 function lossText({ values }: BroodSettings): string {
   return (
     `Losses per day: eggs ${values.lossEgg.value}, larvae ${values.lossLarva.value}, capped ${values.lossCapped.value}. ` +
-    'They set the probability that an adult comes out, not the dates.'
+    'Lost brood is replaced, and emptied cells are laid in again.'
   );
+}
+
+/** Where the comb order and the development clock come from. */
+function clockText({ values }: BroodSettings, clock: DevelopmentClock['kind']): string {
+  if (clock === 'none') return 'No temperature record is used: days are calendar days.';
+  const { heatBase, heatPlateau, heatLimit } = values;
+  return (
+    `Development follows the ${clock === 'logger' ? 'logger at the nest' : 'daily lowest and highest temperatures'}: ` +
+    `nothing below ${days(heatBase.value)} °C, no faster above ${days(heatPlateau.value)} °C, nothing above ${days(heatLimit.value)} °C. ` +
+    'Losses and laying run on calendar days.'
+  );
+}
+
+function confusionText({ confusion, values }: BroodSettings): string {
+  const whose = confusion
+    ? `Readers err as ${confusion.source} shows (trust: ${confusion.trust}).`
+    : 'Readers err as assumed: mostly between neighbouring classes, an egg missed in 5 of 100 looks.';
+  return `${whose} A look marked unsure errs twice as often; ${values.slipFloor.value} of all looks may mean anything.`;
+}
+
+function factorTexts({ row }: DurationChoice, { durationFactors = [] }: BroodSettings): string[] {
+  const learnt = durationFactors.find(({ taxon }) => taxon.toLowerCase() === row.taxon.toLowerCase());
+  if (!learnt) return [];
+  const rate = days(Math.exp(learnt.logMean));
+  return [`Development of ${learnt.taxon} runs at ${rate} of these durations: ${learnt.source}. Trust: ${learnt.trust}.`];
 }
 
 /** What the dates rest on, in plain words, most important first. */
 export function assumptionTexts(input: AssumptionInput): string[] {
-  const { choice, settings, unsureCells, hasHistory, isFoundingBound } = input;
-  const { foundingLead, instar5Share } = settings.values;
+  const { choice, settings, unsureCells, clock } = input;
+  const { foundingLead, instar5Share, cellsPerDay, priorSpan } = settings.values;
   return [
     durationText(choice),
     ...totalText(choice),
+    ...factorTexts(choice, settings),
     'Small larva means instars 1 to 3, medium instar 4, large instar 5, capped everything under the cap.',
     `Instar 5 takes ${percent(instar5Share.value)} of the larval time and the others share the rest equally; nobody has published instar durations.`,
     spreadText(settings),
-    'Each cell is dated from the last reading that looked into it, as if its egg could have been laid on any day before.',
-    ...(hasHistory ? ['Earlier readings are used for flags, for reused cells and for the founding date only.'] : []),
-    'No temperature record is used: days are calendar days.',
+    `Cells nearer the pedicel are older. Before the first count the comb grew by ${days(cellsPerDay.value)} cell(s) a day, unless three or more counts say otherwise; nothing is searched for more than ${days(priorSpan.value)} days back.`,
+    'All looks into a cell count together: also that it was not there yet, was empty or was lost.',
+    confusionText(settings),
+    clockText(settings, clock),
     lossText(settings),
-    `The nest's own dates are those of its most advanced brood; founding is ${days(foundingLead.value)} day(s) before the first egg.`,
-    ...(isFoundingBound
-      ? ['The oldest cell was already opened, so she founded the nest on the dates shown or earlier.']
-      : []),
-    ...(unsureCells > 0 ? [`Marked unsure: ${unsureCells} cell(s). They are dated as written.`] : []),
+    `The nest's own dates are the earliest over its cells; founding is ${days(foundingLead.value)} day(s) before the first egg.`,
+    ...(unsureCells > 0 ? [`Marked unsure: ${unsureCells} cell(s).`] : []),
   ];
 }

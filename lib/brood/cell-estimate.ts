@@ -1,74 +1,41 @@
-import type { CellEstimate, DateRange, EmergenceRange } from './answer';
-import type { BroodSighting, CellView } from './cell-history';
-import type { ClassLaw } from './class-law';
-import { dateRange } from './date-range';
-import { mixNodes } from './day-law';
-import { type LossByStage, lossTotal } from './losses';
-import type { FactorNode } from './nest-factor';
+import type { CellEstimate } from './answer';
+import type { CellView } from './cell-history';
+import { type DateFrame, dateRange } from './date-range';
+import { lossTotal } from './losses';
+import type { DatedGroup } from './nest-model/dated-nest';
+import type { PresentBrood } from './nest-model/mixed-group';
 
-/** The dates of one living brood. */
-export interface BroodDates {
-  laid: DateRange;
-  capped: DateRange;
-  emerges: EmergenceRange;
-  losses: LossByStage;
+/** Brood is dated where it is more likely there than not. */
+const LIKELY = 0.5;
+
+/** The brood of a group that can be dated, or null. */
+export function datableBrood({ mixed }: DatedGroup): PresentBrood | null {
+  return mixed.alive >= LIKELY ? mixed.present : null;
 }
 
-/** Averages how a brood ends over the nest factor. */
-function mixedLosses({ losses }: ClassLaw, nodes: readonly FactorNode[]): LossByStage {
-  const mix = (stage: keyof LossByStage) =>
-    mixNodes(
-      nodes,
-      losses.map((byStage) => byStage[stage]),
-    );
-  return { egg: mix('egg'), larva: mix('larva'), capped: mix('capped') };
-}
+/** The members of an estimate that equal cells share. */
+type SharedEstimate = Omit<CellEstimate, 'q' | 'r' | 'state'>;
 
-/** Dates a living brood from the law of its class. */
-export function broodDates(
-  { at }: BroodSighting,
-  law: ClassLaw,
-  { nodes, zone }: { nodes: readonly FactorNode[]; zone: string },
-): BroodDates {
-  const losses = mixedLosses(law, nodes);
-  const { capping } = law;
-  return {
-    laid: dateRange(law.sinceLaid, { at, zone, direction: 'back' }),
-    capped: dateRange(capping.law, { at, zone, direction: capping.isPast ? 'back' : 'on' }),
-    emerges: { ...dateRange(law.untilOut, { at, zone, direction: 'on' }), probability: 1 - lossTotal(losses) },
-    losses,
-  };
-}
+const NOTHING_SEEN: SharedEstimate = { generation: 0, laid: null, capped: null, emerges: null, lost: { probability: 0 } };
 
-/** Probability that the brood of a cell without a datable one was lost rather than an adult come out. */
-function lostWithout({ looked, gone }: CellView, ofGone: LossByStage | null): number {
-  const state = looked.at(-1)?.mark.state;
-  if (state === 'dead' || state === 'parasitised') return 1;
-  if (state !== 'empty' || !gone) return 0;
-  return gone.group.key === 'capped' && ofGone ? lossTotal(ofGone) : 1;
-}
-
-/**
- * One cell of the answer.
- *
- * @param datesOf the dates of a living brood; shared between cells with equal records.
- */
-export function cellEstimate(view: CellView, datesOf: (brood: BroodSighting) => BroodDates | null): CellEstimate {
-  const { q, r, state, generation, brood, gone } = view;
-  const dates = brood ? datesOf(brood) : null;
-  if (dates) {
-    const { laid, capped, emerges, losses } = dates;
-    return { q, r, state, generation, laid, capped, emerges, lost: { probability: lossTotal(losses) } };
+/** The estimate of a group of equal cells. */
+export function groupEstimate(group: DatedGroup, frame: DateFrame): SharedEstimate {
+  const { generation, emergedWhenEmpty } = group.mixed;
+  const brood = datableBrood(group);
+  if (!brood) {
+    const probability = generation > 0 && emergedWhenEmpty !== null ? 1 - emergedWhenEmpty : 0;
+    return { ...NOTHING_SEEN, generation, lost: { probability } };
   }
-  const ofGone = gone ? (datesOf(gone)?.losses ?? null) : null;
   return {
-    q,
-    r,
-    state,
     generation,
-    laid: null,
-    capped: null,
-    emerges: null,
-    lost: { probability: lostWithout(view, ofGone) },
+    laid: dateRange(brood.laid, frame),
+    capped: dateRange(brood.capped, frame),
+    emerges: { ...dateRange(brood.out, frame), probability: brood.chance },
+    lost: { probability: lossTotal(brood.losses) },
   };
+}
+
+/** One cell of the answer. */
+export function cellEstimate({ q, r, state }: CellView, shared: SharedEstimate | undefined): CellEstimate {
+  return { q, r, state, ...(shared ?? NOTHING_SEEN) };
 }

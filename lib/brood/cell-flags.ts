@@ -2,7 +2,8 @@ import { localDate } from '@/lib/kit/local-date';
 import { STATE_WORDS } from '@/lib/comb/states';
 import type { BroodFlag, FlagCode } from './answer';
 import { type CellView, type Sighting, isRestart } from './cell-history';
-import type { NestModel } from './class-law';
+import type { DurationRow } from './durations';
+import type { BroodSettings } from './settings';
 import { DAY_MS } from './date-range';
 import { STAGES, type StageGroup, fitsInstar, stageGroup, stageLaws } from './stages';
 
@@ -20,6 +21,12 @@ interface Change {
   days: number;
 }
 
+/** What the expected days of stages come from. */
+interface StageDays {
+  row: DurationRow;
+  settings: BroodSettings;
+}
+
 /** A finding without its cell and dates. */
 interface Finding {
   code: FlagCode;
@@ -27,13 +34,13 @@ interface Finding {
 }
 
 /** Mean days of the stages `first` to `last`; none when `last` comes before `first`. */
-function meanDays(model: NestModel, first: number, last: number): number {
+function meanDays(model: StageDays, first: number, last: number): number {
   return stageLaws(model.row, model.settings)
     .slice(first, last + 1)
     .reduce((sum, stage) => sum + stage.meanDays, 0);
 }
 
-function backFromCapped({ to, days, later }: Change, model: NestModel): Finding | null {
+function backFromCapped({ to, days, later }: Change, model: StageDays): Finding | null {
   if (later.mark.reused || later.mark.state === 'opened') return null;
   if (to?.key === 'egg' && days <= model.settings.values.relayWindow.value) {
     return {
@@ -57,7 +64,7 @@ function tooFast(text: string): Finding {
   return { code: 'too-fast', text: `${text} in so few days is faster than any brood is expected to be. Look again.` };
 }
 
-function onward({ from, to, days }: Change & { to: StageGroup }, model: NestModel): Finding | null {
+function onward({ from, to, days }: Change & { to: StageGroup }, model: StageDays): Finding | null {
   if (to.last < from.first) {
     return { code: 'step-back', text: 'Younger now than before. Most likely one of the two looks slipped by a class.' };
   }
@@ -67,7 +74,7 @@ function onward({ from, to, days }: Change & { to: StageGroup }, model: NestMode
 }
 
 /** What is surprising about the last two looks into a cell; null when nothing is. */
-function judge(change: Change, model: NestModel): Finding | null {
+function judge(change: Change, model: StageDays): Finding | null {
   const { from, to, later, days } = change;
   if (from.key === 'capped' && to?.key !== 'capped') {
     return later.mark.state === 'dead' || later.mark.state === 'parasitised' ? null : backFromCapped(change, model);
@@ -93,7 +100,7 @@ function lastChange({ looked }: CellView): Change | null {
 }
 
 /** The flags of one cell, judged by its last two looks. Nothing is refused for being surprising. */
-export function cellFlags(view: CellView, model: NestModel, zone: string): BroodFlag[] {
+export function cellFlags(view: CellView, model: StageDays, zone: string): BroodFlag[] {
   const cell = { q: view.q, r: view.r };
   const change = lastChange(view);
   const findings = [change ? judge(change, model) : null];

@@ -1,37 +1,41 @@
 import { addDays, localDate } from '@/lib/kit/local-date';
-import type { EmergenceDay } from './answer';
-import type { BroodSighting } from './cell-history';
-import type { ClassLaw } from './class-law';
-import { cdfAt } from './day-law';
-import { DAY_MS } from './date-range';
 import { startOfLocalDay } from './local-day';
-import { lossTotal } from './losses';
-import type { FactorNode } from './nest-factor';
+import type { EmergenceDay } from './answer';
+import { DAY_MS } from './date-range';
+import { type TimeLaw, lawAt } from './time-law';
 
-/** Equal broods counted together. */
+/** Equal broods at one value of the nest factor: when their adults come out. */
 export interface BroodCount {
-  brood: BroodSighting;
-  law: ClassLaw;
+  law: TimeLaw;
   cells: number;
+}
+
+/** The broods of the comb at one value of the nest factor. */
+export interface ForecastNode {
+  weight: number;
+  broods: readonly BroodCount[];
 }
 
 /** What the forecast runs over. */
 interface ForecastFrame {
-  nodes: readonly FactorNode[];
+  /** The instant that the laws count days from, epoch milliseconds. */
+  origin: number;
   asOf: number;
   zone: string;
   days: number;
 }
 
+/** Days since the origin. */
+interface Span {
+  from: number;
+  to: number;
+}
+
 const NEGLIGIBLE = 1e-12;
 
-/** Probability that one of these broods comes out alive between two instants, for one value of the nest factor. */
-function chanceOut({ brood, law }: BroodCount, node: number, span: { from: number; to: number }): number {
-  const cdf = law.untilOut.byNode[node];
-  const losses = law.losses[node];
-  if (!cdf || !losses) return 0;
-  const within = cdfAt(cdf, (span.to - brood.at) / DAY_MS) - cdfAt(cdf, (span.from - brood.at) / DAY_MS);
-  return within * (1 - lossTotal(losses));
+/** Probability that one of these broods comes out alive within a span. */
+function chanceOut({ law }: BroodCount, { from, to }: Span): number {
+  return Math.max(0, lawAt(law, to) - lawAt(law, from));
 }
 
 /** Adds independent cells to the distribution of a count, one by one; far tails are dropped. */
@@ -46,10 +50,10 @@ function addCells(counts: number[], chance: number, cells: number): number[] {
 }
 
 /** Distribution of the number of adults within a span, for one value of the nest factor. */
-function countsAt(broods: readonly BroodCount[], node: number, span: { from: number; to: number }): number[] {
+function countsAt(broods: readonly BroodCount[], span: Span): number[] {
   return broods.reduce<number[]>(
     (counts, brood) => {
-      const chance = chanceOut(brood, node, span);
+      const chance = chanceOut(brood, span);
       return chance < NEGLIGIBLE ? counts : addCells(counts, chance, brood.cells);
     },
     [1],
@@ -67,14 +71,10 @@ function countQuantile(counts: readonly number[], p: number): number {
 }
 
 /** Mixes the counts over the nest factor: given the factor, cells are independent of each other. */
-function mixedCounts(
-  broods: readonly BroodCount[],
-  nodes: readonly FactorNode[],
-  span: { from: number; to: number },
-): number[] {
+function mixedCounts(nodes: readonly ForecastNode[], span: Span): number[] {
   const mixed: number[] = [];
-  nodes.forEach(({ weight }, node) => {
-    countsAt(broods, node, span).forEach((mass, n) => {
+  nodes.forEach(({ weight, broods }) => {
+    countsAt(broods, span).forEach((mass, n) => {
       mixed[n] = (mixed[n] ?? 0) + weight * mass;
     });
   });
@@ -86,14 +86,14 @@ function mixedCounts(
  * (cells independent given the nest factor, then mixed over it).
  */
 export function emergenceForecast(
-  broods: readonly BroodCount[],
-  { nodes, asOf, zone, days }: ForecastFrame,
+  nodes: readonly ForecastNode[],
+  { origin, asOf, zone, days }: ForecastFrame,
 ): EmergenceDay[] {
   const first = localDate(asOf, zone);
   const dates = Array.from({ length: days + 1 }, (_, i) => addDays(first, i));
-  const bounds = dates.map((date) => startOfLocalDay(date, zone));
+  const bounds = dates.map((date) => (startOfLocalDay(date, zone) - origin) / DAY_MS);
   return dates.slice(0, days).map((date, i) => {
-    const counts = mixedCounts(broods, nodes, { from: bounds[i] ?? 0, to: bounds[i + 1] ?? 0 });
+    const counts = mixedCounts(nodes, { from: bounds[i] ?? 0, to: bounds[i + 1] ?? 0 });
     const expected = counts.reduce((sum, mass, n) => sum + n * mass, 0);
     return { date, expected, lo80: countQuantile(counts, 0.1), hi80: countQuantile(counts, 0.9) };
   });

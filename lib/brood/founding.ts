@@ -1,54 +1,28 @@
-import { type CellView, generations } from './cell-history';
-import type { ClassLaw } from './class-law';
-import { type DayLaw, quantileDays } from './day-law';
-import { DAY_MS } from './date-range';
-import { type StageGroup, stageGroup } from './stages';
+import type { DatedNest } from './nest-model/dated-nest';
+import { cumulated } from './nest-model/mixed-group';
+import { type TimeLaw, earliest } from './time-law';
 
-/** A sighting that says how long ago the first egg of a cell was laid. */
-export interface FoundingEvidence {
-  at: number;
-  sinceLaid: DayLaw;
-  /** The adult was out already, so the egg was laid at that time or earlier. */
-  isBound: boolean;
-}
-
-/** A first brood seen: alive in a group of stages, or out of its cell. */
-interface FirstSighting {
-  at: number;
-  group: StageGroup | null;
-}
-
-/** The sightings of first broods in one cell: living ones, and an opened cell as the end of one. */
-function firstBrood({ looked }: CellView): FirstSighting[] {
-  const order = generations(looked);
-  return looked
-    .filter((_, i) => (order[i] ?? 0) <= 1)
-    .map(({ at, mark }) => ({ at, group: stageGroup(mark), isOut: mark.state === 'opened' }))
-    .filter(({ group, isOut }) => group !== null || isOut);
-}
+/** Less likely than this, no egg was ever laid in the nest. */
+const LIKELY = 0.5;
 
 /**
- * The sighting that dates the founding: the one whose egg was laid earliest by its median, over all cells and
- * readings. Cells that were used again count with their first brood only, so reuse never moves the founding.
+ * When the first egg of the nest was laid: the earliest over all cells, which are independent of each other given the
+ * nest factor; then averaged over it. Cells that were used again count with their first egg.
  *
- * @param whole gives the law of the whole development; asked for only when there is an opened cell.
+ * @returns null when most likely no egg was laid yet.
  */
-export function foundingEvidence(
-  views: readonly CellView[],
-  laws: ReadonlyMap<string, ClassLaw>,
-  whole: () => DayLaw,
-): FoundingEvidence | null {
-  const sightings = views.flatMap(firstBrood);
-  const ofOpened = sightings.some(({ group }) => group === null) ? whole() : undefined;
-  let best: FoundingEvidence | null = null;
-  let earliest = Infinity;
-  for (const { at, group } of sightings) {
-    const sinceLaid = group ? laws.get(group.key)?.sinceLaid : ofOpened;
-    if (!sinceLaid) continue;
-    const laid = at - quantileDays(sinceLaid.mixed, 0.5) * DAY_MS;
-    if (laid >= earliest) continue;
-    earliest = laid;
-    best = { at, sinceLaid, isBound: group === null };
+export function firstLaying({ timeline, posterior, groups }: DatedNest): TimeLaw | null {
+  const times = timeline.edges;
+  const cdf = new Float64Array(times.length);
+  for (const { weight, groups: answers } of posterior.nodes) {
+    const laws = groups.map(({ cells }, i) => ({
+      law: { times, cdf: cumulated(answers[i]?.first ?? new Float64Array(times.length - 1)) },
+      cells: cells.length,
+    }));
+    earliest(laws, times).forEach((p, i) => {
+      cdf[i] = (cdf[i] ?? 0) + weight * p;
+    });
   }
-  return best;
+  const total = cdf.at(-1) ?? 0;
+  return total >= LIKELY ? { times, cdf: cdf.map((p) => p / total) } : null;
 }

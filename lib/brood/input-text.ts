@@ -11,7 +11,8 @@ interface InputTextParts {
   zone: string;
   /** Local date of `asOf`: within a day the answer stays the same. */
   asOfDate: string;
-  hasTemperature: boolean;
+  /** The development clock, `[from (epoch ms), rate]`; empty where days are calendar days. */
+  rates: readonly (readonly [number, number])[];
   taxon: string | null;
   /** The readings looked at, oldest first. */
   readings: readonly BroodReading[];
@@ -25,9 +26,17 @@ function readingText({ id, at, marks }: BroodReading): unknown[] {
   return [id, at, [...marks].sort(byWalkOrder).map(markText)];
 }
 
-function settingsText({ version, values }: BroodSettings): unknown[] {
+function byName([a]: readonly [string, unknown], [b]: readonly [string, unknown]): number {
+  return a < b ? -1 : 1;
+}
+
+function settingsText({ version, values, confusion, durationFactors = [] }: BroodSettings): unknown[] {
   const numbers = Object.entries(values).map(([name, { value }]) => [name, value] as const);
-  return [version, numbers.sort(([a], [b]) => (a < b ? -1 : 1))];
+  const rows = Object.entries(confusion?.rows ?? {}).map(
+    ([name, row]) => [name, Object.entries(row).sort(byName)] as const,
+  );
+  const factors = durationFactors.map(({ taxon, logMean, logSd }) => [taxon, logMean, logSd]);
+  return [version, numbers.sort(byName), rows.sort(byName), factors];
 }
 
 /**
@@ -35,13 +44,13 @@ function settingsText({ version, values }: BroodSettings): unknown[] {
  * change that can move a date changes it. Stored nectar is left out, because it moves none.
  */
 export function inputText(parts: InputTextParts): string {
-  const { model, settings, row, zone, asOfDate, hasTemperature, taxon, readings } = parts;
+  const { model, settings, row, zone, asOfDate, rates, taxon, readings } = parts;
   const { egg, larva, capped, referenceC } = row;
   return JSON.stringify([
     [model.name, model.version],
     settingsText(settings),
     [row.taxon, egg, larva, capped, referenceC, row.trust, row.source],
-    [taxon, zone, asOfDate, hasTemperature],
+    [taxon, zone, asOfDate, rates],
     readings.map(readingText),
   ]);
 }

@@ -37,9 +37,7 @@ export interface BroodInput {
   taxon: string | null;
   /** The team's settings; the product's defaults when left out. */
   settings?: BroodSettings;
-  /** Is there a temperature record for the nest? This model counts calendar days and says so when there is one. */
-  hasTemperature?: boolean;
-  /** What was measured at the nest; `developmentClock` turns it into days of the durations. */
+  /** What was measured at the nest; development follows it. Without one, days are calendar days. */
   temperature?: TemperatureRecord | null;
   /** Where the nest hangs, for sunrise and sunset. */
   place?: Place | null;

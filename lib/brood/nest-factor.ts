@@ -1,9 +1,3 @@
-/** One value of the factor by which a whole nest develops faster or slower, and its weight. */
-export interface FactorNode {
-  rate: number;
-  weight: number;
-}
-
 /**
  * Nodes and weights of 7-point Gauss–Hermite quadrature for ∫ f(x) exp(−x²) dx, non-negative half
  * (Abramowitz & Stegun 1964, table 25.10).
@@ -15,25 +9,9 @@ const HERMITE_7: readonly (readonly [node: number, weight: number])[] = [
   [2.651961356835233492, 0.000971781245099519154],
 ];
 
-/** Standard deviation of the logarithm of a log-normal factor with the given coefficient of variation. */
-export function logSd(cv: number): number {
-  return Math.sqrt(Math.log1p(cv * cv));
-}
-
 /** The 7 nodes of a standard normal, smallest first, weights summing to 1. */
 export function normalNodes(): { z: number; weight: number }[] {
   const half = HERMITE_7.map(([x, w]) => ({ z: Math.SQRT2 * x, weight: w / Math.sqrt(Math.PI) }));
   const mirrored = half.slice(1).map(({ z, weight }) => ({ z: -z, weight }));
   return [...mirrored.reverse(), ...half];
-}
-
-/**
- * The factor shared by a nest: log-normal with median 1, on seven nodes.
- *
- * @param cv its coefficient of variation; 0 gives the single node 1.
- */
-export function factorNodes(cv: number): FactorNode[] {
-  if (cv === 0) return [{ rate: 1, weight: 1 }];
-  const sd = logSd(cv);
-  return normalNodes().map(({ z, weight }) => ({ rate: Math.exp(sd * z), weight }));
 }

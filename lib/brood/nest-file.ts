@@ -6,6 +6,7 @@ import { FieldError, readFlag, readJsonFile, readList, readObject, readText, rea
 import type { BroodInput, BroodMark, BroodReading } from './input';
 import { readInstant } from './read-instant';
 import { readSettings } from './read-settings';
+import { readPlace, readTemperature } from './temperature-file';
 
 function readMark(value: unknown, field: string): BroodMark {
   const mark = readObject(value, field);
@@ -59,12 +60,6 @@ function readAsOf(value: unknown, readings: readonly BroodReading[], zone: strin
   return Math.max(...readings.map(({ at }) => at));
 }
 
-function readTemperature(value: unknown): boolean {
-  if (value === undefined || value === null) return false;
-  if (typeof value !== 'object') throw new FieldError('temperature', 'must be an object, a list or null');
-  return true;
-}
-
 function readNest(value: unknown): BroodInput {
   const file = readObject(value, 'file');
   const zone = readZone(file.zone);
@@ -76,13 +71,14 @@ function readNest(value: unknown): BroodInput {
     readings,
     taxon: file.taxon === undefined || file.taxon === null ? null : readText(file.taxon, 'taxon'),
     settings: file.settings === undefined ? undefined : readSettings(file.settings, 'settings'),
-    hasTemperature: readTemperature(file.temperature),
+    temperature: readTemperature(file.temperature, zone),
+    place: readPlace(file.place),
   };
 }
 
 /**
  * Reads a nest file: `{readings: [{at, marks: [{q, r, state, …}]}], taxon?, zone?, asOf?, nest?, temperature?,
- * settings?}`. The zone is UTC and `asOf` the time of the last reading unless given; other members are ignored.
+ * place?, settings?}`. The zone is UTC and `asOf` the time of the last reading unless given; other members are ignored.
  *
  * @returns the input of `estimateNest`, or one line naming the member that cannot be read.
  */

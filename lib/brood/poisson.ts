@@ -1,4 +1,4 @@
-/** Probabilities of `first`, `first + 1`, … events; what is left out is below 1e-17 of the largest. */
+/** Probabilities of `first`, `first + 1`, … events; what is left out is negligible. */
 export interface PoissonWeights {
   first: number;
   weights: Float64Array;
@@ -7,11 +7,11 @@ export interface PoissonWeights {
 const NEGLIGIBLE = 1e-17;
 
 /** How many values on each side of the mode are not negligible. */
-function reach(mean: number, mode: number): { below: number; above: number } {
+function reach(mean: number, mode: number, least: number): { below: number; above: number } {
   let below = 0;
-  for (let ratio = 1; below < mode && ratio > NEGLIGIBLE; below++) ratio *= (mode - below) / mean;
+  for (let ratio = 1; below < mode && ratio > least; below++) ratio *= (mode - below) / mean;
   let above = 0;
-  for (let ratio = 1; ratio > NEGLIGIBLE; above++) ratio *= mean / (mode + above + 1);
+  for (let ratio = 1; ratio > least; above++) ratio *= mean / (mode + above + 1);
   return { below, above };
 }
 
@@ -20,11 +20,12 @@ function reach(mean: number, mode: number): { below: number; above: number } {
  * large number, so the relative error stays near machine precision for any mean.
  *
  * @param mean expected number of events, at least 0.
+ * @param least events with less than this share of the most likely one are left out.
  */
-export function poissonWeights(mean: number): PoissonWeights {
+export function poissonWeights(mean: number, least = NEGLIGIBLE): PoissonWeights {
   if (mean <= 0) return { first: 0, weights: Float64Array.of(1) };
   const mode = Math.floor(mean);
-  const { below, above } = reach(mean, mode);
+  const { below, above } = reach(mean, mode, least);
   const first = mode - below;
   const weights = new Float64Array(below + above + 1);
   weights[below] = 1;

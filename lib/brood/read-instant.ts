@@ -6,7 +6,7 @@ const INSTANT = /^(\d{4}-\d{2}-\d{2})T\d{2}:\d{2}(:\d{2}(\.\d{1,9})?)?(Z|[+-]\d{
 const NOON_MS = 12 * 3_600_000;
 
 /** Is this a day of the calendar? `2026-02-30` is not. */
-function isDate(text: string): boolean {
+export function isDate(text: string): boolean {
   const match = DATE.exec(text);
   if (!match) return false;
   const made = new Date(Date.UTC(Number(match[1]), Number(match[2]) - 1, Number(match[3])));

@@ -1,6 +1,17 @@
 import type { DurationRow } from './durations';
-import { FieldError, type Fields, readList, readNumber, readObject, readText } from './file-fields';
-import { type BroodSettings, DEFAULT_SETTINGS, SETTING_RULES, type Setting, type SettingName } from './settings';
+import { FieldError, type Fields, readList, readNumber, readObject, readText, readWhole } from './file-fields';
+import { ConfusionError, checkConfusion } from './hmm/emission';
+import { CELL_CLASSES, DEFAULT_CONFUSION, RECORDED_CLASSES } from './nest-model/confusion';
+import {
+  type BroodSettings,
+  DEFAULT_SETTINGS,
+  type DurationFactor,
+  type HeldConfusion,
+  SETTING_RULES,
+  type Setting,
+  type SettingName,
+  type SettingRule,
+} from './settings';
 import { isTrust, type Trust } from './trust';
 
 /** A stage may last this many days, so that a misplaced point is caught. */
@@ -33,8 +44,10 @@ function readRow(value: unknown, field: string): DurationRow {
 /** Reads one number of the model: bare, or with its trust and source. */
 function readSetting(value: unknown, field: string, name: SettingName): Setting {
   const given: Fields = typeof value === 'number' ? { value } : readObject(value, field);
+  const rule: SettingRule = SETTING_RULES[name];
+  const read = rule.isWhole ? readWhole : readNumber;
   return {
-    value: readNumber(given.value, typeof value === 'number' ? field : `${field}.value`, SETTING_RULES[name]),
+    value: read(given.value, typeof value === 'number' ? field : `${field}.value`, rule),
     trust: readTrust(given.trust, `${field}.trust`),
     source: readSource(given.source, `${field}.source`),
   };
@@ -44,9 +57,61 @@ function isSettingName(name: string): name is SettingName {
   return Object.hasOwn(SETTING_RULES, name);
 }
 
+/** Members of the settings that are not single numbers. */
+const LISTS: ReadonlySet<string> = new Set(['version', 'durations', 'confusion', 'durationFactors']);
+
+/** Reads a confusion matrix; rows that are not given keep the built-in ones. */
+function readConfusion(value: unknown, field: string): HeldConfusion {
+  const given = readObject(value, field);
+  const rows: Record<string, Record<string, number>> = {};
+  for (const [name, row] of Object.entries(readObject(given.rows, `${field}.rows`))) {
+    const at = `${field}.rows.${name}`;
+    if (!Object.hasOwn(CELL_CLASSES, name)) throw new FieldError(at, `is not among ${Object.keys(CELL_CLASSES).join(', ')}`);
+    const entries = Object.entries(readObject(row, at)).map(([seen, p]) => {
+      if (!RECORDED_CLASSES.some((known) => known === seen))
+        throw new FieldError(`${at}.${seen}`, `is not among ${RECORDED_CLASSES.join(', ')}`);
+      return [seen, readNumber(p, `${at}.${seen}`, { min: 0, max: 1 })] as const;
+    });
+    rows[name] = Object.fromEntries(entries);
+  }
+  const whole = { ...DEFAULT_CONFUSION, ...rows };
+  try {
+    checkConfusion(whole, Object.keys(CELL_CLASSES));
+  } catch (error) {
+    if (error instanceof ConfusionError) throw new FieldError(`${field}.rows.${error.row}`, error.message);
+    throw error;
+  }
+  return { rows: whole, trust: readTrust(given.trust, `${field}.trust`), source: readSource(given.source, `${field}.source`) };
+}
+
+function readFactor(value: unknown, field: string): DurationFactor {
+  const row = readObject(value, field);
+  return {
+    taxon: readText(row.taxon, `${field}.taxon`),
+    logMean: readNumber(row.logMean, `${field}.logMean`, { min: -1.5, max: 1.5 }),
+    logSd: readNumber(row.logSd, `${field}.logSd`, { min: 0, max: 1 }),
+    trust: readTrust(row.trust, `${field}.trust`),
+    source: readSource(row.source, `${field}.source`),
+  };
+}
+
+/**
+ * Reads what a team has learnt from its own data: `confusion` `{rows, trust?, source?}` and `durationFactors`.
+ *
+ * @throws FieldError naming the member.
+ */
+export function readLearnt(given: Fields, field: string): Pick<BroodSettings, 'confusion' | 'durationFactors'> {
+  return {
+    ...(given.confusion == null ? {} : { confusion: readConfusion(given.confusion, `${field}.confusion`) }),
+    ...(given.durationFactors == null
+      ? {}
+      : { durationFactors: readList(given.durationFactors, `${field}.durationFactors`, readFactor) }),
+  };
+}
+
 /**
  * Reads settings that differ from the defaults: any numbers by name, `durations` rows that go before the built-in
- * ones, and a `version` text. A name that is not a setting is refused, since a slip there would change dates unseen.
+ * ones, what was learnt (`confusion`, `durationFactors`), and a `version` text. A name that is not a setting is refused, since a slip there would change dates unseen.
  *
  * @throws FieldError naming the member.
  */
@@ -54,7 +119,7 @@ export function readSettings(value: unknown, field: string): BroodSettings {
   const given = readObject(value, field);
   const values: Record<SettingName, Setting> = { ...DEFAULT_SETTINGS.values };
   for (const [name, number] of Object.entries(given)) {
-    if (name === 'version' || name === 'durations') continue;
+    if (LISTS.has(name)) continue;
     if (!isSettingName(name)) throw new FieldError(`${field}.${name}`, 'is not a setting');
     values[name] = readSetting(number, `${field}.${name}`, name);
   }
@@ -66,5 +131,6 @@ export function readSettings(value: unknown, field: string): BroodSettings {
         : readText(given.version, `${field}.version`),
     values,
     durations: [...rows, ...DEFAULT_SETTINGS.durations],
+    ...readLearnt(given, field),
   };
 }

@@ -3,7 +3,7 @@ import type { PhaseStage } from './stage-fit';
 import { type Move, type Transitions, transitions } from './transitions';
 
 /** The clocks of the model: development runs with temperature, the calendar does not, building has its own hazard. */
-const CLOCKS = { development: 0, calendar: 1, building: 2 } as const;
+export const CLOCKS = { development: 0, calendar: 1, building: 2 } as const;
 
 /** Rates per calendar day of what is not development. */
 export interface CellRates {

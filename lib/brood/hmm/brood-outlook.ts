@@ -1,4 +1,3 @@
-import { byKey, isOccupied } from './brood-states';
 import type { CellModel } from './cell-model';
 import { normalised } from './stations';
 
@@ -13,11 +12,14 @@ export interface BroodOutlook {
   removed: number[];
 }
 
-/** Adds up the probabilities of the kinds whose key begins with one of the given words. */
-function sumKinds(kinds: Record<string, number>, words: readonly string[]): number {
-  return Object.entries(kinds)
-    .filter(([key]) => words.some((word) => key.startsWith(`${word}#`)))
-    .reduce((sum, [, p]) => sum + p, 0);
+/** Adds the generations of a state vector up into the states of one brood; only living brood counts. */
+export function presentBrood({ states, broodOffset, broodLiving }: CellModel, mass: Float64Array): Float64Array {
+  const size = broodLiving.length;
+  return broodLiving.map((isLiving, s) => {
+    let sum = 0;
+    for (let g = 0; g < states.generations; g++) sum += mass[broodOffset + g * size + s] ?? 0;
+    return isLiving * sum;
+  });
 }
 
 /**
@@ -27,21 +29,24 @@ function sumKinds(kinds: Record<string, number>, words: readonly string[]): numb
  * @param last state probabilities at the last visit; null is answered when the cell cannot be occupied.
  */
 export function broodOutlook(
-  { states, broodChain }: CellModel,
+  model: CellModel,
   last: { time: number; mass: Float64Array },
   daysAfter: readonly number[],
 ): BroodOutlook | null {
-  const living = last.mass.map((p, s) => (isOccupied(states.keys[s] ?? '') ? p : 0));
+  const living = presentBrood(model, last.mass);
   if (living.every((p) => p === 0)) return null;
   const start = normalised(living);
-  const cappedStage = states.stages.at(-1)?.name ?? '';
-  const kinds = daysAfter.map((days) =>
-    byKey(states, broodChain.forward(start, { from: last.time, to: last.time + days })),
-  );
+  const { states, brood, broodOffset } = model;
+  const ends = states.ends(0);
+  const at = daysAfter.map((days) => brood.forward(start, { from: last.time, to: last.time + days }));
+  const sum = (mass: Float64Array, from: number, to: number) =>
+    mass.subarray(from - broodOffset, to - broodOffset).reduce((all, p) => all + p, 0);
+  const end = (mass: Float64Array, state: number) => mass[state - broodOffset] ?? 0;
+  const pupa = states.phase(0, states.stages.length - 1);
   return {
     daysAfter,
-    capped: kinds.map((kind) => sumKinds(kind, [cappedStage, 'EM', 'RMp'])),
-    emerged: kinds.map((kind) => sumKinds(kind, ['EM'])),
-    removed: kinds.map((kind) => sumKinds(kind, ['RMe', 'RMl', 'RMp'])),
+    capped: at.map((mass) => sum(mass, pupa, ends.emerged + 1) + end(mass, ends.lostCapped)),
+    emerged: at.map((mass) => end(mass, ends.emerged)),
+    removed: at.map((mass) => sum(mass, ends.lostEgg, ends.lostCapped + 1)),
   };
 }

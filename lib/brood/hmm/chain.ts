@@ -1,11 +1,14 @@
 import type { SpeedPiece, Transitions } from './transitions';
-import { type Uniformised, massAfter, uniformise, valueBefore } from './uniformised';
+import { massPass, valuePass } from './power-pass';
+import { type Uniformised, uniformise } from './uniformised';
 
 /** A chain in time: it carries masses forward and values backward between any two days. */
 export interface Chain {
   states: number;
   forward(mass: Float64Array, span: Span): Float64Array;
   backward(value: Float64Array, span: Span): Float64Array;
+  /** The span cut where the clocks change speed, each stretch with its generator. */
+  stretches(span: Span): { from: number; to: number; generator: Uniformised; speeds: readonly number[] }[];
 }
 
 /** From one day to a later one; fractions of a day are days like any other. */
@@ -15,9 +18,8 @@ export interface Span {
 }
 
 /** A stretch of time with constant speeds. */
-interface Stretch {
+interface Stretch extends Span {
   piece: number;
-  days: number;
 }
 
 /** Neighbouring pieces with equal speeds as one. */
@@ -34,9 +36,9 @@ function stretches(pieces: readonly SpeedPiece[], { from, to }: Span): Stretch[]
     .map((piece, i) => {
       const start = i === 0 ? from : Math.max(from, piece.from);
       const end = Math.min(to, pieces[i + 1]?.from ?? Infinity);
-      return { piece: i, days: end - start };
+      return { piece: i, from: start, to: end };
     })
-    .filter(({ days }) => days > 0);
+    .filter((stretch) => stretch.to > stretch.from);
 }
 
 /**
@@ -54,8 +56,19 @@ export function chainOf(moves: Transitions, pieces: readonly SpeedPiece[]): Chai
   };
   return {
     states: moves.states,
-    forward: (mass, span) => stretches(steps, span).reduce((v, { piece, days }) => massAfter(at(piece), v, days), mass),
+    forward: (mass, span) =>
+      stretches(steps, span).reduce((v, { piece, from, to }) => massPass(at(piece), v, { days: to - from }).end, mass),
     backward: (value, span) =>
-      stretches(steps, span).reduceRight((v, { piece, days }) => valueBefore(at(piece), v, days), value),
+      stretches(steps, span).reduceRight(
+        (v, { piece, from, to }) => valuePass(at(piece), v, { days: to - from }).end,
+        value,
+      ),
+    stretches: (span) =>
+      stretches(steps, span).map(({ piece, from, to }) => ({
+        from,
+        to,
+        generator: at(piece),
+        speeds: steps[piece]?.speeds ?? [],
+      })),
   };
 }

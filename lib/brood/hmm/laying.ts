@@ -1,6 +1,6 @@
 import { type CellModel } from './cell-model';
-import { stateSet } from './brood-states';
-import { type Station, filterForward, normalised, posterior, valueBackward } from './stations';
+import { type Pass, type TimedFlow, layingFlow } from './laying-flow';
+import type { Station } from './stations';
 
 /** P(laid by each time), given everything seen. */
 export interface LayingLaw {
@@ -20,26 +20,8 @@ export function regularTimes(visits: readonly Station[], start: number, step: nu
   return Array.from({ length: Math.floor((end - start) / step + 1e-9) + 1 }, (_, i) => start + i * step);
 }
 
-/** The visits with further times between them, in order; a time of a visit is not repeated. */
-function withTimes(visits: readonly Station[], times: readonly number[]): Station[] {
-  const taken = new Set(visits.map(({ time }) => time));
-  const further = times.filter((time) => !taken.has(time)).map((time) => ({ time, likelihood: null }));
-  return [...visits, ...further].sort((a, b) => a.time - b.time);
-}
-
 function dot(a: Float64Array, b: Float64Array): number {
   return a.reduce((sum, value, i) => sum + value * (b[i] ?? 0), 0);
-}
-
-/** P(generation g was laid by each station), when the cell is in one of the `terminal` states at the end. */
-function laidBy(
-  { chain, states }: CellModel,
-  { stations, filtered }: { stations: readonly Station[]; filtered: readonly Float64Array[] },
-  { generation, terminal }: { generation: number; terminal: Float64Array },
-): Float64Array {
-  const laid = stateSet(states, (_, g) => g >= generation);
-  const values = valueBackward(chain, terminal, stations);
-  return Float64Array.from(posterior(filtered, values), (mass) => dot(mass, laid));
 }
 
 /** Weights of the generations, given that the cell is occupied at the last visit; null when it cannot be. */
@@ -49,32 +31,42 @@ export function generationWeights({ states }: CellModel, last: Float64Array): nu
   return total > 0 ? occupied.map((p) => p / total) : null;
 }
 
-/** Generations less likely than this are left out of the law of the present brood: they cannot move it. */
-const NEGLIGIBLE = 1e-15;
+/** P(no egg ever yet) at the moments of a stretch: the states before the first egg, as seen from both sides. */
+function stillUnlaid({ moments, unlaidMass, unlaidValue, scale }: Pass): number[] {
+  return moments.map((_, i) => {
+    const both = unlaidMass.reduce((sum, mass, k) => sum + (mass[i] ?? 0) * (unlaidValue[k]?.[i] ?? 0), 0);
+    return Math.exp(scale) * both;
+  });
+}
+
+/** P(the present brood is laid after each moment): the flow of laying, added up from the last visit backwards. */
+function laidAfter(flows: readonly TimedFlow[], times: readonly number[]): Float64Array {
+  const after = new Float64Array(times.length);
+  let i = times.length - 1;
+  let sum = 0;
+  for (const { at, mass } of [...flows].sort((a, b) => b.at - a.at)) {
+    while (i >= 0 && (times[i] ?? 0) > at) after[i--] = sum;
+    sum += mass;
+  }
+  while (i >= 0) after[i--] = sum;
+  return after;
+}
 
 /**
- * When the first egg and the egg of the present brood were laid. For the present brood each generation has its own
- * backward pass, ending in the states where that generation lives.
+ * When the first egg and the egg of the present brood were laid. The first egg: by the states before it, which a cell
+ * never comes back to. The present brood: by the flow into the egg, each moment weighed by the chance that a brood laid
+ * then gives all later records and lives.
  *
  * @param visits in order of time.
  * @param times further times to work the laws out at, none before the start or after the last visit.
  */
 export function layingLaw(model: CellModel, visits: readonly Station[], times: readonly number[]): LayingLaw {
-  const stations = withTimes(visits, times);
-  const { filtered } = filterForward(model.chain, model.start, stations);
-  const pass = { stations, filtered };
-  const everything = new Float64Array(model.states.count).fill(1);
-  const first = laidBy(model, pass, { generation: 1, terminal: everything });
-  const weights = generationWeights(model, filtered.at(-1) ?? normalised(model.start.mass));
-  const current = weights && new Float64Array(stations.length);
-  weights?.forEach((weight, g) => {
-    if (weight < NEGLIGIBLE) return;
-    const law = laidBy(model, pass, { generation: g + 1, terminal: model.states.occupied(g + 1) });
-    law.forEach((p, i) => {
-      if (current) current[i] = (current[i] ?? 0) + weight * p;
-    });
-  });
-  return { times: stations.map(({ time }) => time), first, current };
+  const moments = [...new Set([...times, ...visits.map(({ time }) => time)])].sort((a, b) => a - b);
+  const { passes, flows, occupied } = layingFlow(model, visits, moments);
+  const unlaid = passes.flatMap(stillUnlaid);
+  const first = Float64Array.from(moments, (_, i) => 1 - Math.min(1, unlaid[i] ?? 1));
+  const current = occupied ? laidAfter(flows, moments).map((after) => Math.min(1, Math.max(0, 1 - after))) : null;
+  return { times: moments, first, current };
 }
 
 /**

@@ -42,13 +42,14 @@ export function transitions(states: number, clocks: number, moves: readonly Move
   };
 }
 
-/** The same chain without the moves that `keep` turns down. */
-export function keepMoves(all: Transitions, keep: (source: number, target: number) => boolean): Transitions {
-  const kept = Array.from(all.source.keys()).filter((i) => keep(all.source[i] ?? 0, all.target[i] ?? 0));
+/** The moves within the states `from` … `to − 1`, which are numbered anew from 0. */
+export function sliceMoves(all: Transitions, from: number, to: number): Transitions {
+  const isIn = (state: number | undefined) => state !== undefined && state >= from && state < to;
+  const kept = Array.from(all.source.keys()).filter((i) => isIn(all.source[i]) && isIn(all.target[i]));
   return {
-    states: all.states,
-    source: Int32Array.from(kept, (i) => all.source[i] ?? 0),
-    target: Int32Array.from(kept, (i) => all.target[i] ?? 0),
+    states: to - from,
+    source: Int32Array.from(kept, (i) => (all.source[i] ?? 0) - from),
+    target: Int32Array.from(kept, (i) => (all.target[i] ?? 0) - from),
     rates: all.rates.map((rates) => Float64Array.from(kept, (i) => rates[i] ?? 0)),
   };
 }

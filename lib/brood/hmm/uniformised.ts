@@ -1,85 +1,187 @@
-import { poissonWeights } from '@/lib/brood/poisson';
 import type { Transitions } from './transitions';
+
+/** Moves from every state of `from` … `to − 1` into one target, all with one probability at a tick. */
+interface Fan {
+  from: number;
+  to: number;
+  target: number;
+  go: number;
+}
 
 /**
  * A generator as a discrete chain with Poisson ticks: v·exp(Q t) = Σ Poisson(n; clock · t) · v (I + Q / clock)ⁿ.
  * All terms are non-negative, so nothing cancels.
+ *
+ * Brood chains mostly move from a state to the one numbered next, so those moves are one dense row; what is left are
+ * few fans: all phases of a stage that are lost into one end. A tick is then a handful of plain loops.
  */
 export interface Uniformised {
-  moves: Transitions;
+  states: number;
   /** Ticks a day: the largest rate of leaving any state. */
   clock: number;
   /** Probability of staying at a tick, by state. */
   stay: Float64Array;
-  /** Probability of each move at a tick. */
-  go: Float64Array;
+  /** Probability of coming from the state numbered one less, by state. */
+  fromPrevious: Float64Array;
+  fans: readonly Fan[];
 }
 
-/** The generator at given speeds of the clocks, uniformised. */
-export function uniformise(moves: Transitions, speeds: readonly number[]): Uniformised {
+/** All moves at given speeds of the clocks: the sum over clocks of speed × rate. */
+function rateOfMoves(moves: Transitions, speeds: readonly number[]): Float64Array {
   const go = new Float64Array(moves.source.length);
   moves.rates.forEach((rates, clock) => {
     const speed = speeds[clock] ?? 0;
     for (let i = 0; i < go.length; i++) go[i] = (go[i] ?? 0) + speed * (rates[i] ?? 0);
   });
-  const leave = new Float64Array(moves.states);
-  go.forEach((rate, i) => {
-    const source = moves.source[i] ?? 0;
-    leave[source] = (leave[source] ?? 0) + rate;
+  return go;
+}
+
+/** Joins moves into one target from states in a row, with one probability, to fans. */
+function fansOf({ source, target }: Transitions, go: Float64Array): Fan[] {
+  const others = Array.from(go.keys()).filter((i) => go[i] !== 0 && target[i] !== (source[i] ?? 0) + 1);
+  const sorted = others.sort((a, b) => (target[a] ?? 0) - (target[b] ?? 0) || (source[a] ?? 0) - (source[b] ?? 0));
+  const fans: Fan[] = [];
+  for (const i of sorted) {
+    const [from, to, share] = [source[i] ?? 0, target[i] ?? 0, go[i] ?? 0];
+    const last = fans.at(-1);
+    if (last?.target === to && last.to === from && last.go === share) last.to += 1;
+    else fans.push({ from, to: from + 1, target: to, go: share });
+  }
+  return fans;
+}
+
+/** The generator at given speeds of the clocks, uniformised. */
+export function uniformise(moves: Transitions, speeds: readonly number[]): Uniformised {
+  const rates = rateOfMoves(moves, speeds);
+  const { states, source, target } = moves;
+  const leave = new Float64Array(states);
+  rates.forEach((rate, i) => {
+    const from = source[i] ?? 0;
+    leave[from] = (leave[from] ?? 0) + rate;
   });
   const clock = leave.reduce((most, rate) => Math.max(most, rate), 0);
-  if (clock === 0) return { moves, clock, stay: leave.fill(1), go };
-  return { moves, clock, stay: leave.map((rate) => 1 - rate / clock), go: go.map((rate) => rate / clock) };
+  const fromPrevious = new Float64Array(states);
+  if (clock === 0) return { states, clock, stay: leave.fill(1), fromPrevious, fans: [] };
+  const go = rates.map((rate) => rate / clock);
+  go.forEach((share, i) => {
+    const to = target[i] ?? 0;
+    if (to === (source[i] ?? 0) + 1) fromPrevious[to] = share;
+  });
+  return { states, clock, stay: leave.map((rate) => 1 - rate / clock), fromPrevious, fans: fansOf(moves, go) };
 }
+
+/** States are handled in blocks of this many; a block without mass is passed over. */
+const BLOCK_BITS = 4;
+
+/** States of one block. */
+export const BLOCK = 1 << BLOCK_BITS;
+
+/** Which blocks of states hold anything: 1 where they do. */
+export type Blocks = Uint8Array;
+
+/** Blocks for a chain, all set to `value`. */
+export function blocksOf({ states }: Pick<Uniformised, 'states'>, value: 0 | 1): Blocks {
+  return new Uint8Array(((states - 1) >> BLOCK_BITS) + 1).fill(value);
+}
+
+/** One step of a vector: from `current` to `next`, which it overwrites in these blocks; elsewhere both are 0. */
+export type Tick = (
+  chain: Uniformised,
+  vectors: { current: Float64Array; next: Float64Array },
+  blocks: Blocks,
+) => void;
 
 /** One tick of a row of masses: `next = mass (I + Q / clock)`. */
-function tickMass({ moves, stay, go }: Uniformised, mass: Float64Array, next: Float64Array): void {
-  const { source, target } = moves;
-  for (let s = 0; s < next.length; s++) next[s] = (mass[s] ?? 0) * (stay[s] ?? 0);
-  for (let i = 0; i < go.length; i++) {
-    const to = target[i] ?? 0;
-    next[to] = (next[to] ?? 0) + (mass[source[i] ?? 0] ?? 0) * (go[i] ?? 0);
+export const tickMass: Tick = ({ states, stay, fromPrevious, fans }, { current, next }, blocks) => {
+  for (let b = 0; b < blocks.length; b++) {
+    if (blocks[b] === 0) continue;
+    const first = b << BLOCK_BITS;
+    const end = Math.min(states, first + BLOCK);
+    let before = first > 0 ? (current[first - 1] ?? 0) : 0;
+    for (let s = first; s < end; s++) {
+      const here = current[s] ?? 0;
+      next[s] = here * (stay[s] ?? 0) + before * (fromPrevious[s] ?? 0);
+      before = here;
+    }
   }
-}
+  for (const { from, to, target, go } of fans) {
+    let sum = 0;
+    for (let b = from >> BLOCK_BITS; b <= (to - 1) >> BLOCK_BITS; b++) {
+      if (blocks[b] === 0) continue;
+      const end = Math.min(to, (b + 1) << BLOCK_BITS);
+      for (let s = Math.max(from, b << BLOCK_BITS); s < end; s++) sum += current[s] ?? 0;
+    }
+    if (sum > 0) next[target] = (next[target] ?? 0) + sum * go;
+  }
+};
 
 /** One tick of a column of values: `next = (I + Q / clock) value`. */
-function tickValue({ moves, stay, go }: Uniformised, value: Float64Array, next: Float64Array): void {
-  const { source, target } = moves;
-  for (let s = 0; s < next.length; s++) next[s] = (value[s] ?? 0) * (stay[s] ?? 0);
-  for (let i = 0; i < go.length; i++) {
-    const from = source[i] ?? 0;
-    next[from] = (next[from] ?? 0) + (value[target[i] ?? 0] ?? 0) * (go[i] ?? 0);
-  }
-}
-
-type Tick = typeof tickMass;
-
-function poissonSum(
-  chain: Uniformised,
-  vector: Float64Array,
-  { days, tick }: { days: number; tick: Tick },
-): Float64Array {
-  if (days === 0 || chain.clock === 0) return vector.slice();
-  const { first, weights } = poissonWeights(chain.clock * days);
-  const sum = new Float64Array(vector.length);
-  let [current, next] = [vector.slice(), new Float64Array(vector.length)];
-  for (let n = 0; n < first + weights.length; n++) {
-    if (n > 0) {
-      tick(chain, current, next);
-      [current, next] = [next, current];
+export const tickValue: Tick = ({ states, stay, fromPrevious, fans }, { current, next }, blocks) => {
+  for (let b = blocks.length - 1; b >= 0; b--) {
+    if (blocks[b] === 0) continue;
+    const first = b << BLOCK_BITS;
+    const end = Math.min(states, first + BLOCK);
+    let after = current[end] ?? 0;
+    let share = fromPrevious[end] ?? 0;
+    for (let s = end - 1; s >= first; s--) {
+      const here = current[s] ?? 0;
+      next[s] = here * (stay[s] ?? 0) + after * share;
+      after = here;
+      share = fromPrevious[s] ?? 0;
     }
-    const weight = n < first ? 0 : (weights[n - first] ?? 0);
-    if (weight > 0) for (let s = 0; s < sum.length; s++) sum[s] = (sum[s] ?? 0) + weight * (current[s] ?? 0);
   }
-  return sum;
+  for (const { from, to, target, go } of fans) {
+    const gain = (current[target] ?? 0) * go;
+    if (gain === 0) continue;
+    for (let b = from >> BLOCK_BITS; b <= (to - 1) >> BLOCK_BITS; b++) {
+      if (blocks[b] === 0) continue;
+      const end = Math.min(to, (b + 1) << BLOCK_BITS);
+      for (let s = Math.max(from, b << BLOCK_BITS); s < end; s++) next[s] = (next[s] ?? 0) + gain;
+    }
+  }
+};
+
+/** `sum += weight · vector`, in these blocks. */
+export function addScaled(
+  sum: Float64Array,
+  { vector, weight }: { vector: Float64Array; weight: number },
+  blocks: Blocks,
+): void {
+  for (let b = 0; b < blocks.length; b++) {
+    if (blocks[b] === 0) continue;
+    const end = Math.min(sum.length, (b + 1) << BLOCK_BITS);
+    for (let s = b << BLOCK_BITS; s < end; s++) sum[s] = (sum[s] ?? 0) + weight * (vector[s] ?? 0);
+  }
 }
 
-/** Masses after `days`: `mass · exp(Q days)`. */
-export function massAfter(chain: Uniformised, mass: Float64Array, days: number): Float64Array {
-  return poissonSum(chain, mass, { days, tick: tickMass });
+/** Marks the blocks of a vector that hold more than `least`; the others are set to 0. */
+export function heldBlocks(vector: Float64Array, blocks: Blocks, least: number): void {
+  for (let b = 0; b < blocks.length; b++) {
+    if (blocks[b] === 0) continue;
+    const end = Math.min(vector.length, (b + 1) << BLOCK_BITS);
+    let most = 0;
+    for (let s = b << BLOCK_BITS; s < end; s++) most = Math.max(most, vector[s] ?? 0);
+    if (most > least) continue;
+    vector.fill(0, b << BLOCK_BITS, end);
+    blocks[b] = 0;
+  }
 }
 
-/** Expected values `days` before: `exp(Q days) · value`. */
-export function valueBefore(chain: Uniformised, value: Float64Array, days: number): Float64Array {
-  return poissonSum(chain, value, { days, tick: tickValue });
+/** Adds every block that can be reached within `BLOCK` ticks: the next ones, and those that fans lead to. */
+export function reachFrom({ fans }: Uniformised, held: Blocks): Blocks {
+  const reach = held.slice();
+  held.forEach((isHeld, b) => {
+    if (isHeld === 1 && b + 1 < reach.length) reach[b + 1] = 1;
+  });
+  for (let grown = true; grown; ) {
+    grown = false;
+    for (const { from, to, target } of fans) {
+      const into = target >> BLOCK_BITS;
+      if (reach[into] === 1 && reach[Math.min(into + 1, reach.length - 1)] === 1) continue;
+      if (!reach.subarray(from >> BLOCK_BITS, ((to - 1) >> BLOCK_BITS) + 1).includes(1)) continue;
+      reach.fill(1, into, into + 2);
+      grown = true;
+    }
+  }
+  return reach;
 }

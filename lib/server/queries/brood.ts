@@ -65,7 +65,6 @@ export async function broodInput(scope: TeamScope, nest: NestRow, { zone, asOf }
     asOf,
     readings: await broodReadings(scope, nest.id),
     taxon: nest.taxon,
-    hasTemperature: record !== null,
     temperature: record,
     place,
     digest: digestWith(digest),

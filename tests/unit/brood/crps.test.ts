@@ -1,9 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import facts from '@/tests/fixtures/brood/duration-facts.json';
-import { passageTo } from '@/lib/brood/passage';
-import { phaseChain } from '@/lib/brood/phase-chain';
 import { crps } from './crps';
-import { passageCdf } from './passages';
+import { massesAt } from './stage-rows';
 
 /** The standard normal CDF by Simpson’s rule. */
 function normalCdf(x: number): number {
@@ -17,10 +15,7 @@ function normalCdf(x: number): number {
 
 /** CDF of 9 phases with mean 12, as the product works it out. */
 function erlang9(x: number): number {
-  const chain = phaseChain([{ phases: 9, meanDays: 12 }]);
-  const start = new Float64Array(9);
-  start[0] = 1;
-  return passageCdf(chain, passageTo(chain, start, 9), x);
+  return massesAt([{ phases: 9, meanDays: 12 }], x)[9] ?? NaN;
 }
 
 const LAWS: Record<string, { cdf: (x: number) => number; from: number; to: number }> = {

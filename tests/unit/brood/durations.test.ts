@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { nestModel } from '@/lib/brood/class-law';
+import { stageLaws } from '@/lib/brood/stages';
 import { DEFAULT_DURATIONS, GENUS_ROW, durationsFor } from '@/lib/brood/durations';
 import { DEFAULT_SETTINGS } from '@/lib/brood/settings';
 import { estimate, reading } from './support';
@@ -7,7 +7,7 @@ import { estimate, reading } from './support';
 /** The mean time from egg to adult that the model works with. */
 function modelTotal(egg: number, larva: number, capped: number): number {
   const row = { ...GENUS_ROW, egg, larva, capped };
-  return nestModel(row, DEFAULT_SETTINGS).chain.rates.reduce((sum, rate) => sum + 1 / rate, 0);
+  return stageLaws(row, DEFAULT_SETTINGS).reduce((total, { meanDays }) => total + meanDays, 0);
 }
 
 const sum = ({ egg, larva, capped }: { egg: number; larva: number; capped: number }) => egg + larva + capped;

@@ -2,9 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { cellModel } from '@/lib/brood/hmm/cell-model';
 import { historyAnswer } from '@/lib/brood/hmm/history-answer';
 import { erlangStage } from '@/lib/brood/hmm/stage-fit';
-import { passageSince, passageTo } from '@/lib/brood/passage';
-import { equilibriumWeights, phaseChain } from '@/lib/brood/phase-chain';
-import { passageCdf, stageOccupancy } from '@/tests/unit/brood/passages';
+import { enteredWithin, massesAt, reachedBy } from '@/tests/unit/brood/stage-rows';
 
 const SHAPES = [
   { name: 'egg', phases: 9, meanDays: 12 },
@@ -30,7 +28,13 @@ const model = (layFirst: number, startKey: string, t0: number) =>
 describe('the general model in a simple case', () => {
   it('develops like the bare chain of stages (B06: 0.563687328 larva, 0.429997247 pupa, 0.005901010 out at 30 days)', () => {
     const { filtered } = historyAnswer(model(1, 'egg#1', 0), { times: [30], observations: [null] }, ONE_DAY);
-    const [egg, larva, pupa, out] = stageOccupancy(phaseChain(SHAPES), 30);
+    const masses = massesAt(SHAPES, 30);
+    const [egg, larva, pupa, out] = [
+      [0, 9],
+      [9, 17],
+      [17, 33],
+      [33, 34],
+    ].map(([from, to]) => masses.subarray(from, to).reduce((sum, p) => sum + p, 0));
     const kinds = filtered?.[0] ?? {};
     [kinds['egg#1'], kinds['larva#1'], kinds['pupa#1'], kinds['EM#1']].forEach((p, i) => {
       expect(p).toBeCloseTo([egg, larva, pupa, out][i] ?? NaN, 12);
@@ -39,15 +43,12 @@ describe('the general model in a simple case', () => {
   });
 
   it('gives one sighting the equilibrium law when the egg may have been laid on any day (renewal theory)', () => {
-    const chain = phaseChain(SHAPES);
-    const weights = equilibriumWeights(chain, { from: 9, to: 17 });
     const answer = historyAnswer(model(1e-9, 'B', -200), { times: [0], observations: ['larva'] }, ONE_DAY);
-    const since = passageSince(chain, 0, weights);
     answer.laying?.times.forEach((time, i) => {
-      expect(Math.abs((answer.laying?.first[i] ?? NaN) - (1 - passageCdf(chain, since, -time)))).toBeLessThan(1e-6);
+      expect(Math.abs((answer.laying?.first[i] ?? NaN) - (1 - enteredWithin(SHAPES, [9, 17], -time)))).toBeLessThan(1e-6);
     });
     ONE_DAY.daysAfter.forEach((days, i) => {
-      const capped = passageCdf(chain, passageTo(chain, weights, 17), days);
+      const capped = reachedBy(SHAPES, [9, 17], days);
       expect(Math.abs((answer.outlook?.capped[i] ?? NaN) - capped)).toBeLessThan(1e-6);
     });
   });
