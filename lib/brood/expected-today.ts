@@ -56,4 +56,3 @@ export function expectedToday(estimate: BroodEstimate, readings: readonly BroodR
     return look ? [{ q: cell.q, r: cell.r, state: grown(cell, look, { places, asOf }) }] : [];
   });
 }
-

@@ -16,17 +16,23 @@ export class NoEstimateError extends Error {
   }
 }
 
-/** The part of a web worker that is used. */
+/** A running worker. */
 export interface BroodWorker {
-  postMessage(question: BroodQuestion): void;
-  terminate(): void;
-  onmessage: ((event: { data: unknown }) => void) | null;
-  onerror: ((event: { preventDefault(): void }) => void) | null;
+  post(question: BroodQuestion): void;
+  stop(): void;
+}
+
+/** Who hears a worker. */
+export interface WorkerListener {
+  /** It has said something. */
+  said(message: unknown): void;
+  /** It could not be loaded, or has fallen over. */
+  broken(): void;
 }
 
 /** What an asker works with. `makeWorker` may throw where there are no workers. */
 export interface BroodAskerPorts {
-  makeWorker(): BroodWorker;
+  makeWorker(listener: WorkerListener): BroodWorker;
   timers: Timers;
 }
 
@@ -63,23 +69,16 @@ export class BroodAsker {
       this.waiting.set(ticket, { settle: resolve, fail, stopClock });
     });
     try {
-      this.worker ??= this.start();
-      this.worker.postMessage({ protocol: BROOD_PROTOCOL, ticket, task });
+      this.worker ??= this.ports.makeWorker({
+        said: (message) => this.hear(message),
+        broken: () => this.giveUp('no-worker'),
+      });
+      this.worker.post({ protocol: BROOD_PROTOCOL, ticket, task });
     } catch {
       this.giveUp('no-worker');
     }
     return answer;
   };
-
-  private start(): BroodWorker {
-    const worker = this.ports.makeWorker();
-    worker.onmessage = ({ data }) => this.hear(data);
-    worker.onerror = (event) => {
-      event.preventDefault();
-      this.giveUp('no-worker');
-    };
-    return worker;
-  }
 
   private hear(data: unknown): void {
     if (!isBroodReply(data)) return this.giveUp('protocol');
@@ -103,7 +102,7 @@ export class BroodAsker {
   }
 
   private letGo(): void {
-    this.worker?.terminate();
+    this.worker?.stop();
     this.worker = null;
   }
 }

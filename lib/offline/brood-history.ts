@@ -3,10 +3,11 @@ import { foldMarks, liveByCell } from './fold-readings';
 import type { LocalOp } from './local-op';
 import type { ReadingSummary, VisitView } from './nest-view';
 
-/** What this phone knows of a nest's brood at one visit. */
+/** What this phone knows of a nest's brood when a reading of it is made. */
 export interface BroodHistory {
   /** When the visit began, epoch milliseconds. */
   visitAt: number;
+  kind: ReadingSummary['kind'];
   /** One reading of each earlier visit that has one with marks, oldest first. */
   earlier: BroodReading[];
 }
@@ -26,21 +27,27 @@ function readingOf(visit: VisitView, rows: readonly LocalOp[]): BroodReading | n
 }
 
 /**
- * The readings that an estimate at a visit can start from. Those of the visit itself are left to the caller, or one
- * reader would be told what another has found.
+ * The readings that an estimate for a reading can start from. Those of its own visit are left out, or one reader would
+ * be told what another has found.
  *
  * @param visits of one nest, oldest first.
+ * @param reading the id of the reading that is being made.
  * @param rows all operations of the nest.
- * @returns null when the visit is not among them.
+ * @returns null when the reading is not among them.
  */
 export function broodHistory(
   visits: readonly VisitView[],
-  visit: string,
+  reading: string,
   rows: readonly LocalOp[],
 ): BroodHistory | null {
-  const here = visits.findIndex(({ id }) => id === visit);
+  const here = visits.findIndex(({ readings }) => readings.some(({ id }) => id === reading));
   const present = visits[here];
-  if (!present) return null;
+  const own = present?.readings.find(({ id }) => id === reading);
+  if (!present || !own) return null;
   const earlier = visits.slice(0, here).map((before) => readingOf(before, rows));
-  return { visitAt: Date.parse(present.startedAt), earlier: earlier.filter((reading) => reading !== null) };
+  return {
+    visitAt: Date.parse(present.startedAt),
+    kind: own.kind,
+    earlier: earlier.filter((found) => found !== null),
+  };
 }

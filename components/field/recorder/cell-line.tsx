@@ -38,7 +38,8 @@ function WalkBar({ desk }: { desk: Desk }): ReactElement {
 /** The current cell in large with the keys for one cell back and forward, and how far the walk is. */
 export function CellLine({ desk }: { desk: Desk }): ReactElement {
   const { view } = desk.recorder;
-  const earlier = earlierLine(view);
+  // The key below says it too, where there is one.
+  const earlier = desk.expected.size > 0 ? null : earlierLine(view);
   return (
     <div className="flex flex-col gap-2">
       <div className="flex items-center gap-3">
