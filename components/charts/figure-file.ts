@@ -4,6 +4,8 @@ import { figureRules, variableRule, variablesIn } from './figure-style';
 const SVG = 'http://www.w3.org/2000/svg';
 const CAPTION_LINE = 18;
 const MARGIN = 12;
+/** Room for the caption. */
+const LEAST_WIDTH = 580;
 /** Pictures of pixels are made this much larger than on the screen, for print. */
 const PIXELS = 2;
 
@@ -61,7 +63,7 @@ export async function figureFile(shown: SVGSVGElement, caption: readonly string[
   const scale = shown.width.baseVal.value / box.width || 1;
   const drawing = shown.cloneNode(true) as SVGSVGElement;
   stripPage(drawing);
-  const width = Math.max(480, Math.round(box.width * scale)) + 2 * MARGIN;
+  const width = Math.max(LEAST_WIDTH, Math.round(box.width * scale)) + 2 * MARGIN;
   const drawn = Math.round(box.height * scale);
   const height = drawn + caption.length * CAPTION_LINE + 2 * MARGIN;
   drawing.setAttribute('x', String(MARGIN));

@@ -11,17 +11,21 @@ export interface BroodStrip {
   key: string;
   /** What stands at its left: `cells 13, 14`. */
   label: string;
+  /** The same where there is little room: `13, 14`. */
+  short: string;
   state: CellState;
   laid: ChartSpread;
   capped: ChartSpread | null;
   emerges: ChartSpread | null;
 }
 
-const ROW = 30;
+const ROW = 34;
 const HEAD = 22;
 const FOOT = 20;
 const GLYPH = 20;
 const LETTER = 7.2;
+/** Labels with less room than this, in pixels, are numbers only. */
+const ROOM_FOR_WORDS = 100;
 
 /** Every date a set of strips needs room for. */
 function datesOf(strips: readonly BroodStrip[]): string[] {
@@ -61,7 +65,8 @@ function Bar({ plot, from, to, y, fill }: BarProps): ReactElement {
 
 /** Egg and larva light, capped dark; the ranges of laying and emergence below the bar, that of capping above it. */
 function Strip({ strip, plot, top }: { strip: BroodStrip; plot: Plot; top: number }): ReactElement {
-  const { label, state, laid, capped, emerges } = strip;
+  const { label, short, state, laid, capped, emerges } = strip;
+  const room = plot.left - GLYPH - 10;
   const bar = top + 11;
   const closes = capped?.median ?? emerges?.median ?? laid.median;
   return (
@@ -71,7 +76,7 @@ function Strip({ strip, plot, top }: { strip: BroodStrip; plot: Plot; top: numbe
       </g>
       <text x={GLYPH + 5} y={top + 20} fontSize="13" fill="var(--ink)">
         <title>{label}</title>
-        {cut(label, plot.left - GLYPH - 10)}
+        {cut(room < ROOM_FOR_WORDS ? short : label, room)}
       </text>
       <Bar plot={plot} from={laid.median} to={closes} y={bar} fill="var(--stage-small)" />
       {capped && emerges && (

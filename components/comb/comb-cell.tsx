@@ -72,10 +72,10 @@ function AgedDrawing({ cell, box }: { cell: CombCellView; box: Placed }): ReactE
   return (
     <>
       <polygon className="comb-wall" points={CELL_POINTS} transform={`translate(${x} ${y})`} />
-      <svg x={x + width * 0.22} y={y + 3} width={width * 0.56} height={width * 0.56} viewBox="0 0 48 48">
+      <svg x={x + width * 0.22} y={y + 4} width={width * 0.56} height={width * 0.56} viewBox="0 0 48 48">
         <use className="comb-bare" href={`#${STATE_SYMBOLS[cell.state]}`} width="48" height="48" />
       </svg>
-      <text className="comb-age fig-mono" x={x + width / 2} y={y + 40} textAnchor="middle" fontSize="12.5">
+      <text className="comb-age fig-mono" x={x + width / 2} y={y + 37.5} textAnchor="middle" fontSize="12.5">
         {cell.ageDays}
       </text>
     </>

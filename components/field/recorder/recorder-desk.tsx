@@ -53,6 +53,8 @@ export function RecorderDesk({ recorder, title, expectation, onFinish }: Recorde
   const looked = useLookedAt(view.current);
   const painting = desk.mode.kind === 'paint';
   const close = (): void => setSheet('none');
+  // A tool may have opened another panel in its place: closing this one must not take that away.
+  const closeTools = (): void => setSheet((now) => (now === 'tools' ? 'none' : now));
   useRecorderKeys(desk);
   return (
     <main className="flex flex-1 flex-col gap-2 px-gap pt-1 pb-gap lg:grid lg:grid-cols-[minmax(0,1fr)_28rem] lg:gap-8">
@@ -78,7 +80,7 @@ export function RecorderDesk({ recorder, title, expectation, onFinish }: Recorde
       </div>
       <LastMark view={view} />
       <FurtherSheet desk={desk} open={sheet === 'more'} onClose={close} />
-      <ToolsSheet desk={desk} open={sheet === 'tools'} onClose={close} whole={whole} onWhole={setWhole}>
+      <ToolsSheet desk={desk} open={sheet === 'tools'} onClose={closeTools} whole={whole} onWhole={setWhole}>
         {desk.expected.size > 0 && <FieldButton onClick={() => setSheet('expected')}>The rest as expected</FieldButton>}
       </ToolsSheet>
       <ExpectedSheet desk={desk} looked={looked} open={sheet === 'expected'} onClose={close} />

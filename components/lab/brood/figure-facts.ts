@@ -21,7 +21,8 @@ export function figureFacts(
     figure,
     asOf: day,
     caption: [
-      `${code}, estimate as known on ${fullDateWords(day)}. ${FIGURES[figure]}`,
+      `${code}, estimate as known on ${fullDateWords(day)}.`,
+      FIGURES[figure],
       `Model ${model.name} ${model.version}, settings version ${settings.version}.`,
     ],
   };

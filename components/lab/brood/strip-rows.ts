@@ -53,6 +53,7 @@ export function stripRows(
 
 /** A row as the drawing takes it. */
 export function stripOf({ cells, state, laid, capped, emerges }: BroodRow): BroodStrip {
-  const label = `${cells.length === 1 ? 'cell' : 'cells'} ${runWords(cells)}`;
-  return { key: cells.join(), label, state, laid, capped, emerges };
+  const short = runWords(cells);
+  const label = `${cells.length === 1 ? 'cell' : 'cells'} ${short}`;
+  return { key: cells.join(), label, short, state, laid, capped, emerges };
 }

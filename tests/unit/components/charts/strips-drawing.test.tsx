@@ -13,6 +13,7 @@ const spread = (median: string, lo: string, hi: string) => ({
 const strip: BroodStrip = {
   key: '0',
   label: 'cell 0',
+  short: '0',
   state: 'capped',
   laid: spread('2026-05-09', '2026-05-05', '2026-05-13'),
   capped: spread('2026-06-09', '2026-06-06', '2026-06-12'),
@@ -45,10 +46,14 @@ describe('brood strips', () => {
   });
 
   it('carry the glyph of what was seen, and cut a long label but keep it whole in its title', () => {
-    const html = draw([{ ...strip, label: 'cells 1, 3, 5, 7, 9, 11, 13, 15' }], '2026-06-16', 380);
+    const html = draw(
+      [{ ...strip, label: 'cells 1, 3, 5, 7, 9, 11, 13, 15', short: '1, 3, 5, 7, 9' }],
+      '2026-06-16',
+      380,
+    );
     expect(html).toContain('#st-capped');
     expect(html).toContain('<title>cells 1, 3, 5, 7, 9, 11, 13, 15</title>');
-    expect(html).toMatch(/>cells 1…</);
+    expect(html).toMatch(/>1, 3, 5…</);
   });
 
   it('draw nothing without brood', () => {

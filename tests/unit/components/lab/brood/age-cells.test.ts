@@ -71,7 +71,7 @@ describe('a downloaded figure', () => {
   it('says below the drawing whose it is, of when, and by which model', () => {
     const { caption } = figureFacts('brood-comb', { code: 'N12', day: '2026-06-16', estimate });
     expect(caption[0]).toContain('N12, estimate as known on 16 June 2026.');
-    expect(caption[1]).toBe(
+    expect(caption.at(-1)).toBe(
       `Model ${estimate.model.name} ${estimate.model.version}, settings version ${estimate.settings.version}.`,
     );
   });
