@@ -45,9 +45,12 @@ async function watch(page: Page): Promise<void> {
 
 const watchedOn = (page: Page) => page.evaluate(() => (window as unknown as { watched: Watched }).watched);
 
-/** Long tasks that began while an estimate was being made: after the question was sent, before its answer came. */
+/** So long after its answer an estimate is still being drawn, in milliseconds. */
+const DRAWN_MS = 300;
+
+/** Long tasks that began while an estimate was made or drawn: after the question was sent. */
 function duringEstimate({ tasks, asked, answered }: Watched): number[] {
-  const spans = asked.map((from, index) => ({ from, to: answered[index] ?? Number.POSITIVE_INFINITY }));
+  const spans = asked.map((from, index) => ({ from, to: (answered[index] ?? Number.POSITIVE_INFINITY) + DRAWN_MS }));
   const within = tasks.filter(({ start }) => spans.some(({ from, to }) => start > from && start < to));
   return within.map(({ start, end }) => Math.round(end - start));
 }

@@ -8,12 +8,15 @@ import { expectedToday } from '@/lib/brood/expected-today';
 import type { StageDays } from '@/lib/brood/stage-places';
 import { cellKey } from '@/lib/comb/axial';
 import { askBrood } from '@/lib/offline/browser-brood';
+import type { BroodHistory } from '@/lib/offline/brood-history';
 import { useBroodHistory } from '@/lib/offline/hooks/use-brood-history';
 import type { RecorderView } from '@/lib/offline/recorder-view';
 
 /** What a comb is expected to hold today, and what changes are judged by. */
 export interface Expectation {
   states: ExpectedStates;
+  /** `second-reading`: nothing but the comb may lead it; `no-estimate`: this phone could not make one. */
+  standing: 'computing' | 'ready' | 'second-reading' | 'no-estimate';
   durations: StageDays;
   /** Days since the last visit with a reading; null at the first. */
   daysSince: number | null;
@@ -24,6 +27,13 @@ const DAY_MS = 86_400_000;
 interface Known {
   reading: string;
   states: ExpectedStates;
+  failed: boolean;
+}
+
+function standingOf(history: BroodHistory | null | undefined, known: Known | null): Expectation['standing'] {
+  if (history === null || known?.failed) return 'no-estimate';
+  if (history?.kind === 'second') return 'second-reading';
+  return known ? 'ready' : 'computing';
 }
 
 /**
@@ -42,18 +52,20 @@ export function useExpectation({ nest, reading }: RecorderView, taxon: string | 
       (estimate) => {
         const cells = expectedToday(estimate, earlier);
         const states = new Map(cells.map((cell) => [cellKey(cell), cell.state]));
-        if (current) setKnown({ reading, states });
+        if (current) setKnown({ reading, states, failed: false });
       },
       // Without an estimate the recorder works as at a first reading.
-      () => undefined,
+      () => current && setKnown({ reading, states: NOTHING_EXPECTED, failed: true }),
     );
     return () => {
       current = false;
     };
   }, [history, nest, reading, taxon, zone]);
+  const own = known?.reading === reading ? known : null;
   const lastAt = history?.earlier.at(-1)?.at;
   return {
-    states: known?.reading === reading ? known.states : NOTHING_EXPECTED,
+    states: own?.states ?? NOTHING_EXPECTED,
+    standing: standingOf(history, own),
     durations: durationsFor(taxon, DEFAULT_DURATIONS).row,
     daysSince: history && lastAt !== undefined ? Math.max(0, (history.visitAt - lastAt) / DAY_MS) : null,
   };

@@ -3,14 +3,31 @@
 import type { ReactElement } from 'react';
 import { CellGlyph } from '@/components/comb/cell-glyph';
 import { earlierLine } from '@/components/field/words/cell-words';
+import type { Expectation } from '@/components/field/brood/use-expectation';
 import { STATE_WORDS } from '@/lib/comb/states';
 import { type Desk, pressExpected } from './desk';
 import { expectedHere } from './expected-states';
 
-/** One press for a cell that holds what was expected. It stays in its place where nothing is, so that no key moves. */
-export function ExpectedKey({ desk }: { desk: Desk }): ReactElement | null {
+interface ExpectedKeyProps {
+  desk: Desk;
+  standing: Expectation['standing'];
+}
+
+/** What stands on the key while there is nothing to press. */
+const NOTHING_WORDS: Readonly<Record<Expectation['standing'], string>> = {
+  computing: 'Expected today: computing …',
+  ready: 'Nothing expected here',
+  'second-reading': 'Second reading: look for yourself',
+  'no-estimate': 'No estimate on this phone',
+};
+
+/**
+ * One press for a cell that holds what was expected, and what it held at the last visit. It has its place from the start
+ * wherever there was an earlier reading, so that nothing moves when the estimate comes.
+ */
+export function ExpectedKey({ desk, standing }: ExpectedKeyProps): ReactElement | null {
   const { view } = desk.recorder;
-  if (desk.expected.size === 0) return null;
+  if (view.last.size === 0) return null;
   const state = expectedHere(view, desk.expected);
   return (
     <button
@@ -22,7 +39,7 @@ export function ExpectedKey({ desk }: { desk: Desk }): ReactElement | null {
       {state && <CellGlyph state={state} size={40} />}
       <span className="min-w-0 flex-1">
         <span className="block truncate text-xl font-bold">
-          {state ? `As expected: ${STATE_WORDS[state]}` : 'Nothing expected here'}
+          {state ? `As expected: ${STATE_WORDS[state]}` : NOTHING_WORDS[standing]}
         </span>
         <span className="block truncate">{earlierLine(view) ?? '\u00a0'}</span>
       </span>

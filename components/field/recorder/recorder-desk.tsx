@@ -75,7 +75,7 @@ export function RecorderDesk({ recorder, title, expectation, onFinish }: Recorde
           </SideKey>
         </div>
         {desk.mode.kind === 'paint' ? <PaintLine desk={desk} mode={desk.mode} /> : <CellLine desk={desk} />}
-        <ExpectedKey desk={desk} />
+        <ExpectedKey desk={desk} standing={expectation.standing} />
         <KeyPad desk={desk} onMore={() => setSheet('more')} />
       </div>
       <LastMark view={view} />

@@ -90,10 +90,12 @@ describe('a comb that was read before', () => {
 
   test('keeps the key in its place, so that nothing moves, and shows none at a first reading', () => {
     const { at, now } = secondVisit();
-    expect(renderToStaticMarkup(<ExpectedKey desk={at()} />)).toContain('As expected: opened');
+    expect(renderToStaticMarkup(<ExpectedKey desk={at()} standing="ready" />)).toContain('As expected: opened');
     now().jump({ q: 0, r: -2 });
-    expect(renderToStaticMarkup(<ExpectedKey desk={at()} />)).toContain('Nothing expected here');
-    expect(renderToStaticMarkup(<ExpectedKey desk={openDesk().desk()} />)).toBe('');
+    expect(renderToStaticMarkup(<ExpectedKey desk={at()} standing="ready" />)).toContain('Nothing expected here');
+    const waiting = { ...at(), expected: new Map() };
+    expect(renderToStaticMarkup(<ExpectedKey desk={waiting} standing="computing" />)).toContain('computing');
+    expect(renderToStaticMarkup(<ExpectedKey desk={openDesk().desk()} standing="computing" />)).toBe('');
   });
 });
 
