@@ -1,4 +1,4 @@
-import { dateWords } from '@/components/ui/date-words';
+import { countWords, dateWords, spanWords } from '@/components/ui/date-words';
 import type { EmergenceDay } from './emergence-day';
 
 /** The days worth drawing: from the first to the last on which anything at all is expected. */
@@ -8,9 +8,22 @@ export function busyDays(days: readonly EmergenceDay[]): EmergenceDay[] {
   return first === -1 ? [] : days.slice(first, last + 1);
 }
 
-/** The words that stand for the chart: when most adults are expected, and how many in all. */
+/** The day by which a share of all adults is expected. */
+function dayOfShare(days: readonly EmergenceDay[], wanted: number): string {
+  let sum = 0;
+  const day = days.find(({ expected }) => {
+    sum += expected;
+    return sum >= wanted;
+  });
+  return day?.date ?? days.at(-1)?.date ?? '';
+}
+
+/** The words that stand for the chart: how many adults are expected in all, and the days of the middle half of them. */
 export function emergenceWords(days: readonly EmergenceDay[]): string {
-  const busiest = days.reduce((best, day) => (day.expected > best.expected ? day : best));
   const total = days.reduce((sum, day) => sum + day.expected, 0);
-  return `About ${Math.round(total)} adults are expected in the days shown, most around ${dateWords(busiest.date)}.`;
+  const [from, to] = [dayOfShare(days, total / 4), dayOfShare(days, (total * 3) / 4)];
+  const many = `About ${countWords(Math.round(total), 'adult')} ${Math.round(total) === 1 ? 'is' : 'are'} expected`;
+  return from === to
+    ? `${many} in the days shown, most on ${dateWords(from)}.`
+    : `${many} in the days shown, half of them between ${spanWords([from, to])}.`;
 }

@@ -25,7 +25,7 @@ export function PerDayPanel({ days, asOf, facts }: PerDayPanelProps): ReactEleme
         draw={(width) => <EmergenceDrawing days={days} asOf={asOf} width={width} />}
       />
       <p className="mt-2 text-quiet">{words} The band around each day’s bar is its range, 8 times in 10.</p>
-      <Disclosure summary="The same numbers as a table" className="mt-2">
+      <Disclosure summary="The same numbers as a table" className="print-hidden mt-2">
         <EmergenceTable days={days} inYear={asOf} />
       </Disclosure>
     </>

@@ -114,7 +114,7 @@ export function StripsPanel({ rows, asOf, facts }: StripsPanelProps): ReactEleme
         <StripKey />
         <RangeKey />
       </div>
-      <Disclosure summary="The same dates as a table" className="mt-2">
+      <Disclosure summary="The same dates as a table" className="print-hidden mt-2">
         <BroodTable rows={shown} inYear={asOf} />
       </Disclosure>
     </>

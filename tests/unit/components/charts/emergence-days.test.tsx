@@ -27,8 +27,10 @@ describe('the days worth drawing', () => {
 });
 
 describe('the chart of adults per day', () => {
-  it('says in words how many and when most', () => {
-    expect(emergenceWords(days)).toBe('About 3 adults are expected in the days shown, most around 18 June.');
+  it('says in words how many, and the days of the middle half as a range', () => {
+    expect(emergenceWords(days)).toBe(
+      'About 3 adults are expected in the days shown, half of them between 18 and 20 June.',
+    );
   });
 
   it('draws one bar a day under an axis that holds the ranges', () => {

@@ -46,7 +46,7 @@ export async function LookBack(props: LookBackProps): Promise<ReactElement> {
         <p className="text-quiet">No cell that held brood at an earlier visit was looked into again.</p>
       )}
       {checks.length > 0 && (
-        <Disclosure summary="Cell by cell: expected then, seen since" className="mt-2">
+        <Disclosure summary="Cell by cell: expected then, seen since" className="print-hidden mt-2">
           <ChecksTable checks={checks} year={year} />
         </Disclosure>
       )}
