@@ -29,13 +29,14 @@ const config = {
   images: { unoptimized: true },
   // The phone app is one static page; its inner paths are the client's.
   rewrites: async () => ({
-    beforeFiles: [{ source: '/field/:path+', destination: '/field' }],
+    beforeFiles: [{ source: '/field/:path((?!brood-worker\\.js$).+)', destination: '/field' }],
     afterFiles: [],
     fallback: [],
   }),
   headers: async () => [
     { source: '/:path*', headers: EVERYWHERE },
     { source: '/api/:path*', headers: [{ key: 'Content-Security-Policy', value: NO_CONTENT }] },
+    { source: '/field/brood-worker.js', headers: [{ key: 'Content-Security-Policy', value: NO_CONTENT }] },
     { source: '/sw.js', headers: [{ key: 'Cache-Control', value: 'no-cache, max-age=0, must-revalidate' }] },
   ],
 };

@@ -40,5 +40,5 @@ export function proxy(request: NextRequest): NextResponse {
 
 /** All pages. Left out: the API, whose large bodies a proxy would cut off, and files that are no documents. */
 export const config = {
-  matcher: ['/((?!api/|_next/|icons/|sw\\.js$|favicon\\.ico$|manifest\\.webmanifest$).*)'],
+  matcher: ['/((?!api/|_next/|icons/|sw\\.js$|field/brood-worker\\.js$|favicon\\.ico$|manifest\\.webmanifest$).*)'],
 };

@@ -17,6 +17,10 @@ export interface CombCellView extends Axial {
   changed?: boolean;
   /** Pressed, but not yet known to be stored: drawn faint until it is. */
   pending?: boolean;
+  /** Not marked yet; `state` is what the estimate expects there today: drawn faint. */
+  expected?: boolean;
+  /** Days since the egg was laid, by the estimate: written into the cell, which is coloured by it. */
+  ageDays?: number;
 }
 
 /** What the diagram can do with a place: a cell of the comb, or a free place on its rim. */
@@ -119,8 +123,11 @@ const MARK_WORDS = [
 
 /** What a cell is called aloud: `cell 13, ring 2, medium larva, nectar`. */
 export function cellName(cell: CombCellView): string {
+  if (cell.expected)
+    return `cell ${cellNumber(cell)}, ring ${ringOf(cell)}, no mark, expected ${STATE_WORDS[cell.state]}`;
+  const age = cell.ageDays === undefined ? [] : [`about ${cell.ageDays} days old`];
   const marks = MARK_WORDS.filter(([mark]) => cell[mark] === true).map(([, word]) => word);
-  return [`cell ${cellNumber(cell)}`, `ring ${ringOf(cell)}`, STATE_WORDS[cell.state], ...marks].join(', ');
+  return [`cell ${cellNumber(cell)}`, `ring ${ringOf(cell)}`, STATE_WORDS[cell.state], ...age, ...marks].join(', ');
 }
 
 /** What a free place on the rim is called aloud. */

@@ -28,7 +28,7 @@ export function AssumptionsList({ estimate, year }: AssumptionsListProps): React
     `Model ${model.name} ${model.version}, settings version ${settings.version}. Dates are local dates in ${zone}.`,
   ];
   return (
-    <Disclosure summary="Assumptions" className="mt-1">
+    <Disclosure summary="Assumptions" className="mt-1 print-open">
       <ul className="flex list-disc flex-col gap-1.5 pl-4 text-[0.9375rem]">
         {lines.map((line) => (
           <li key={line} className="[overflow-wrap:anywhere]">

@@ -1,4 +1,4 @@
-import type { CellEstimate, DateRange, EmergenceRange } from '@/lib/brood/answer';
+import type { CellEstimate, DateRange, Spread } from '@/lib/brood/answer';
 import type { CellState } from '@/lib/comb/states';
 import { cellNumber } from '@/lib/comb/walk';
 
@@ -7,9 +7,18 @@ export interface BroodRow {
   /** Cell numbers, rising. */
   cells: number[];
   state: CellState;
-  laid: DateRange;
-  capped: DateRange | null;
-  emerges: EmergenceRange | null;
+  laid: Spread;
+  capped: Spread | null;
+  emerges: Spread | null;
+}
+
+/** The local dates alone, which is all a page shows. */
+function localSpread(range: DateRange): Spread;
+function localSpread(range: DateRange | null): Spread | null;
+function localSpread(range: DateRange | null): Spread | null {
+  if (!range) return null;
+  const { median, p50, p80, p95 } = range;
+  return { median, p50, p80, p95 };
 }
 
 /** The dates of one estimate as text: equal text, equal strip. */
@@ -27,7 +36,8 @@ export function broodRows(estimates: readonly CellEstimate[]): BroodRow[] {
     const { state, laid, capped, emerges } = estimate;
     if (!laid) continue;
     const key = sameness(estimate);
-    const row = rows.get(key) ?? { cells: [], state, laid, capped, emerges };
+    const dates = { laid: localSpread(laid), capped: localSpread(capped), emerges: localSpread(emerges) };
+    const row = rows.get(key) ?? { cells: [], state, ...dates };
     row.cells.push(cellNumber(estimate));
     rows.set(key, row);
   }

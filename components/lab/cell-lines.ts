@@ -12,7 +12,8 @@ function dateLine(what: string, range: DateRange | null, inYear: string): string
   return [`${what} ${day}, ${ends}`];
 }
 
-function estimateLines({ laid, capped, emerges }: CellEstimate, inYear: string): string[] {
+/** The dates of one cell in words, each with its range. */
+export function estimateLines({ laid, capped, emerges }: CellEstimate, inYear: string): string[] {
   return [
     ...dateLine('Laid', laid, inYear),
     ...dateLine('Capped', capped, inYear),

@@ -14,7 +14,8 @@ const REMEMBERED_FAILURE = /unexpected Turbopack error|TurbopackInternalError|cr
 /** Is `.next` a finished build of the sources as they are now? */
 function isBuilt(root: string, hash: string): boolean {
   const stamp = join(root, STAMP);
-  return existsSync(stamp) && readFileSync(stamp, 'utf8') === hash && existsSync(join(root, 'public', 'sw.js'));
+  const workers = ['sw.js', 'field/brood-worker.js'].every((name) => existsSync(join(root, 'public', name)));
+  return workers && existsSync(stamp) && readFileSync(stamp, 'utf8') === hash;
 }
 
 async function nextBuild(root: string, signal: AbortSignal): Promise<void> {

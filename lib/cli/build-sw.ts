@@ -15,6 +15,8 @@ interface KeptFile {
 
 const NOT_FOUND_PAGE = join('server', 'app', '_not-found.html');
 const MANIFEST = join('server', 'app', 'manifest.webmanifest.body');
+/** Estimates brood in the phone. It lies below /field, because only there the service worker answers for it offline. */
+const BROOD_WORKER = 'field/brood-worker.js';
 const TOO_LARGE = 4 * 1024 * 1024;
 
 function revisionOf(path: string): string {
@@ -35,13 +37,14 @@ function furtherFiles(root: string, buildDir: string): KeptFile[] {
   return [
     { url: '/field', revision: field },
     ...(existsSync(manifest) ? [{ url: '/manifest.webmanifest', revision: revisionOf(manifest) }] : []),
+    { url: `/${BROOD_WORKER}`, revision: revisionOf(join(root, 'public', BROOD_WORKER)) },
     ...iconFiles(root),
   ];
 }
 
-async function bundleWorker(root: string, outfile: string): Promise<void> {
+async function bundleWorker(root: string, source: string, outfile: string): Promise<void> {
   await build({
-    entryPoints: [join(root, 'workers', 'sw.ts')],
+    entryPoints: [join(root, 'workers', source)],
     outfile,
     bundle: true,
     format: 'iife',
@@ -60,8 +63,8 @@ function writeScriptHashes(buildDir: string): void {
 }
 
 /**
- * Makes `public/sw.js` from a finished `next build`: our own worker, bundled, with the list of every file the phone
- * app needs; a phone stores either all of them or keeps the version before.
+ * Makes `public/field/brood-worker.js` and, from a finished `next build`, `public/sw.js`: our own worker, bundled, with the
+ * list of every file the phone app needs; a phone stores either all of them or keeps the version before.
  *
  * @param root the project's folder
  * @throws CommandError when the phone app's page was not built ahead, or a file was too large to keep.
@@ -71,7 +74,8 @@ export async function buildServiceWorker(root: string): Promise<void> {
   const files = fieldFiles(buildDir);
   const bundle = join(buildDir, 'service-worker', 'sw.js');
   mkdirSync(join(buildDir, 'service-worker'), { recursive: true });
-  await bundleWorker(root, bundle);
+  await bundleWorker(root, 'sw.ts', bundle);
+  await bundleWorker(root, 'brood.ts', join(root, 'public', BROOD_WORKER));
   const { count, warnings } = await injectManifest({
     swSrc: bundle,
     swDest: join(root, 'public', 'sw.js'),

@@ -18,8 +18,8 @@ const SOURCES = [
   'tailwind.config.ts',
   'tsconfig.json',
 ];
-/** The build writes the service worker itself. */
-const LEFT_OUT = new Set(['public/sw.js', 'public/sw.js.map']);
+/** The build writes the workers itself. */
+const LEFT_OUT = new Set(['public/sw.js', 'public/sw.js.map', 'public/field/brood-worker.js']);
 
 function filesUnder(root: string, path: string): string[] {
   const full = join(root, path);

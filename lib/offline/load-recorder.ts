@@ -8,12 +8,12 @@ import type { Store } from './store';
 
 /**
  * The reading that the last map comes from: of the latest earlier visit that has one with live marks.
- * Readings of the same visit never count, or one reader would see what the other has found.
+ * Readings of the same visit never count, nor hidden ones, or one reader would see what the other has found.
  */
 function lastMap(visits: readonly VisitView[], visit: string, rows: readonly LocalOp[]): RecorderState['last'] {
   const here = visits.findIndex(({ id }) => id === visit);
   for (const earlier of visits.slice(0, Math.max(0, here)).reverse()) {
-    for (const { id } of [...earlier.readings].reverse()) {
+    for (const { id } of earlier.readings.filter(({ blind }) => !blind).reverse()) {
       const cells = liveByCell(foldMarks(rows.filter((row) => row.reading === id)));
       if (cells.size > 0) return cells;
     }

@@ -79,6 +79,8 @@ export interface RecorderControls {
   press(state: CellState, detail?: PressDetail): void;
   /** Marks one named cell without moving the walk: paint, or correcting a neighbour. */
   paint(cell: Axial, state: CellState): void;
+  /** Marks several cells in one transaction without moving the walk: all of them are kept, or none. */
+  paintAll(cells: readonly (Axial & { state: CellState })[]): void;
   /** Turns one toggle over for the next press. */
   toggle(name: keyof Toggles): void;
   /** Makes a known cell or a rim address the current one; null gives the walk back the lead. */

@@ -1,4 +1,5 @@
 import { type Axial, cellKey } from '@/lib/comb/axial';
+import type { Mark } from '@/lib/comb/mark';
 import type { CellState } from '@/lib/comb/states';
 import type { Op } from '@/lib/protocol/op';
 import type { CommitEntry } from './commit-op';
@@ -83,6 +84,22 @@ export class CombRecorder implements RecorderControls {
 
   paint = (cell: Axial, seen: CellState): void => this.mark(cell, { state: seen }, this.state.place);
 
+  paintAll = (cells: readonly (Axial & { state: CellState })[]): void => {
+    const { place, ...state } = this.state;
+    const drafts: OpenDraft[] = [];
+    const marks = [...state.marks];
+    for (const { q, r, state: seen } of cells) {
+      const { draft, made } = this.makeMark({ q, r }, { state: seen }, marks);
+      drafts.push(draft);
+      marks.push(made);
+    }
+    const last = marks.at(-1);
+    if (drafts.length === 0 || !last) return;
+    const painted = new Set(cells.map(cellKey));
+    const skipped = place.skipped.filter((key) => !painted.has(key));
+    this.put(drafts, { marks, place: { ...place, skipped }, lastWords: markWords(last) });
+  };
+
   toggle = (name: keyof Toggles): void => {
     const { toggles } = this.state.place;
     this.move({ toggles: { ...toggles, [name]: !toggles[name] } });
@@ -160,7 +177,8 @@ export class CombRecorder implements RecorderControls {
     this.put([], { place: { ...this.state.place, ...part } });
   }
 
-  private mark({ q, r }: Axial, { state, ...content }: Content, place: RecorderPlace): void {
+  /** A mark that comes after the given ones, and the operation for it. */
+  private makeMark({ q, r }: Axial, { state, ...content }: Content, marks: readonly Mark[]) {
     const draft = this.begin('cell.mark', {
       q,
       r,
@@ -171,10 +189,15 @@ export class CombRecorder implements RecorderControls {
       scrap: content.scrap || undefined,
       note: content.note || undefined,
       instar: content.instar ?? undefined,
-      supersedes: liveMarkAt(this.state, { q, r })?.opId,
+      supersedes: liveMarkAt({ ...this.state, marks }, { q, r })?.opId,
     });
-    const made = markOfOp({ ...draft, hlc: provisionalHlc(this.state, this.ports.maker.clock.now()) });
+    const made = markOfOp({ ...draft, hlc: provisionalHlc({ marks }, this.ports.maker.clock.now()) });
     if (!made) throw new RangeError(`no cell at ${q}, ${r}`);
+    return { draft, made };
+  }
+
+  private mark({ q, r }: Axial, content: Content, place: RecorderPlace): void {
+    const { draft, made } = this.makeMark({ q, r }, content, this.state.marks);
     // A cell that was found missing and is marked after all is there.
     const skipped = place.skipped.filter((key) => key !== cellKey({ q, r }));
     const marks = [...this.state.marks, made];

@@ -29,8 +29,8 @@ export default defineConfig({
   reporter: 'list',
   // What is measured against a clock has the machine to itself, after everything else.
   projects: [
-    { name: 'journeys', testIgnore: /large-comb/ },
-    { name: 'alone', testMatch: /large-comb/, dependencies: ['journeys'] },
+    { name: 'journeys', testIgnore: /large-comb|main-thread/ },
+    { name: 'alone', testMatch: /large-comb|main-thread/, dependencies: ['journeys'] },
   ],
   use: {
     baseURL: `http://127.0.0.1:${process.env.PORT}`,

@@ -26,6 +26,8 @@ const SCREENS: readonly Screen[] = [
   { name: 'nests', as: REVIEWER, path: () => '/nests' },
   { name: 'nests-none-found', as: REVIEWER, path: () => '/nests?q=zzzz' },
   { name: 'nest', as: REVIEWER, path: ({ nest }) => `/nests/${nest}` },
+  { name: 'nest-brood', as: REVIEWER, path: ({ nest }) => `/nests/${nest}/brood` },
+  { name: 'nest-brood-as-researcher', as: 'researcher@tarrow.example', path: ({ nest }) => `/nests/${nest}/brood` },
   { name: 'reading', as: REVIEWER, path: ({ nest, reading }) => `/nests/${nest}/readings/${reading}` },
   {
     name: 'reading-as-technician',

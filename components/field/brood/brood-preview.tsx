@@ -1,57 +1,24 @@
 'use client';
 
-import { type ReactElement, useEffect, useState } from 'react';
+import type { ReactElement } from 'react';
+import { countWords } from '@/components/ui/date-words';
 import { Disclosure } from '@/components/ui/disclosure';
 import { DateRangeWords } from '@/components/ui/date-range';
 import { DescriptionList } from '@/components/ui/description-list';
 import { Part } from '@/components/field/parts/part';
 import { usePerson } from '@/components/field/parts/person-context';
 import type { BroodEstimate, DateRange } from '@/lib/brood/answer';
-import { estimateNest } from '@/lib/brood/estimate-nest';
 import type { Mark } from '@/lib/comb/mark';
 import { cellNumber } from '@/lib/comb/walk';
+import { NO_ESTIMATE_WORDS } from './no-estimate-words';
 import { SEASON_WORDS } from './season-words';
+import { usePreview } from './use-preview';
 
 interface BroodPreviewProps {
   nest: string;
   reading: string;
   taxon: string | null;
   marks: readonly Mark[];
-}
-
-/** `failed`: this reading could not be computed with; the reading itself is not touched by that. */
-type Preview = { kind: 'computing' } | { kind: 'failed' } | { kind: 'ready'; estimate: BroodEstimate };
-
-/** The latest moment a mark was made; the estimate looks no further. */
-function readAt(marks: readonly Mark[]): number {
-  return Math.max(...marks.map((mark) => Date.parse(mark.at)));
-}
-
-/** Computes after the screen has been drawn, so that nobody waits for it; no key is pressed on this screen. */
-function usePreview({ nest, reading, taxon, marks }: BroodPreviewProps, zone: string): Preview {
-  const [preview, setPreview] = useState<Preview>({ kind: 'computing' });
-  const digest = marks.map((mark) => mark.opId).join();
-  useEffect(() => {
-    const work = setTimeout(() => {
-      try {
-        const at = readAt(marks);
-        const estimate = estimateNest({
-          nest,
-          zone,
-          asOf: at,
-          taxon,
-          readings: [{ id: reading, at, marks: [...marks] }],
-        });
-        setPreview({ kind: 'ready', estimate });
-      } catch {
-        setPreview({ kind: 'failed' });
-      }
-    });
-    return () => clearTimeout(work);
-    // The marks are one list by value: `digest` says when they change.
-    // eslint-disable-next-line react-hooks/exhaustive-deps
-  }, [nest, reading, taxon, zone, digest]);
-  return preview;
 }
 
 function Range({ range, none }: { range: DateRange | null; none: string }): ReactElement {
@@ -66,11 +33,12 @@ function noFirstAdult(flags: BroodEstimate['flags']): string {
 }
 
 function EstimateWords({ estimate }: { estimate: BroodEstimate }): ReactElement {
-  const { nest, assumptions, flags } = estimate;
+  const { nest, assumptions, flags, readings, model, settings } = estimate;
   return (
     <>
       <p>
-        <strong>Estimate:</strong> the ranges hold in 8 of 10 nests if the assumptions do.
+        <strong>Estimate</strong> from {countWords(readings.length, 'reading')} on this phone: the ranges hold in 8 of
+        10 nests if the assumptions do.
       </p>
       <DescriptionList
         items={[
@@ -94,20 +62,27 @@ function EstimateWords({ estimate }: { estimate: BroodEstimate }): ReactElement 
           {assumptions.map((text) => (
             <li key={text}>{text}</li>
           ))}
+          <li>
+            Model {model.name} {model.version}, settings version {settings.version}: the product’s own defaults, because
+            the team’s settings are at the office.
+          </li>
         </ul>
       </Disclosure>
     </>
   );
 }
 
-/** A first estimate of the brood's dates, made on the phone from this reading alone. The office computes with all of them. */
+/** A first estimate of the brood's dates, made on the phone from the readings it holds. The office has all of them. */
 export function BroodPreview(props: BroodPreviewProps): ReactElement | null {
-  const preview = usePreview(props, usePerson().zone);
+  const { zone } = usePerson();
+  const preview = usePreview({ ...props, zone });
   if (props.marks.length === 0) return null;
   return (
     <Part title="Brood">
       {preview.kind === 'computing' && <p role="status">Estimate: computing …</p>}
-      {preview.kind === 'failed' && <p role="status">No estimate could be made from this reading.</p>}
+      {preview.kind === 'none' && (
+        <p role="status">{NO_ESTIMATE_WORDS[preview.reason]} Your marks are not touched by that.</p>
+      )}
       {preview.kind === 'ready' && <EstimateWords estimate={preview.estimate} />}
     </Part>
   );

@@ -1,11 +1,12 @@
 import type { ReactElement } from 'react';
-import { NO_CELL_KEY } from '@/components/field/recorder/key-map';
+import { AS_EXPECTED_KEY, NO_CELL_KEY } from '@/components/field/recorder/key-map';
 import { CELL_STATES, STATE_LETTERS, STATE_WORDS } from '@/lib/comb/states';
 
 const OTHER_KEYS = [
   ["'", 'nectar, before the state'],
   ['?', 'unsure, before the state'],
   [NO_CELL_KEY, 'no cell here'],
+  [AS_EXPECTED_KEY, 'as expected'],
   ['← →', 'the neighbours in the row'],
   ['↑ ↓', 'the neighbours above and below, straight up and down the comb'],
   ['Shift ↑ ↓', 'the other two neighbours above and below'],

@@ -1,7 +1,7 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { cellLine, cellTitle, earlierLine } from '@/components/field/words/cell-words';
+import { cellLine, cellTitle } from '@/components/field/words/cell-words';
 import { besideInWalk, type Desk } from './desk';
 
 interface StepKeyProps {
@@ -38,7 +38,6 @@ function WalkBar({ desk }: { desk: Desk }): ReactElement {
 /** The current cell in large with the keys for one cell back and forward, and how far the walk is. */
 export function CellLine({ desk }: { desk: Desk }): ReactElement {
   const { view } = desk.recorder;
-  const earlier = earlierLine(view);
   return (
     <div className="flex flex-col gap-2">
       <div className="flex items-center gap-3">
@@ -46,7 +45,6 @@ export function CellLine({ desk }: { desk: Desk }): ReactElement {
         <div className="min-w-0 flex-1 text-center leading-tight">
           <p className="text-number font-bold">{cellTitle(view.current)}</p>
           <p className="truncate">{cellLine(view)}</p>
-          {earlier !== null && <p className="truncate text-quiet">{earlier}</p>}
         </div>
         <StepKey desk={desk} way="forward" />
       </div>

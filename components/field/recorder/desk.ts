@@ -3,6 +3,7 @@ import { type Axial, cellKey, parseCellKey } from '@/lib/comb/axial';
 import type { CellState } from '@/lib/comb/states';
 import { cellNumber } from '@/lib/comb/walk';
 import type { PressDetail, Recorder, RecorderView } from '@/lib/offline/recorder-view';
+import { type ExpectedStates, expectedHere } from './expected-states';
 import type { RecorderCommand } from './key-map';
 import { currentMark, flipToggle, paintCell, pressState } from './recorder-acts';
 
@@ -19,6 +20,10 @@ export interface Desk {
   setDetail: (detail: PressDetail) => void;
   /** Asks whether a cell that bears a mark is to be taken off the comb. */
   askNoCell: () => void;
+  /** What the estimate expects in the cells today. */
+  expected: ExpectedStates;
+  /** Hears of every cell that a key has marked, after it was marked. */
+  marked: (cell: Axial, state: CellState) => void;
 }
 
 /** Every place one can step to: marked cells, cells known from the last visit, and open places on the rim. */
@@ -52,9 +57,17 @@ export function besideInWalk(view: RecorderView, way: 1 | -1): Axial | null {
 }
 
 /** A state was pressed: it marks the current cell, or becomes the one to paint with. */
-export function chooseState({ recorder, mode, setMode, detail }: Desk, state: CellState): void {
-  if (mode.kind === 'paint') setMode({ kind: 'paint', state });
-  else pressState(recorder, state, currentMark(recorder.view) ? {} : detail);
+export function chooseState({ recorder, mode, setMode, detail, marked }: Desk, state: CellState): void {
+  if (mode.kind === 'paint') return setMode({ kind: 'paint', state });
+  const { current } = recorder.view;
+  pressState(recorder, state, currentMark(recorder.view) ? {} : detail);
+  if (current) marked(current, state);
+}
+
+/** The current cell holds what was expected; nothing happens where nothing is. */
+export function pressExpected(desk: Desk): void {
+  const state = desk.mode.kind === 'walk' ? expectedHere(desk.recorder.view, desk.expected) : null;
+  if (state) chooseState(desk, state);
 }
 
 /** A place of the picture was pressed: painted, gone to, or opened again after "no cell here". */
@@ -76,6 +89,7 @@ export function runCommand(desk: Desk, command: RecorderCommand): void {
   const { recorder } = desk;
   if (command.do === 'mark') return chooseState(desk, command.state);
   if (command.do === 'toggle') return desk.mode.kind === 'walk' ? flipToggle(recorder, command.mark) : undefined;
+  if (command.do === 'expected') return pressExpected(desk);
   if (command.do === 'undo') return recorder.undo();
   if (command.do === 'no-cell') return pressNoCell(desk);
   const to = stepTo(recorder.view, command.step);

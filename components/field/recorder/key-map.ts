@@ -7,6 +7,7 @@ export type RecorderCommand =
   | { do: 'toggle'; mark: 'nectar' | 'unsure' }
   | { do: 'undo' }
   | { do: 'no-cell' }
+  | { do: 'expected' }
   | { do: 'step'; step: Step };
 
 /** The parts of a keyboard event that matter. */
@@ -21,6 +22,9 @@ export interface KeyPress {
 /** The key that says a rim place holds no cell; no letter of the paper sheet uses it. */
 export const NO_CELL_KEY = 'n';
 
+/** The key that says a cell holds what was expected. */
+export const AS_EXPECTED_KEY = '=';
+
 const STATE_OF_LETTER = new Map<string, CellState>([
   ...CELL_STATES.map((state) => [STATE_LETTERS[state], state] as const),
   // The paper sheet prints an en dash; many keyboards make one of two hyphens.
@@ -33,6 +37,7 @@ const FIXED = new Map<string, RecorderCommand>([
   ['?', { do: 'toggle', mark: 'unsure' }],
   ['Backspace', { do: 'undo' }],
   [NO_CELL_KEY, { do: 'no-cell' }],
+  [AS_EXPECTED_KEY, { do: 'expected' }],
 ]);
 
 /**

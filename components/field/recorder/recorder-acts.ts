@@ -54,6 +54,16 @@ export function putDetail(recorder: Recorder, detail: PressDetail): void {
   remark(recorder, shownToggles(recorder.view), detail);
 }
 
+/** Marks a cell that bears a mark as unsure; the walk goes on from where it was. */
+export function markUnsure(recorder: Recorder, cell: Axial): void {
+  const mark = recorder.view.marks.get(cellKey(cell));
+  if (!mark) return;
+  const { nectar, reused, scrap, note, instar, state } = mark;
+  alignToggles(recorder, { nectar, reused, scrap, unsure: true });
+  recorder.jump(cell);
+  recorder.press(state, { note, instar });
+}
+
 /**
  * Paints one cell. A cell that bears a mark keeps its toggles and note, as it does when its state is pressed; one that
  * bears this state already is left alone.

@@ -34,7 +34,7 @@ const SMALL_FROM = 150;
 export function RecorderComb({ desk, title, whole, looking, onPress }: RecorderCombProps): ReactElement {
   const { view } = desk.recorder;
   const window = useFollowedWindow(looking);
-  const { cells, ghosts } = combPart(view, whole ? null : window);
+  const { cells, ghosts } = combPart(view, whole ? null : window, desk.expected);
   const press = (place: Axial): void => {
     pressPlace(desk, place);
     onPress(place);

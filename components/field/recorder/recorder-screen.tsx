@@ -1,6 +1,7 @@
 'use client';
 
 import { type ReactElement, useEffect, useEffectEvent, useState } from 'react';
+import { useExpectation } from '@/components/field/brood/use-expectation';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import type { PressState } from '@/components/field/frame/corner-status';
 import { fieldHref } from '@/components/field/routing/field-route';
@@ -46,6 +47,7 @@ export function RecorderScreen({ recorder }: { recorder: Recorder }): ReactEleme
     setFinishing(summary);
     window.scrollTo(0, 0);
   };
+  const expectation = useExpectation(view, label.taxon);
   useWakeLock();
   useCounted(recorder);
   return (
@@ -60,7 +62,7 @@ export function RecorderScreen({ recorder }: { recorder: Recorder }): ReactEleme
       {finishing ? (
         <FinishSummary recorder={recorder} label={label} onBack={() => turnTo(false)} />
       ) : (
-        <RecorderDesk recorder={recorder} title={label.title} onFinish={() => turnTo(true)} />
+        <RecorderDesk recorder={recorder} title={label.title} expectation={expectation} onFinish={() => turnTo(true)} />
       )}
     </FieldFrame>
   );

@@ -1,6 +1,6 @@
 'use client';
 
-import { type ReactElement, useState } from 'react';
+import { type ReactElement, type ReactNode, useState } from 'react';
 import { FieldButton } from '@/components/field/parts/field-button';
 import { CountField } from '@/components/field/parts/count-field';
 import { Sheet } from '@/components/field/parts/sheet';
@@ -12,6 +12,8 @@ interface ToolsSheetProps {
   onClose: () => void;
   whole: boolean;
   onWhole: (whole: boolean) => void;
+  /** A further tool. */
+  children?: ReactNode;
 }
 
 /** Changes the number of cells counted, while the walk goes on. */
@@ -30,7 +32,7 @@ function CountTool({ desk, onClose }: Pick<ToolsSheetProps, 'desk' | 'onClose'>)
 }
 
 /** What is needed now and then while reading: painting, the whole comb, the number of cells. */
-export function ToolsSheet({ desk, open, onClose, whole, onWhole }: ToolsSheetProps): ReactElement {
+export function ToolsSheet({ desk, open, onClose, whole, onWhole, children }: ToolsSheetProps): ReactElement {
   const painting = desk.mode.kind === 'paint';
   const paint = (): void => {
     desk.setMode(painting ? { kind: 'walk' } : { kind: 'paint', state: 'egg' });
@@ -46,6 +48,7 @@ export function ToolsSheet({ desk, open, onClose, whole, onWhole }: ToolsSheetPr
         <div className="grid gap-gap sm:grid-cols-2">
           <FieldButton onClick={paint}>{painting ? 'Stop painting' : 'Paint cells'}</FieldButton>
           <FieldButton onClick={look}>{whole ? 'Show the cells close by' : 'Show the whole comb'}</FieldButton>
+          {children}
         </div>
         <CountTool desk={desk} onClose={onClose} />
       </div>

@@ -55,6 +55,6 @@ export function useRecorder(readingId: string): Recorder | null | undefined {
 }
 
 function recorderOf(core: CombRecorder, view: RecorderView): Recorder {
-  const { press, paint, toggle, jump, skip, unskip, expect, undo, submit, retryUnsaved } = core;
-  return { view, press, paint, toggle, jump, skip, unskip, expect, undo, submit, retryUnsaved };
+  const { press, paint, paintAll, toggle, jump, skip, unskip, expect, undo, submit, retryUnsaved } = core;
+  return { view, press, paint, paintAll, toggle, jump, skip, unskip, expect, undo, submit, retryUnsaved };
 }

@@ -36,7 +36,7 @@ function digestWith(temperature: string): (text: string) => string {
  * One reading a visit, the one that speaks for it, dated by the visit's start: a photo is read weeks later, but the
  * brood is as old as it was at the nest. Archived visits and readings kept from the person who asks are left out.
  */
-async function broodReadings(scope: TeamScope, nest: Buffer): Promise<BroodReading[]> {
+export async function broodReadings(scope: TeamScope, nest: Buffer): Promise<BroodReading[]> {
   const blind = await blindVisits(scope);
   const visible = (await readingsOfNests(scope, [nest])).filter((reading) => !isHidden(reading, scope, blind));
   const byVisit = groupBy(visible, (reading) => idKey(reading.visit_id));

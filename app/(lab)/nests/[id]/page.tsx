@@ -1,6 +1,6 @@
 import type { Metadata } from 'next';
 import type { ReactElement } from 'react';
-import { BroodSection } from '@/components/lab/brood-section';
+import { BroodBrief } from '@/components/lab/brood/brood-brief';
 import { CombColumn } from '@/components/lab/comb-column';
 import { FlagsList } from '@/components/lab/flags-list';
 import { nestLine } from '@/components/lab/lab-words';
@@ -59,7 +59,9 @@ export default async function NestPage({ params, searchParams }: NestPageProps):
             <WhenBlock estimate={estimate} year={asOf} />
             <FlagsList flags={estimate.flags} />
           </Section>
-          <BroodSection estimate={estimate} asOf={asOf} />
+          <Section id="brood" title="Brood" className="mt-8">
+            <BroodBrief nest={nest.id} estimate={estimate} />
+          </Section>
           <TemperatureSection nest={nest.id} temperature={temperature} role={session.role} inYear={asOf} />
           <NestFacts
             nest={nest}

@@ -1,6 +1,7 @@
 import { renderToStaticMarkup } from 'react-dom/server';
 import { describe, expect, it } from 'vitest';
-import { busyDays, EmergenceDays, emergenceWords } from '@/components/charts/emergence-days';
+import { busyDays, emergenceWords } from '@/components/charts/emergence-days';
+import { EmergenceDrawing } from '@/components/charts/emergence-drawing';
 import { EmergenceTable } from '@/components/charts/emergence-table';
 
 const day = (date: string, expected: number, hi80 = 0) => ({ date, expected, lo80: 0, hi80 });
@@ -26,19 +27,21 @@ describe('the days worth drawing', () => {
 });
 
 describe('the chart of adults per day', () => {
-  it('says in words how many and when most', () => {
-    expect(emergenceWords(days)).toBe('About 3 adults are expected in the days shown, most around 18 June.');
+  it('says in words how many, and the days of the middle half as a range', () => {
+    expect(emergenceWords(days)).toBe(
+      'About 3 adults are expected in the days shown, half of them between 18 and 20 June.',
+    );
   });
 
   it('draws one bar a day under an axis that holds the ranges', () => {
-    const html = renderToStaticMarkup(<EmergenceDays days={busyDays(days)} />);
-    expect(html.match(/stage-capped/g)).toHaveLength(4);
+    const html = renderToStaticMarkup(<EmergenceDrawing days={busyDays(days)} asOf="2026-06-16" width={600} />);
+    expect(html.match(/fig-capped/g)).toHaveLength(4);
     expect(html).toContain('>5<');
-    expect(html).toContain('aria-label="About 3 adults');
+    expect(html).toContain('viewBox="0 0 600 198"');
   });
 
   it('draws nothing without days', () => {
-    expect(renderToStaticMarkup(<EmergenceDays days={[]} />)).toBe('');
+    expect(renderToStaticMarkup(<EmergenceDrawing days={[]} asOf="2026-06-16" width={600} />)).toBe('');
   });
 
   it('stands beside a table with the same numbers', () => {

@@ -48,11 +48,12 @@ export function openRecorder(last: readonly Mark[] = []) {
     },
   );
   const now = (): Recorder => {
-    const { press, paint, toggle, jump, skip, unskip, expect, undo, submit, retryUnsaved } = core;
+    const { press, paint, paintAll, toggle, jump, skip, unskip, expect, undo, submit, retryUnsaved } = core;
     return {
       view: core.view.get(),
       press,
       paint,
+      paintAll,
       toggle,
       jump,
       skip,
@@ -78,6 +79,8 @@ export function openDesk(last: readonly Mark[] = []) {
     },
     detail: {},
     setDetail: () => undefined,
+    expected: new Map(),
+    marked: () => undefined,
     askNoCell: () => {
       box.asked += 1;
     },
