@@ -15,7 +15,7 @@ export interface CombAgreement {
 export type Settler = 'reviewer' | 'lead';
 
 /** Counts what two readings have in common. */
-export function agreementOf(pairs: readonly CellPair[]): CombAgreement {
+export function countAgreement(pairs: readonly CellPair[]): CombAgreement {
   const alike = pairs.filter(({ standing }) => standing === 'alike').length;
   const differing = pairs.filter(({ standing }) => standing === 'differs').length;
   const compared = alike + differing;

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { agreementOf, settlerOf } from '@/lib/comb/agreement';
+import { countAgreement, settlerOf } from '@/lib/comb/agreement';
 import { compareCells } from '@/lib/comb/compare-cells';
 import { DEFAULT_REVIEW_SETTINGS, fitsReviewRule } from '@/lib/comb/review-settings';
 import { settleSuggestion } from '@/lib/comb/settle-suggestion';
@@ -18,7 +18,7 @@ describe('two readings laid over each other', () => {
 
   // The programme's worked reading of N12: 33 cells, raw agreement 29/33 = 0.8788, one clash over a parasitised cell.
   it('of N12 agree on 29 of 33 cells with one clash, and go to the lead biologist', () => {
-    const agreement = agreementOf(n12);
+    const agreement = countAgreement(n12);
     expect(agreement).toEqual({ compared: 33, alike: 29, leftOut: 0, clashes: 1 });
     expect((agreement.alike / agreement.compared).toFixed(4)).toBe('0.8788');
     expect(settlerOf(agreement, DEFAULT_REVIEW_SETTINGS)).toBe('lead');
@@ -48,7 +48,7 @@ describe('two readings laid over each other', () => {
     const comb = spiral(count).map((cell) => ({ ...cell, state: 'egg' as const, unsure: false }));
     const pairs = compareCells([...comb].reverse(), comb);
     expect(pairs.map(({ q, r }) => [q, r])).toEqual(spiral(count).map(({ q, r }) => [q, r]));
-    expect(agreementOf(pairs)).toEqual({ compared: count, alike: count, leftOut: 0, clashes: 0 });
+    expect(countAgreement(pairs)).toEqual({ compared: count, alike: count, leftOut: 0, clashes: 0 });
   });
 });
 

@@ -1,6 +1,6 @@
 import 'server-only';
 import { cellKey } from '@/lib/comb/axial';
-import { type CombAgreement, type Settler, agreementOf, settlerOf } from '@/lib/comb/agreement';
+import { type CombAgreement, type Settler, countAgreement, settlerOf } from '@/lib/comb/agreement';
 import { type CellPair, compareCells } from '@/lib/comb/compare-cells';
 import type { ReadCell } from '@/lib/comb/final-cells';
 import type { ReviewSettings } from '@/lib/comb/review-settings';
@@ -49,7 +49,7 @@ export async function comparisons(
       const field = cells.get(idKey(pair.field.id)) ?? [];
       const lab = cells.get(idKey(pair.second.id)) ?? [];
       const pairs = compareCells(field, lab);
-      const agreement = agreementOf(pairs);
+      const agreement = countAgreement(pairs);
       const own = decisions.filter(({ reading_id }) => pair.final !== null && reading_id.equals(pair.final.id));
       const settled = new Map(own.map((row) => [cellKey(row), row]));
       const open = pairs.filter((place) => place.open && !settled.has(cellKey(place)));
