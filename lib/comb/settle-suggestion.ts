@@ -16,7 +16,10 @@ function isEggOrEmpty({ state }: Seen): boolean {
 function eggOrEmpty(field: Seen): SettleSuggestion {
   return field.unsure
     ? { pick: 'lab', rule: 'Egg or empty: the field reader was unsure, so the lab’s view stands.' }
-    : { pick: 'field', rule: 'Egg or empty: the field reader was sure and could tilt the light, so the field’s view stands.' };
+    : {
+        pick: 'field',
+        rule: 'Egg or empty: the field reader was sure and could tilt the light, so the field’s view stands.',
+      };
 }
 
 function bySureness(field: Seen, lab: Seen): SettleSuggestion | null {

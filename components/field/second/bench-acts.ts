@@ -39,7 +39,7 @@ function saying(memory: BenchMemory, words: string): BenchMemory {
 
 /** The mark that marks and digits are about: the one just made, as on the paper sheet, else the current cell's. */
 export function markInHand({ view }: Pick<Recorder, 'view'>, { just }: BenchMemory): RecorderMark | null {
-  return (just && view.marks.get(just)) ?? currentMark(view);
+  return (just === null ? undefined : view.marks.get(just)) ?? currentMark(view);
 }
 
 function align({ view, toggle }: Recorder, wanted: Toggles): void {
@@ -79,7 +79,10 @@ function setInstar(instar: number): Act {
     const inHand = markInHand(recorder, memory);
     if (!inHand) return saying(memory, 'Mark the larva first, then type its instar.');
     if (!LARVA_OF[inHand.state]?.includes(instar)) {
-      return saying(memory, `Cell ${cellNumber(inHand)} is no larva of instar ${instar}: 1 to 3 are small, 4 medium, 5 large.`);
+      return saying(
+        memory,
+        `Cell ${cellNumber(inHand)} is no larva of instar ${instar}: 1 to 3 are small, 4 medium, 5 large.`,
+      );
     }
     markAgain(recorder, inHand, { instar });
     return { ...memory, undone: [], words: null };

@@ -11,7 +11,10 @@ export type BenchCommand =
   | { do: 'mark'; state: CellState }
   | { do: 'toggle'; mark: keyof Toggles }
   | { do: 'instar'; instar: number }
-  | { do: 'undo' | 'redo' | 'no-cell' | 'finish' }
+  | { do: 'undo' }
+  | { do: 'redo' }
+  | { do: 'no-cell' }
+  | { do: 'finish' }
   | { do: 'step'; step: Step }
   | { do: 'neighbour'; way: Neighbour };
 

@@ -140,8 +140,8 @@ export function BenchPad({ bench }: { bench: Bench }): ReactElement {
       <WayKeys bench={bench} />
       <p className="text-sm text-quiet max-md:hidden">
         Arrows go to the cells beside, above and below; with Shift, up and down take the other one. <kbd>[</kbd>{' '}
-        <kbd>]</kbd> <kbd>,</kbd> <kbd>.</kbd> go slanting. Marks and digits typed after a letter belong to that letter’s
-        cell, as on the paper sheet.
+        <kbd>]</kbd> <kbd>,</kbd> <kbd>.</kbd> go slanting. Marks and digits typed after a letter belong to that
+        letter’s cell, as on the paper sheet.
       </p>
     </div>
   );

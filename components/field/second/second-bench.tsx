@@ -50,7 +50,7 @@ function OpenReading({ at, reading, counted }: OpenReadingProps): ReactElement {
   useEffect(() => {
     if (isLoaded) takeCount();
   }, [isLoaded]);
-  if (recorder === undefined) return <LoadingLines />;
+  if (recorder === undefined) return <LoadingLines what="Your reading" />;
   if (recorder === null) {
     return (
       <Notice title="Your reading is still on its way here.">
@@ -66,7 +66,7 @@ function BenchOf({ at, reading }: SecondBenchProps): ReactElement {
   const [begun, setBegun] = useState<{ reading: string; counted: number | null } | null>(null);
   const open = begun?.reading ?? kept ?? reading;
   if (open) return <OpenReading at={at} reading={open} counted={begun?.counted ?? null} />;
-  if (kept === undefined) return <LoadingLines />;
+  if (kept === undefined) return <LoadingLines what="Your reading" />;
   return <StartSecond at={at} onStarted={(id, counted) => setBegun({ reading: id, counted })} />;
 }
 
@@ -76,7 +76,7 @@ function BenchOf({ at, reading }: SecondBenchProps): ReactElement {
  */
 export function SecondBench(props: SecondBenchProps): ReactElement {
   const { view } = useSession();
-  if (view.kind === 'loading') return <LoadingLines />;
+  if (view.kind === 'loading') return <LoadingLines what="Your reading" />;
   if (view.kind === 'signed-out') {
     return (
       <Notice tone="warn" title="This browser does not know you yet.">

@@ -59,7 +59,11 @@ export function StartSecond(props: StartSecondProps): ReactElement {
           </label>
         ))}
       </fieldset>
-      <Field id="second-counted" label="How many cells do you count?" hint="Can stay blank. The walk ends at this number.">
+      <Field
+        id="second-counted"
+        label="How many cells do you count?"
+        hint="Can stay blank. The walk ends at this number."
+      >
         {(control) => (
           <Input
             {...control}

@@ -62,11 +62,7 @@ export async function comparisons(
 }
 
 /** Compares one pair of readings. */
-export async function comparisonOf(
-  scope: TeamScope,
-  pair: ReadingPair,
-  settings: ReviewSettings,
-): Promise<Comparison> {
+export async function comparisonOf(scope: TeamScope, pair: ReadingPair, settings: ReviewSettings): Promise<Comparison> {
   const found = (await comparisons(scope, [pair], settings)).get(idKey(pair.field.id));
   if (!found) throw new Error('a comparison was asked for and not made');
   return found;

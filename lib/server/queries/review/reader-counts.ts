@@ -36,10 +36,7 @@ const HANDED_IN = `
   WHERE team_id = :team AND kind = 'second' AND submitted_at IS NOT NULL`;
 
 /** The people of the lab with their counts, by name. */
-export async function readerCounts(
-  scope: TeamScope,
-  claims: ReadonlyMap<string, ClaimRow>,
-): Promise<ReaderCounts[]> {
+export async function readerCounts(scope: TeamScope, claims: ReadonlyMap<string, ClaimRow>): Promise<ReaderCounts[]> {
   const people = await selectRows<CountRow>(scope, COUNTS);
   const handedIn = await selectRows<{ visit: Buffer; reader: Buffer }>(scope, HANDED_IN);
   const done = new Set(handedIn.map(({ visit, reader }) => `${idKey(visit)} ${idKey(reader)}`));

@@ -32,7 +32,11 @@ export function visitReadings(readings: readonly ReadingRow[], choice: PrimaryCh
     fields,
     primary,
     choice,
-    second: seconds.filter(({ submitted_at }) => submitted_at !== null).sort(bySubmission).at(-1) ?? null,
+    second:
+      seconds
+        .filter(({ submitted_at }) => submitted_at !== null)
+        .sort(bySubmission)
+        .at(-1) ?? null,
     openSeconds: seconds.filter(({ submitted_at }) => submitted_at === null),
     final: readings.find(({ based_on }) => primary !== null && based_on?.equals(primary.id)) ?? null,
   };
