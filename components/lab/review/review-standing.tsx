@@ -62,7 +62,7 @@ export function ReviewStanding(props: ReviewStandingProps): ReactElement {
           <p>Nothing is overwritten: both originals and every version are kept.</p>
         </Notice>
       )}
-      {!isLocked && compared && <SettlerNotice {...props} compared={compared} />}
+      {compared && <SettlerNotice {...props} compared={compared} />}
       {!compared && (
         <Notice className="mb-4">
           <p>There is no second reading to compare with yet.</p>
