@@ -49,7 +49,7 @@ function ChooseForm({
   const [reading, setReading] = useState(primary);
   const [reason, setReason] = useState('');
   const [wrong, setWrong] = useState<string | null>(null);
-  const { send, isSending, trouble } = useAct(`/api/visits/${visit}/primary`, () => setReason(''));
+  const { send, isSending, trouble } = useAct(`/api/visits/${visit}/primary`, { done: () => setReason('') });
   const submit = (event: FormEvent): void => {
     event.preventDefault();
     const problem = reasonTrouble(reason);

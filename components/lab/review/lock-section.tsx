@@ -66,7 +66,7 @@ function AmendKey({ reading, version }: { reading: string; version: number }): R
   const [isOpen, setOpen] = useState(false);
   const [reason, setReason] = useState('');
   const [wrong, setWrong] = useState<string | null>(null);
-  const act = useAct(`/api/readings/${reading}/amend`, () => setOpen(false));
+  const act = useAct(`/api/readings/${reading}/amend`, { done: () => setOpen(false) });
   const amend = (): void => {
     const problem = reasonTrouble(reason);
     setWrong(problem);

@@ -18,7 +18,9 @@ function Trouble({ words }: { words: string | null }): ReactElement {
 /** Takes a second reading on and opens its bench. */
 function ClaimKey({ visit, code }: { visit: string; code: string }): ReactElement {
   const router = useRouter();
-  const { send, isSending, trouble } = useAct(`/api/visits/${visit}/claim`, () => router.push(`/review/${visit}/read`));
+  const { send, isSending, trouble } = useAct(`/api/visits/${visit}/claim`, {
+    done: () => router.push(`/review/${visit}/read`),
+  });
   return (
     <>
       <Button onClick={() => send({})} disabled={isSending} aria-label={`Read ${code} a second time`}>

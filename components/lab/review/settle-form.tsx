@@ -4,7 +4,6 @@ import { type FormEvent, type ReactElement, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { TextArea } from '@/components/ui/input';
-import { Notice } from '@/components/ui/notice';
 import { CELL_STATES, type CellState, STATE_WORDS, isCellState } from '@/lib/comb/states';
 import { cellNumber } from '@/lib/comb/walk';
 import type { PairRow } from './review-shapes';
@@ -18,6 +17,8 @@ interface SettleFormProps {
   /** Number of the last decision the person has before them. */
   seen: number;
   onDone: () => void;
+  /** The office did not take it; the form may be gone by the time the person reads why. */
+  onRefused: (words: string) => void;
 }
 
 interface DraftProps {
@@ -92,10 +93,10 @@ function Suggestion({ pair, change }: Omit<DraftProps, 'draft'>): ReactElement {
 }
 
 /** One cell that has to be decided: whose view, and why. Each is stored by itself. */
-export function SettleForm({ reading, pair, seen, onDone }: SettleFormProps): ReactElement {
+export function SettleForm({ reading, pair, seen, onDone, onRefused }: SettleFormProps): ReactElement {
   const [draft, setDraft] = useState(EMPTY_DRAFT);
   const [missing, setMissing] = useState<string | null>(null);
-  const { send, isSending, trouble } = useAct(`/api/readings/${reading}/settle`, onDone);
+  const { send, isSending } = useAct(`/api/readings/${reading}/settle`, { done: onDone, refused: onRefused });
   const change = (part: Partial<SettleDraft>): void => setDraft((before) => ({ ...before, ...part }));
   const submit = (event: FormEvent): void => {
     event.preventDefault();
@@ -119,11 +120,6 @@ export function SettleForm({ reading, pair, seen, onDone }: SettleFormProps): Re
           />
         )}
       </Field>
-      {trouble && (
-        <Notice tone="stop" live="assertive">
-          <p>{trouble}</p>
-        </Notice>
-      )}
       <Button type="submit" disabled={isSending} className="self-start">
         {isSending ? 'Settling …' : `Settle cell ${number}`}
       </Button>

@@ -3,6 +3,7 @@
 import { type ReactElement, useState } from 'react';
 import { CellGlyph } from '@/components/comb/cell-glyph';
 import { Button } from '@/components/ui/button';
+import { Notice } from '@/components/ui/notice';
 import { momentWords } from '@/components/ui/date-words';
 import { cellKey } from '@/lib/comb/axial';
 import { STATE_WORDS } from '@/lib/comb/states';
@@ -55,6 +56,7 @@ function Decision({ settled, zone, year }: { settled: SettledCellView; zone: str
 
 function CellItem({ pair, ...list }: Omit<SettleListProps, 'pairs'> & { pair: PairRow }): ReactElement {
   const [again, setAgain] = useState(false);
+  const [refused, setRefused] = useState<string | null>(null);
   const { settled } = pair;
   const days = list.apart[cellKey(pair)];
   const asks = list.settles && (settled === null || again);
@@ -69,6 +71,11 @@ function CellItem({ pair, ...list }: Omit<SettleListProps, 'pairs'> & { pair: Pa
           <span className="text-sm text-quiet">laying dates {daysWords(Math.abs(days))} apart</span>
         )}
       </p>
+      {refused && (
+        <Notice tone="stop" live="assertive" className="mt-1">
+          <p>{refused}</p>
+        </Notice>
+      )}
       {settled && <Decision settled={settled} zone={list.zone} year={list.year} />}
       {!settled && !list.settles && <p className="text-quiet">not settled yet</p>}
       {list.settles && settled && !again && (
@@ -76,7 +83,18 @@ function CellItem({ pair, ...list }: Omit<SettleListProps, 'pairs'> & { pair: Pa
           Settle cell {cellNumber(pair)} again
         </Button>
       )}
-      {asks && <SettleForm reading={list.reading} pair={pair} seen={list.seen} onDone={() => setAgain(false)} />}
+      {asks && (
+        <SettleForm
+          reading={list.reading}
+          pair={pair}
+          seen={list.seen}
+          onDone={() => {
+            setAgain(false);
+            setRefused(null);
+          }}
+          onRefused={setRefused}
+        />
+      )}
     </li>
   );
 }

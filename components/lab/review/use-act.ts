@@ -16,14 +16,16 @@ export interface ActHandle {
  * Sends an act and then shows the page fresh from the office, whether it was taken or not: when it was not, somebody
  * else has usually changed something.
  *
- * @param done called once the office has stored it.
+ * @param on `done` is called once the office has stored it, `refused` when it has not, with the reason in words: for
+ * forms that are gone once the page is fresh.
  */
-export function useAct(path: string, done: () => void = () => {}): ActHandle {
+export function useAct(path: string, on: { done?: () => void; refused?: (words: string) => void } = {}): ActHandle {
   const router = useRouter();
   const mutation = useMutation({
     mutationFn: (body: unknown) => postAct(path, body, fetch),
     onSuccess: (result) => {
-      if (result.ok) done();
+      if (result.ok) on.done?.();
+      else on.refused?.(result.words);
       router.refresh();
     },
   });

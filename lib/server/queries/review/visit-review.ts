@@ -1,6 +1,5 @@
 import 'server-only';
-import type { Settler } from '@/lib/comb/agreement';
-import type { CombAgreement } from '@/lib/comb/agreement';
+import type { CombAgreement, Settler } from '@/lib/comb/agreement';
 import { cellKey } from '@/lib/comb/axial';
 import type { CellPair } from '@/lib/comb/compare-cells';
 import type { ReadCell } from '@/lib/comb/final-cells';
