@@ -26,6 +26,9 @@ import { defineRetraction } from './retraction';
 import { defineSettlement } from './settlement';
 import { defineOutcome } from './outcome';
 import { defineEstimate } from './estimate';
+import { defineReviewClaim } from './review-claim';
+import { definePrimaryChoice } from './primary-choice';
+import { defineReadingLock } from './reading-lock';
 
 /**
  * Defines every model on a connection and ties them together.
@@ -60,6 +63,9 @@ export function defineModels(sequelize: Sequelize) {
     Settlement: defineSettlement(sequelize),
     Outcome: defineOutcome(sequelize),
     Estimate: defineEstimate(sequelize),
+    ReviewClaim: defineReviewClaim(sequelize),
+    PrimaryChoice: definePrimaryChoice(sequelize),
+    ReadingLock: defineReadingLock(sequelize),
   };
 }
 

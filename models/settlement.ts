@@ -12,6 +12,7 @@ export class Settlement extends Model<InferAttributes<Settlement>, InferCreation
   declare state: string;
   declare reason: string;
   declare mark_op_id: Buffer | null;
+  declare pick: string | null;
   declare actor_id: Buffer;
   declare created_at: Date;
 }
@@ -31,6 +32,7 @@ export function defineSettlement(sequelize: Sequelize): typeof Settlement {
       state: { type: DataTypes.STRING(32), allowNull: false },
       reason: { type: DataTypes.TEXT('medium'), allowNull: false },
       mark_op_id: { type: 'BINARY(16)', allowNull: true },
+      pick: { type: DataTypes.STRING(32), allowNull: true },
       actor_id: { type: 'BINARY(16)', allowNull: false },
       created_at: { type: DataTypes.DATE(3), allowNull: false },
     },

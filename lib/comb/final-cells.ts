@@ -1,5 +1,6 @@
 import { type Axial, cellKey } from './axial';
 import type { Mark, MarkContent } from './mark';
+import type { SettlePick } from './settle-pick';
 import type { CellState } from './states';
 import { byWalkOrder } from './walk';
 
@@ -10,6 +11,8 @@ export interface CellSettlement extends Axial {
   position: number;
   /** The mark it replaced; null when nobody had marked the cell. */
   markOpId: string | null;
+  /** Whose view it takes; null for a correction without a second reading. */
+  pick?: SettlePick | null;
 }
 
 /** One cell of a reading as it stands: marked by the observer, or settled. */
@@ -38,13 +41,14 @@ const UNMARKED = { nectar: false, unsure: false, reused: false, scrap: false, in
 
 /**
  * A cell after a decision. Nectar, reuse, prey and the note stay as marked; doubt and instar spoke about the old
- * state, so they go when the state changes.
+ * state, so they go when the state changes. A cell that nobody can tell is unsure.
  */
 function settledCell(settlement: CellSettlement, before: ReadCell | undefined): ReadCell {
-  const { q, r, state, markOpId } = settlement;
+  const { q, r, state, markOpId, pick } = settlement;
   const marked = before ?? { ...UNMARKED, opId: null, at: null, state: null };
   const kept = marked.state === state ? {} : { unsure: false, instar: null };
-  return { ...marked, ...kept, q, r, state, settledFrom: markOpId, settled: true };
+  const doubt = pick === 'unsure' ? { unsure: true } : {};
+  return { ...marked, ...kept, ...doubt, q, r, state, settledFrom: markOpId, settled: true };
 }
 
 /**
@@ -52,14 +56,15 @@ function settledCell(settlement: CellSettlement, before: ReadCell | undefined): 
  *
  * @param live the live marks of the reading it is based on.
  * @param settlements all decisions that count, any order.
- * @returns one cell an address, in walk order.
+ * @returns one cell an address, in walk order; a cell that was decided not to be there is left out.
  */
 export function finalCells(live: readonly Mark[], settlements: readonly CellSettlement[]): ReadCell[] {
   const cells = new Map(live.map((mark) => [cellKey(mark), markedCell(mark)]));
   const base = new Map(cells);
   for (const settlement of [...settlements].sort((a, b) => a.position - b.position)) {
     const key = cellKey(settlement);
-    cells.set(key, settledCell(settlement, base.get(key)));
+    if (settlement.pick === 'none') cells.delete(key);
+    else cells.set(key, settledCell(settlement, base.get(key)));
   }
   return [...cells.values()].sort(byWalkOrder);
 }

@@ -49,6 +49,7 @@ export const PULL_ANSWER = z.object({
   rows: z.array(pullRow),
   next: z.string(),
   more: z.boolean(),
+  held: z.array(z.object({ visit: z.string(), cursor: z.string() })).optional(),
 });
 
 /** Answer to "have you got these?". */

@@ -4,6 +4,7 @@ import { PULL_ANSWER } from './answer-shapes';
 import { applyPage } from './apply-page';
 import { askOffice } from './ask-office';
 import { type DrainPorts, type StepEnd, endOf } from './drain-ports';
+import { noteHeld } from './held-visits';
 import type { HeldLease } from './lease';
 import { type NetworkRequest, REQUEST_TIMEOUT_MS } from './network';
 import type { Change, Snapshot, StoreMeta } from './store';
@@ -32,7 +33,10 @@ async function pullPage(ports: DrainPorts, meta: StoreMeta): Promise<{ end: Step
   const answer = verdict.value;
   const page = { start: { epoch: meta.epoch, cursor: meta.cursor }, answer, now, skewMs };
   const keys = answer.rows.map((row) => row.opId);
-  if (await ports.store.transact(keys, applyPage(page))) return { end: null, more: answer.more };
+  if (await ports.store.transact(keys, applyPage(page))) {
+    const goesBack = await ports.store.transact([], noteHeld(answer));
+    return { end: null, more: answer.more || goesBack };
+  }
   return { end: { kind: 'again', trouble: 'no-real-connection', afterMs: null }, more: false };
 }
 

@@ -1,3 +1,4 @@
+import type { HeldVisit } from '@/lib/protocol/pull';
 import type { Lease } from './lease-row';
 import type { LocalOp } from './local-op';
 import type { RecorderPlace } from './recorder-view';
@@ -30,6 +31,8 @@ export interface StoreMeta {
   resync: boolean;
   /** Epoch milliseconds when the office last confirmed that nothing waits. */
   lastSync: number | null;
+  /** Visits of which the office held something back at the last pull; missing before the first. */
+  held?: readonly HeldVisit[];
 }
 
 /** What a transaction has read. `meta` is null when the storage was cleared. */

@@ -12,6 +12,13 @@ export interface PullRow extends Op {
   flags: string[];
 }
 
+/** A visit whose other readings are kept from a second reader until theirs is handed in. */
+export interface HeldVisit {
+  visit: string;
+  /** The cursor to read on from once the visit is no longer held. */
+  cursor: string;
+}
+
 /** Answer of `GET /api/sync/v1/pull`. */
 export interface PullResponse {
   protocol: number;
@@ -22,6 +29,8 @@ export interface PullResponse {
   /** The cursor after these rows: `"<epoch>:<seq>"`. */
   next: string;
   more: boolean;
+  /** Left out by an office that holds nothing back. */
+  held?: HeldVisit[];
 }
 
 /** Writes a pull cursor. */

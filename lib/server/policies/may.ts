@@ -19,6 +19,8 @@ const RIGHTS = {
   'readings.settle': SETTLERS,
   'readings.lock': SETTLERS,
   'readings.amend': SETTLERS,
+  'review.read': SETTLERS,
+  'review.work': SETTLERS,
   'settings.read': EVERYONE,
   'settings.write': ['biologist'],
   'people.read': ['reviewer', 'biologist', 'coordinator'],

@@ -13,6 +13,7 @@ import { idKey } from './id-key';
 import { type NestRow, nestById, visitsOfNests } from './nest-rows';
 import { readingCells } from './reading-cells';
 import { readingsOfNests } from './reading-rows';
+import { chosenReadings } from './review/primary-choices';
 import { type TeamScope, teamScope } from './team-scope';
 import { nestRecord } from './temperature/nest-record';
 
@@ -41,8 +42,12 @@ export async function broodReadings(scope: TeamScope, nest: Buffer): Promise<Bro
   const visible = (await readingsOfNests(scope, [nest])).filter((reading) => !isHidden(reading, scope, blind));
   const byVisit = groupBy(visible, (reading) => idKey(reading.visit_id));
   const visits = (await visitsOfNests(scope, [nest])).filter((visit) => visit.archived_at === null);
+  const chosen = await chosenReadings(
+    scope,
+    visits.map((visit) => visit.id),
+  );
   const censuses = visits.flatMap((visit) => {
-    const census = censusOf(byVisit.get(idKey(visit.id)) ?? []);
+    const census = censusOf(byVisit.get(idKey(visit.id)) ?? [], chosen);
     return census ? [{ census, at: visit.started_at.getTime() }] : [];
   });
   const cells = await readingCells(

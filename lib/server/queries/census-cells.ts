@@ -6,6 +6,7 @@ import { idKey } from './id-key';
 import { type VisitRow, visitsOfNests } from './nest-rows';
 import { readingCells } from './reading-cells';
 import { type ReadingRow, readingsOfNests } from './reading-rows';
+import { chosenReadings } from './review/primary-choices';
 import type { TeamScope } from './team-scope';
 
 /** What the list says about one nest beside its own row. */
@@ -25,8 +26,12 @@ function latestReadings(visits: readonly VisitRow[], byVisit: ReadonlyMap<string
 }
 
 /** The census of a visit unless it is kept from the person who asks. */
-function shownCensus(readings: readonly ReadingRow[], scope: TeamScope, blind: BlindVisits): ReadingRow | null {
-  const census = censusOf(readings);
+function shownCensus(
+  readings: readonly ReadingRow[],
+  scope: TeamScope,
+  { blind, chosen }: { blind: BlindVisits; chosen: ReadonlySet<string> },
+): ReadingRow | null {
+  const census = censusOf(readings, chosen);
   return census && !isHidden(census, scope, blind) ? census : null;
 }
 
@@ -36,10 +41,14 @@ export async function nestWork(scope: TeamScope, nests: readonly Buffer[]): Prom
   const visitsByNest = groupBy(visits, (visit) => idKey(visit.nest_id));
   const byVisit = groupBy(await readingsOfNests(scope, nests), (reading) => idKey(reading.visit_id));
   const blind = await blindVisits(scope);
+  const chosen = await chosenReadings(
+    scope,
+    visits.map((visit) => visit.id),
+  );
   const work = nests.map((nest) => {
     const own = visitsByNest.get(idKey(nest)) ?? [];
     const readings = latestReadings(own, byVisit);
-    return { nest, visits: own, readings, census: shownCensus(readings, scope, blind) };
+    return { nest, visits: own, readings, census: shownCensus(readings, scope, { blind, chosen }) };
   });
   const cells = await readingCells(
     scope,

@@ -1,6 +1,7 @@
 import 'server-only';
 import type { InferAttributes } from 'sequelize';
 import { type CellSettlement, type ReadCell, finalCells, markedCells } from '@/lib/comb/final-cells';
+import { isSettlePick } from '@/lib/comb/settle-pick';
 import { groupBy } from '@/lib/kit/group-by';
 import { fromBinaryOrNull } from '@/lib/server/db/uuid-binary';
 import type { Settlement } from '@/models/settlement';
@@ -37,8 +38,9 @@ export async function settlementsOf(scope: TeamScope, finals: readonly Buffer[])
   });
 }
 
-function cellSettlement({ q, r, state, position, mark_op_id }: SettlementRow): CellSettlement {
-  return { q, r, state: storedState(state), position, markOpId: fromBinaryOrNull(mark_op_id) };
+function cellSettlement({ q, r, state, position, mark_op_id, pick }: SettlementRow): CellSettlement {
+  const taken = isSettlePick(pick) ? pick : null;
+  return { q, r, state: storedState(state), position, markOpId: fromBinaryOrNull(mark_op_id), pick: taken };
 }
 
 /** The cells of one reading from the history of its source. */

@@ -48,8 +48,8 @@ export interface ReadingReview {
   amendments: Amendment[];
 }
 
-/** Did anything come to the source after the place in the log that the final reading stands on? */
-async function isStale({ team, db, transaction }: TeamScope, final: ReadingRow): Promise<boolean> {
+/** Did anything come to the source after the place in the log that the final reading stands on? Nothing moves by it. */
+export async function isStale({ team, db, transaction }: TeamScope, final: ReadingRow): Promise<boolean> {
   const later = { team_id: team, reading_id: sourceId(final), seq: { [Op.gt]: final.base_seq ?? 0 } };
   const marks = await db.models.Mark.count({ where: later, transaction });
   return marks > 0 || (await db.models.Retraction.count({ where: later, transaction })) > 0;

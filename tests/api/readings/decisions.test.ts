@@ -248,7 +248,7 @@ describe('lock and amend', () => {
     }
   });
 
-  it('makes one final reading when two people decide at the same moment', async () => {
+  it('takes one of three people who decide at the same moment, and tells the others', async () => {
     const { id } = await fieldReading();
     const cells = (state: string) => [{ q: 0, r: 0, state }];
     const answers = await Promise.all([
@@ -256,10 +256,14 @@ describe('lock and amend', () => {
       settle(team.members.biologist, id, cells('medium')),
       settle(team.members.reviewer2, id, cells('large')),
     ]);
-    const finals = await Promise.all(answers.map(decided));
-    expect(new Set(finals.map(({ reading }) => reading)).size).toBe(1);
+    expect(answers.map(({ status }) => status).sort()).toEqual([200, 409, 409]);
+    const refused = await Promise.all(answers.filter(({ status }) => status === 409).map(problemOf));
+    expect(refused).toEqual([
+      [409, 'settled-meanwhile'],
+      [409, 'settled-meanwhile'],
+    ]);
     const review = await readingReview(await memberContext(team.teamId, team.members.reviewer.userId), id);
-    expect(review.settlements).toHaveLength(3);
+    expect(review.settlements).toHaveLength(1);
   });
 });
 

@@ -39,6 +39,20 @@ function decide(body: object, status: number): MethodExpectation {
   };
 }
 
+/** Something about the review of one visit. @param statuses of the request about an own visit; none to leave it out. */
+function ofVisit(body: object, statuses: number[]): MethodExpectation {
+  const about = (id: string): ApiCall => ({ params: { id }, body });
+  return {
+    may: SETTLERS,
+    own: ({ tenant: { only } }) => [
+      ...statuses.map((status) => ({ name: 'own', call: about(only.visit), status })),
+      { name: 'malformed id', call: about('..'), status: 404 },
+      { name: 'unknown member', call: { ...about(only.visit), body: { ...body, teamId: v7() } }, status: 400 },
+    ],
+    pairs: ({ other }) => [{ name: 'id', foreign: about(other.only.visit), unknown: about(UNKNOWN), status: 404 }],
+  };
+}
+
 /** Headers of the asker's enrolled phone. */
 function phone({ tenant, member }: Asker): ApiCall {
   return { headers: { 'x-device': tenant.devices.get(member.userId) ?? '' } };
@@ -112,6 +126,26 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
   'readings/[id]/lock/route.ts': {
     load: () => import('@/app/api/readings/[id]/lock/route'),
     methods: { POST: { ...decide({}, 200), own: lockOnce } },
+  },
+  'readings/[id]/accept/route.ts': {
+    load: () => import('@/app/api/readings/[id]/accept/route'),
+    methods: { POST: decide({}, 409) },
+  },
+  'review/route.ts': {
+    load: () => import('@/app/api/review/route'),
+    methods: { GET: { may: SETTLERS, own: () => [{ name: 'the queue', call: {}, status: 200 }] } },
+  },
+  'visits/[id]/claim/route.ts': {
+    load: () => import('@/app/api/visits/[id]/claim/route'),
+    methods: { POST: { ...ofVisit({}, []), own: claimOnce } },
+  },
+  'visits/[id]/release/route.ts': {
+    load: () => import('@/app/api/visits/[id]/release/route'),
+    methods: { POST: ofVisit({}, [409]) },
+  },
+  'visits/[id]/primary/route.ts': {
+    load: () => import('@/app/api/visits/[id]/primary/route'),
+    methods: { POST: ofVisit({ reading: UNKNOWN, reason: 'By the light.' }, [404]) },
   },
   'export/[file]/route.ts': {
     load: () => import('@/app/api/export/[file]/route'),
@@ -260,6 +294,14 @@ function lockOnce({ tenant: { shared, only } }: Asker): ReturnType<MethodExpecta
     { name: 'malformed id', call: { params: { id: '..' }, body: {} }, status: 404 },
     { name: 'no body', call: { params: { id: only.reading }, body: '' }, status: 400 },
     { name: 'unknown member', call: { params: { id: shared.reading }, body: { version: 1 } }, status: 400 },
+  ];
+}
+
+/** A claim blinds the person for every later question, so none is made here. */
+function claimOnce({ tenant: { only } }: Asker): ReturnType<MethodExpectation['own']> {
+  return [
+    { name: 'malformed id', call: { params: { id: '..' }, body: {} }, status: 404 },
+    { name: 'unknown member', call: { params: { id: only.visit }, body: { reader: UNKNOWN } }, status: 400 },
   ];
 }
 

@@ -12,6 +12,7 @@ export interface SentCell {
   r: unknown;
   state: unknown;
   reason?: unknown;
+  pick?: unknown;
 }
 
 const BECAUSE = 'The photo shows it.';

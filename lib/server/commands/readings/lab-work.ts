@@ -22,7 +22,7 @@ export interface LabWork {
 
 /** What a command did to a final reading. */
 export interface LabDecision {
-  action: 'reading.settle' | 'reading.lock' | 'reading.amend';
+  action: 'reading.settle' | 'reading.accept' | 'reading.lock' | 'reading.amend';
   final: ReadingRow;
   version: number;
   /** Beside the reading it is based on and the version. */

@@ -9,6 +9,8 @@ import { storedOp } from '@/lib/server/db/stored-op';
 import { fromBinary, toBinary } from '@/lib/server/db/uuid-binary';
 import { HttpProblem } from '@/lib/server/http/problem';
 import { clampedInteger } from '@/lib/server/http/query-params';
+import { type HeldReadings, heldReadings, isHeld } from '@/lib/server/queries/held-readings';
+import { teamScope } from '@/lib/server/queries/team-scope';
 import { logEnds } from './log-ends';
 import { epochMismatch, storedEpoch } from './server-epoch';
 
@@ -27,25 +29,42 @@ function startOf(cursor: string | undefined, epoch: number): number {
   return parsed.seq;
 }
 
-async function rowsAfter(ctx: TeamContext, start: number, limit: number): Promise<PullRow[]> {
+/** A place in the log, and what the person who asks gets to see there. */
+interface LogPlace {
+  seq: number;
+  /** Null where it is kept from a second reader for now. */
+  row: PullRow | null;
+}
+
+async function placesAfter(
+  ctx: TeamContext,
+  { start, limit }: { start: number; limit: number },
+  held: HeldReadings,
+): Promise<LogPlace[]> {
   const rows = await database().models.Op.findAll({
-    attributes: ['seq', 'op', 'actor_id', 'flags', 'received_at'],
+    attributes: ['seq', 'op', 'actor_id', 'flags', 'received_at', 'kind', 'reading_id'],
     where: { team_id: toBinary(ctx.teamId), seq: { [Op.gt]: start } },
     order: [['seq', 'ASC']],
     limit,
   });
   return rows.map((row) => ({
-    ...storedOp(row.op),
     seq: Number(row.seq),
-    actor: fromBinary(row.actor_id),
-    receivedAt: row.received_at.toISOString(),
-    flags: parseFlags(row.flags),
+    row: isHeld(held, row.kind, row.reading_id)
+      ? null
+      : {
+          ...storedOp(row.op),
+          seq: Number(row.seq),
+          actor: fromBinary(row.actor_id),
+          receivedAt: row.received_at.toISOString(),
+          flags: parseFlags(row.flags),
+        },
   }));
 }
 
 /**
  * One page of the team's log, in the order of commit. The order has no gaps and follows the commits, so a phone that
- * remembers `next` misses nothing.
+ * remembers `next` misses nothing. What another person read at a visit where the asker still has to read a second time
+ * is left out, and `held` names the place to go back to once that visit is no longer in it.
  *
  * @throws HttpProblem `cursor`, `limit`, or `epoch-mismatch` for a cursor from before a restore.
  */
@@ -54,10 +73,19 @@ export async function pullPage(ctx: TeamContext, { cursor, limit }: PullQuery, n
   const epoch = await storedEpoch();
   const start = startOf(cursor, epoch);
   const { seq, safeSeq } = await logEnds(ctx);
-  const found = await rowsAfter(ctx, start, size + 1);
-  const rows = found.slice(0, size);
+  const held = await heldReadings(teamScope(ctx));
+  const found = await placesAfter(ctx, { start, limit: size + 1 }, held);
+  const places = found.slice(0, size);
   // A cursor from beyond the end is brought back to it: reading something twice is harmless, skipping it is not.
-  const next = formatCursor(epoch, rows.at(-1)?.seq ?? Math.min(start, seq));
-  const serverTime = new Date(nowMs).toISOString();
-  return { protocol: PROTOCOL, epoch, serverTime, safeSeq, rows, next, more: found.length > size };
+  const next = formatCursor(epoch, places.at(-1)?.seq ?? Math.min(start, seq));
+  return {
+    protocol: PROTOCOL,
+    epoch,
+    serverTime: new Date(nowMs).toISOString(),
+    safeSeq,
+    rows: places.flatMap(({ row }) => row ?? []),
+    next,
+    more: found.length > size,
+    held: held.visits.map(({ visit, seq: from }) => ({ visit, cursor: formatCursor(epoch, from) })),
+  };
 }

@@ -16,6 +16,8 @@ const TABLE: Record<Action, string> = {
   'readings.settle': '-yy--',
   'readings.lock': '-yy--',
   'readings.amend': '-yy--',
+  'review.read': '-yy--',
+  'review.work': '-yy--',
   'settings.read': 'yyyyy',
   'settings.write': '--y--',
   'people.read': '-yyy-',

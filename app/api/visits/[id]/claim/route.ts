@@ -1,0 +1,13 @@
+import { CLAIM_INPUT, claimVisit } from '@/lib/server/commands/review/claim-visit';
+import { methods } from '@/lib/server/http/methods';
+import { route } from '@/lib/server/http/route';
+
+export const dynamic = 'force-dynamic';
+
+export const { GET, HEAD, POST, PUT, PATCH, DELETE, OPTIONS } = methods({
+  POST: route({
+    action: 'review.work',
+    input: CLAIM_INPUT,
+    handler: ({ ctx, path, clock }) => claimVisit(ctx, path.id ?? '', clock.now()),
+  }),
+});
