@@ -22,6 +22,7 @@ import { defineRetraction } from './retraction';
 import { defineSettlement } from './settlement';
 import { defineOutcome } from './outcome';
 import { defineEstimate } from './estimate';
+import { defineReadingSample } from './reading-sample';
 
 /**
  * Defines every model on a connection and ties them together.
@@ -52,6 +53,7 @@ export function defineModels(sequelize: Sequelize) {
     Settlement: defineSettlement(sequelize),
     Outcome: defineOutcome(sequelize),
     Estimate: defineEstimate(sequelize),
+    ReadingSample: defineReadingSample(sequelize),
   };
 }
 
