@@ -13,8 +13,9 @@ export interface SignedInPerson {
 }
 
 /** The parts of the lab side; a part whose rights a role lacks is not offered. */
-const PARTS: readonly { href: string; title: string; not?: RoleName }[] = [
+const PARTS: readonly { href: string; title: string; not?: RoleName; only?: readonly RoleName[] }[] = [
   { href: '/nests', title: 'Nests' },
+  { href: '/agreement', title: 'Agreement', only: ['technician', 'reviewer', 'biologist'] },
   { href: '/hosts', title: 'Hosts', not: 'researcher' },
   { href: '/downloads', title: 'Downloads', not: 'technician' },
 ];
@@ -30,7 +31,7 @@ export function LabHeader({ person }: { person: SignedInPerson }): ReactElement 
           Undereave
         </Link>
         <nav aria-label="Parts" className="order-last flex w-full flex-wrap gap-x-6 md:order-none md:w-auto">
-          {PARTS.filter((part) => part.not !== role).map(({ href, title }) => (
+          {PARTS.filter((part) => part.not !== role && (part.only?.includes(role) ?? true)).map(({ href, title }) => (
             <NavLink key={href} href={href}>
               {title}
             </NavLink>

@@ -10,13 +10,16 @@ import { zipPieces } from './zip-pieces';
 /** Its name in the address. */
 export const ZIP_NAME = 'everything.zip';
 
+const DAY_MS = 86_400_000;
+
 /** Every file of the team, dictionary included, as one archive of one moment. */
 export function zipResponse(
   ctx: TeamContext,
   { query, requestId, nowMs }: ExportRequest,
   snapshot: Snapshot,
 ): Response {
-  const pieces = zipPieces(EXPORT_FILES, { ctx, scope: snapshot.scope, ...query }, nowMs);
+  // To the day, so that asking twice for unchanged data gives the same bytes.
+  const pieces = zipPieces(EXPORT_FILES, { ctx, scope: snapshot.scope, ...query }, nowMs - (nowMs % DAY_MS));
   const stream = byteStream(pieces, async (error) => {
     if (error) log({ event: 'export-failed', requestId, ...describeError(error) });
     await snapshot.close();
