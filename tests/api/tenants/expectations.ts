@@ -187,6 +187,19 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
       },
     },
   },
+  'samples/route.ts': {
+    load: () => import('@/app/api/samples/route'),
+    methods: {
+      POST: {
+        may: SETTLERS,
+        own: () => [
+          { name: 'a month that is over', call: { body: { month: '2025-06' } }, status: 200 },
+          { name: 'a month to come', call: { body: { month: '2999-01' } }, status: 400 },
+          { name: 'unknown member', call: { body: { month: '2025-06', teamId: v7() } }, status: 400 },
+        ],
+      },
+    },
+  },
   'hosts/route.ts': {
     load: () => import('@/app/api/hosts/route'),
     methods: {
