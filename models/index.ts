@@ -29,6 +29,7 @@ import { defineEstimate } from './estimate';
 import { defineReviewClaim } from './review-claim';
 import { definePrimaryChoice } from './primary-choice';
 import { defineReadingLock } from './reading-lock';
+import { defineReadingSample } from './reading-sample';
 
 /**
  * Defines every model on a connection and ties them together.
@@ -66,6 +67,7 @@ export function defineModels(sequelize: Sequelize) {
     ReviewClaim: defineReviewClaim(sequelize),
     PrimaryChoice: definePrimaryChoice(sequelize),
     ReadingLock: defineReadingLock(sequelize),
+    ReadingSample: defineReadingSample(sequelize),
   };
 }
 

@@ -36,10 +36,28 @@ export const DOWNLOAD_FILES: readonly DownloadFile[] = [
     narrowed: true,
   },
   {
+    name: 'settlements.csv',
+    title: 'Settlements',
+    holds: 'One row a decision about a cell: both states before it, who decided, and why.',
+    narrowed: true,
+  },
+  {
+    name: 'agreement.csv',
+    title: 'Agreement',
+    holds: 'One row a comparison of two readings of a comb: raw agreement, kappa, alpha, cells left out.',
+    narrowed: true,
+  },
+  {
     name: 'dictionary.csv',
     title: 'Dictionary',
     holds: 'Every column of every file: unit, type, allowed values, what a blank means.',
     narrowed: false,
+  },
+  {
+    name: 'everything.zip',
+    title: 'Everything',
+    holds: 'All of these files of one moment in one archive, the dictionary included.',
+    narrowed: true,
   },
 ];
 

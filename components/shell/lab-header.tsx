@@ -16,6 +16,7 @@ export interface SignedInPerson {
 const PARTS: readonly { href: string; title: string; not?: RoleName; only?: readonly RoleName[] }[] = [
   { href: '/nests', title: 'Nests' },
   { href: '/review', title: 'Review', only: ['reviewer', 'biologist'] },
+  { href: '/agreement', title: 'Agreement', only: ['technician', 'reviewer', 'biologist'] },
   { href: '/hosts', title: 'Hosts', not: 'researcher' },
   { href: '/downloads', title: 'Downloads', not: 'technician' },
   { href: '/settings', title: 'Settings' },
@@ -32,7 +33,7 @@ export function LabHeader({ person }: { person: SignedInPerson }): ReactElement 
           Undereave
         </Link>
         <nav aria-label="Parts" className="order-last flex w-full flex-wrap gap-x-6 md:order-none md:w-auto">
-          {PARTS.filter(({ not, only = [role] }) => not !== role && only.includes(role)).map(({ href, title }) => (
+          {PARTS.filter((part) => part.not !== role && (part.only?.includes(role) ?? true)).map(({ href, title }) => (
             <NavLink key={href} href={href}>
               {title}
             </NavLink>

@@ -1,6 +1,8 @@
+import { AGREEMENT_FILE } from './agreement-file';
 import { CELLS_FILE } from './cells-file';
 import type { CsvColumn, CsvFile } from './column';
 import { NESTS_FILE } from './nests-file';
+import { SETTLEMENTS_FILE } from './settlements-file';
 import { FIRST_VERSION } from './shared-columns';
 import { TALLIES_FILE } from './tallies-file';
 import { VISITS_FILE } from './visits-file';
@@ -67,6 +69,8 @@ export function dictionaryRows(): DictionaryRow[] {
     ...describe(VISITS_FILE),
     ...describe(TALLIES_FILE),
     ...describe(CELLS_FILE),
+    ...describe(SETTLEMENTS_FILE),
+    ...describe(AGREEMENT_FILE),
     ...describe(DICTIONARY_FILE),
   ];
 }

@@ -1,5 +1,4 @@
-import type { Random } from '@/lib/kit/random';
-import { bootstrapInterval } from './bootstrap-interval';
+import { type Resampling, bootstrapInterval } from './bootstrap-interval';
 import type { ConfusionTable } from './confusion-table';
 import type { Interval } from './interval';
 import { normalInterval } from './normal-interval';
@@ -23,7 +22,6 @@ export interface AgreementFigure {
 
 /** From this many pairs on the large-sample variance of kappa is trusted. */
 const LARGE_SAMPLE = 50;
-const DRAWS = 1000;
 const LIMITS: Interval = { low: -1, high: 1 };
 
 /** An interval without width would claim certainty that a sample can't give. */
@@ -53,12 +51,16 @@ function tableOf(fields: readonly number[], size: number): number[][] {
 
 /**
  * A statistic of agreement with its interval: from its variance when it has one and there are at least 50 pairs, by
- * 1,000 seeded draws of the pairs otherwise.
+ * drawing the pairs again otherwise.
  *
  * @param table counts of two readers.
- * @param random a fresh seeded source.
+ * @param resampling a fresh seeded source, and how many draws; none gives no such interval.
  */
-export function agreementFigure(table: ConfusionTable, statistic: AgreementStatistic, random: Random): AgreementFigure {
+export function agreementFigure(
+  table: ConfusionTable,
+  statistic: AgreementStatistic,
+  resampling: Resampling,
+): AgreementFigure {
   const fields = fieldsOf(table);
   const n = fields.length;
   const value = statistic.value(table);
@@ -72,6 +74,6 @@ export function agreementFigure(table: ConfusionTable, statistic: AgreementStati
     return { value, interval, intervalBy: interval && 'variance', n, missing: null };
   }
   const again = (drawn: readonly number[]) => statistic.value(tableOf(drawn, table.length));
-  const interval = withWidth(bootstrapInterval(fields, again, { random, draws: DRAWS }));
+  const interval = withWidth(bootstrapInterval(fields, again, resampling));
   return { value, interval, intervalBy: interval && 'draws', n, missing: null };
 }

@@ -20,6 +20,9 @@ export interface ReadingScale<S extends string> {
   ordered: readonly S[];
   /** The word for "not judged". */
   leftOut: S;
+  /** How often the cells are drawn again for an interval; 1,000 unless said. 0 leaves those intervals out: a listing
+   * of thousands of pairs must not take minutes. */
+  draws?: number;
 }
 
 /** How far two readings of one comb agree; every figure with its own n. */
@@ -47,22 +50,24 @@ export interface ReadingAgreement<S extends string> {
 
 /** Equal readings always give equal intervals: the draws are the same every time. */
 const DRAWS_SEED = 20261201;
+const DRAWS = 1000;
 
 /** Every figure draws from the start of the same sequence, so none depends on which others were asked for. */
-function figure(table: ConfusionTable, statistic: AgreementStatistic): AgreementFigure {
-  return agreementFigure(table, statistic, seededRandom(DRAWS_SEED));
+function figure(table: ConfusionTable, statistic: AgreementStatistic, draws = DRAWS): AgreementFigure {
+  return agreementFigure(table, statistic, { random: seededRandom(DRAWS_SEED), draws });
 }
 
-function alpha(table: ConfusionTable, metric: AlphaMetric): AgreementFigure {
-  return figure(table, { value: (drawn) => tableAlpha(drawn, metric) });
+function alpha(table: ConfusionTable, metric: AlphaMetric, draws?: number): AgreementFigure {
+  return figure(table, { value: (drawn) => tableAlpha(drawn, metric) }, draws);
 }
 
-function kappa(table: ConfusionTable, weighting: Weighting): AgreementFigure {
+function kappa(table: ConfusionTable, weighting: Weighting, draws?: number): AgreementFigure {
   const weights = agreementWeights(table.length, weighting);
-  return figure(table, {
-    value: (drawn) => kappaValue(drawn, weights)?.value ?? null,
-    variance: (all) => weightedKappa(all, weights)?.variance ?? null,
-  });
+  const statistic = {
+    value: (drawn: ConfusionTable) => kappaValue(drawn, weights)?.value ?? null,
+    variance: (all: ConfusionTable) => weightedKappa(all, weights)?.variance ?? null,
+  };
+  return figure(table, statistic, draws);
 }
 
 /**
@@ -85,16 +90,17 @@ export function agreementOf<S extends string>(
   const stages = confusionTable(staged, scale.ordered);
   const counts = confusionTable(words, scale.categories);
   const raw = rawAgreement(counts);
+  const { draws } = scale;
   const used = confusionTable(words, [...new Set(words.flat())]);
   return {
     n: pairs.length,
     leftOut,
     raw: { ...raw, interval: wilsonInterval(raw.agreed, raw.n) },
-    kappa: kappa(used, 'none'),
-    kappaLinear: kappa(stages, 'linear'),
-    kappaQuadratic: kappa(stages, 'quadratic'),
-    alphaNominal: alpha(used, 'nominal'),
-    alphaOrdinal: alpha(stages, 'ordinal'),
+    kappa: kappa(used, 'none', draws),
+    kappaLinear: kappa(stages, 'linear', draws),
+    kappaQuadratic: kappa(stages, 'quadratic', draws),
+    alphaNominal: alpha(used, 'nominal', draws),
+    alphaOrdinal: alpha(stages, 'ordinal', draws),
     table: { categories: scale.categories, counts },
     classes: classAgreement(counts),
     differences: pairs.filter((pair) => pair.first !== pair.second),

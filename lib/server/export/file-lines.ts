@@ -1,18 +1,22 @@
 import 'server-only';
 import { tallyOf } from '@/lib/comb/tally';
 import { cellNumber } from '@/lib/comb/walk';
+import { AGREEMENT_FILE } from '@/lib/csv/agreement-file';
 import { CELLS_FILE } from '@/lib/csv/cells-file';
 import { DICTIONARY_FILE, dictionaryRows } from '@/lib/csv/dictionary-file';
 import { NESTS_FILE } from '@/lib/csv/nests-file';
+import { SETTLEMENTS_FILE } from '@/lib/csv/settlements-file';
 import { TALLIES_FILE } from '@/lib/csv/tallies-file';
 import { VISITS_FILE } from '@/lib/csv/visits-file';
 import { writeHeader, writeRow } from '@/lib/csv/write-row';
 import { fromBinary } from '@/lib/server/db/uuid-binary';
 import { instantText } from '@/lib/server/presenters/instant-text';
 import { presentPlace } from '@/lib/server/presenters/present-nest';
+import { agreementLines } from './agreement-lines';
 import type { ExportCall, ExportLines } from './export-call';
 import { nestPages } from './nest-pages';
 import { readingStream } from './reading-stream';
+import { settlementLines } from './settlement-lines';
 import { visitPages } from './visit-pages';
 
 async function* nestLines(call: ExportCall): AsyncGenerator<string> {
@@ -81,5 +85,7 @@ export const EXPORT_FILES: ReadonlyMap<string, ExportLines> = new Map([
   [VISITS_FILE.name, visitLines],
   [TALLIES_FILE.name, tallyLines],
   [CELLS_FILE.name, cellLines],
+  [SETTLEMENTS_FILE.name, settlementLines],
+  [AGREEMENT_FILE.name, agreementLines],
   [DICTIONARY_FILE.name, dictionaryLines],
 ]);

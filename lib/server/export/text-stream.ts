@@ -1,17 +1,20 @@
 import 'server-only';
+import { byteStream } from './byte-stream';
 
 /** Characters gathered before they are handed on. */
 const CHUNK = 32 * 1024;
 
-/** Takes parts until there is enough to hand on; blank only at the very end. */
-async function gather(parts: AsyncIterator<string>): Promise<{ text: string; done: boolean }> {
+/** UTF-8 of some texts, gathered into pieces worth handing on. */
+export async function* encodedPieces(parts: AsyncGenerator<string>): AsyncGenerator<Uint8Array> {
+  const encoder = new TextEncoder();
   let text = '';
-  while (text.length < CHUNK) {
-    const { done, value } = await parts.next();
-    if (done) return { text, done: true };
-    text += value;
+  for await (const part of parts) {
+    text += part;
+    if (text.length < CHUNK) continue;
+    yield encoder.encode(text);
+    text = '';
   }
-  return { text, done: false };
+  if (text !== '') yield encoder.encode(text);
 }
 
 /**
@@ -23,33 +26,5 @@ export function textStream(
   parts: AsyncGenerator<string>,
   onEnd: (error?: unknown) => Promise<void>,
 ): ReadableStream<Uint8Array> {
-  const encoder = new TextEncoder();
-  let isOver = false;
-  const end = async (error?: unknown) => {
-    if (isOver) return;
-    isOver = true;
-    await onEnd(error);
-  };
-  return new ReadableStream({
-    async pull(controller) {
-      try {
-        const { text, done } = await gather(parts);
-        // The reader may have gone away meanwhile; then nothing can be handed on any more.
-        if (isOver) return;
-        if (text !== '') controller.enqueue(encoder.encode(text));
-        if (!done) return;
-        await end();
-        controller.close();
-      } catch (error) {
-        await end(error);
-        throw error;
-      }
-    },
-    async cancel() {
-      isOver = true;
-      // Waits for the part that is being made, so that nothing is read on a connection that was given back.
-      await parts.return(undefined);
-      await onEnd();
-    },
-  });
+  return byteStream(encodedPieces(parts), onEnd);
 }

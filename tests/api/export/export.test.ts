@@ -10,7 +10,15 @@ import { makeMarks, makeReading } from '@/tests/support/factories/make-reading';
 import { type TestTeam, makeTeam } from '@/tests/support/factories/make-team';
 import { N12, n12Marks } from '@/tests/support/n12';
 
-const FILES = ['nests.csv', 'visits.csv', 'tallies.csv', 'cells.csv', 'dictionary.csv'];
+const FILES = [
+  'nests.csv',
+  'visits.csv',
+  'tallies.csv',
+  'cells.csv',
+  'settlements.csv',
+  'agreement.csv',
+  'dictionary.csv',
+];
 const TALLY_HEADER =
   'team,nest,visit,visit_date,reading,reading_kind,observer,taxon,cells_total,empty,egg,small,medium,large,capped,opened,dead,parasitised,webbed,damaged,unread,nectar_cells,locked_version';
 const CELL_HEADER =

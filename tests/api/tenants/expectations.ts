@@ -9,7 +9,16 @@ const RECORDERS: readonly Role[] = ['technician', 'reviewer', 'biologist'];
 const SETTLERS: readonly Role[] = ['reviewer', 'biologist'];
 const EXPORTERS: readonly Role[] = ['reviewer', 'biologist', 'coordinator', 'researcher'];
 const UNKNOWN = '01890000-0000-7000-8000-00000000dead';
-const FILES = ['nests.csv', 'visits.csv', 'tallies.csv', 'cells.csv', 'dictionary.csv'];
+const FILES = [
+  'nests.csv',
+  'visits.csv',
+  'tallies.csv',
+  'cells.csv',
+  'settlements.csv',
+  'agreement.csv',
+  'dictionary.csv',
+  'everything.zip',
+];
 
 /** A route about one thing that is named in the path, and read. */
 function readOne(may: readonly Role[], kind: 'nest' | 'reading'): MethodExpectation {
@@ -182,6 +191,46 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
               status: 200,
             },
           ]),
+      },
+    },
+  },
+  'export/counts/route.ts': {
+    load: () => import('@/app/api/export/counts/route'),
+    methods: {
+      GET: {
+        may: EXPORTERS,
+        own: ({ tenant }) => [
+          { name: 'all', call: {}, status: 200 },
+          { name: 'one nest', call: { query: `nest=${tenant.onlyCode}` }, status: 200 },
+          { name: 'bad date', call: { query: 'from=yesterday' }, status: 400 },
+        ],
+        pairs: ({ other }) => [
+          {
+            name: 'code',
+            foreign: { query: `nest=${other.onlyCode}` },
+            unknown: { query: 'nest=NONE' },
+            status: 404,
+          },
+          {
+            name: 'taxon',
+            foreign: { query: `taxon=Polistes%20${other.canary}` },
+            unknown: { query: 'taxon=Polistes%20x' },
+            status: 200,
+          },
+        ],
+      },
+    },
+  },
+  'samples/route.ts': {
+    load: () => import('@/app/api/samples/route'),
+    methods: {
+      POST: {
+        may: SETTLERS,
+        own: () => [
+          { name: 'a month that is over', call: { body: { month: '2025-06' } }, status: 200 },
+          { name: 'a month to come', call: { body: { month: '2999-01' } }, status: 400 },
+          { name: 'unknown member', call: { body: { month: '2025-06', teamId: v7() } }, status: 400 },
+        ],
       },
     },
   },

@@ -1,5 +1,7 @@
 import 'server-only';
 import type { Json } from '@/lib/protocol/canonical-json';
+import { loadSealedReading } from '@/lib/server/audit/load-sealed';
+import { sealOf } from '@/lib/server/audit/seal';
 import type { TeamContext } from '@/lib/server/auth/team-context';
 import { type Counter, lockCounter, saveCounter } from '@/lib/server/commands/push/lock-counter';
 import { writeAudit } from '@/lib/server/commands/push/write-audit';
@@ -56,7 +58,9 @@ export async function labWork(
     const halves = await halvesOf(scope, await visibleReading(scope, id));
     const decision = await decide({ scope, ...halves, counter });
     const { action, final, version } = decision;
-    const detail = { basedOn: fromBinary(halves.source.id), version, ...decision.detail };
+    // What the rows say now goes into the chain: a later change of any of them shows.
+    const seal = { ...sealOf(await loadSealedReading(scope, final.id)) };
+    const detail = { basedOn: fromBinary(halves.source.id), version, ...decision.detail, seal };
     await writeAudit(
       { ctx, counter, transaction },
       { action, subjectId: fromBinary(final.id), detail, at: new Date(nowMs) },

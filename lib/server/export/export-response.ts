@@ -2,33 +2,27 @@ import 'server-only';
 import type { TeamContext } from '@/lib/server/auth/team-context';
 import { HttpProblem } from '@/lib/server/http/problem';
 import { describeError, log } from '@/lib/server/log/log';
-import { nestCondition } from '@/lib/server/queries/nest-conditions';
-import { selectRows } from '@/lib/server/queries/select-rows';
 import type { ExportLines } from './export-call';
 import type { ExportQuery } from './export-query';
 import { EXPORT_FILES } from './file-lines';
+import { requireNest } from './require-nest';
 import { type Snapshot, openSnapshot } from './snapshot';
 import { textStream } from './text-stream';
+import { ZIP_NAME, zipResponse } from './zip-response';
 
 /** One download. */
-export interface CsvRequest {
+export interface ExportRequest {
   /** As it stands in the address; anything may have been typed there. */
   file: string;
   query: ExportQuery;
   requestId: string;
-}
-
-/** A nest that is asked for by code must be one of the team's. */
-async function requireNest({ scope }: Snapshot, code: string | undefined, zone: string): Promise<void> {
-  if (code === undefined) return;
-  const { sql, values } = nestCondition({ code }, zone);
-  const [found] = await selectRows(scope, `SELECT 1 FROM nests n WHERE ${sql} LIMIT 1`, values);
-  if (!found) throw new HttpProblem('not-found');
+  /** Epoch milliseconds. */
+  nowMs: number;
 }
 
 function respond(
   ctx: TeamContext,
-  { file, query, requestId }: CsvRequest,
+  { file, query, requestId }: ExportRequest,
   { lines, snapshot }: { lines: ExportLines; snapshot: Snapshot },
 ) {
   const parts = lines({ ctx, scope: snapshot.scope, ...query });
@@ -42,17 +36,17 @@ function respond(
 }
 
 /**
- * A CSV file as a stream that reads the team's data as it is now, page after page, as fast as the other end takes it.
+ * A CSV file, or all of them as an archive, as a stream that reads the team's data as it is now, page after page, as fast as the other end takes it.
  *
  * @throws HttpProblem `not-found` for a file there is none of, and for the code of no nest of the team.
  */
-export async function csvResponse(ctx: TeamContext, request: CsvRequest): Promise<Response> {
+export async function exportResponse(ctx: TeamContext, request: ExportRequest): Promise<Response> {
   const lines = EXPORT_FILES.get(request.file);
-  if (!lines) throw new HttpProblem('not-found');
+  if (!lines && request.file !== ZIP_NAME) throw new HttpProblem('not-found');
   const snapshot = await openSnapshot(ctx);
   try {
     await requireNest(snapshot, request.query.filter.code, ctx.zone);
-    return respond(ctx, request, { lines, snapshot });
+    return lines ? respond(ctx, request, { lines, snapshot }) : zipResponse(ctx, request, snapshot);
   } catch (error) {
     await snapshot.close();
     throw error;
