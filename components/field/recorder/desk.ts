@@ -22,13 +22,18 @@ export interface Desk {
 }
 
 /** Every place one can step to: marked cells, cells known from the last visit, and open places on the rim. */
-function stopsOf({ marks, last, rim, skipped }: Pick<RecorderView, 'marks' | 'last' | 'rim' | 'skipped'>): Axial[] {
+export function stopsOf({
+  marks,
+  last,
+  rim,
+  skipped,
+}: Pick<RecorderView, 'marks' | 'last' | 'rim' | 'skipped'>): Axial[] {
   const keys = new Set([...marks.keys(), ...last.keys(), ...rim.map(cellKey)]);
   return [...keys].filter((key) => marks.has(key) || !skipped.has(key)).map(parseCellKey);
 }
 
 /** Where a step leads from the current cell; from the last marked one when the walk is over. */
-function stepTo(view: RecorderView, step: Step): Axial | null {
+export function stepTo(view: RecorderView, step: Step): Axial | null {
   const from = view.current ?? [...view.marks.values()].at(-1) ?? null;
   if (!from) return null;
   const to = stepFrom(from, step, stopsOf(view));

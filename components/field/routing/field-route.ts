@@ -15,13 +15,14 @@ export type FieldRoute =
 /** Where the field app begins; every path of its own starts with it. */
 export const FIELD_ROOT = '/field';
 
-const FIXED: Readonly<Record<string, FieldRoute>> = {
-  '': { kind: 'nests' },
-  nests: { kind: 'nests' },
-  'nests/new': { kind: 'new-nest' },
-  unsent: { kind: 'unsent' },
-  settings: { kind: 'settings' },
-};
+/** A map, because a path may spell a name that every object has. */
+const FIXED: ReadonlyMap<string, FieldRoute> = new Map([
+  ['', { kind: 'nests' }],
+  ['nests', { kind: 'nests' }],
+  ['nests/new', { kind: 'new-nest' }],
+  ['unsent', { kind: 'unsent' }],
+  ['settings', { kind: 'settings' }],
+]);
 
 /** The part of a path after `/field/`, or null when it belongs to another part of the product. */
 function innerPath(path: string): string | null {
@@ -50,7 +51,7 @@ function entityRoute(parts: readonly string[]): FieldRoute {
 export function parseFieldPath(path: string): FieldRoute {
   const inner = innerPath(path);
   if (inner === null) return { kind: 'unknown' };
-  return FIXED[inner] ?? entityRoute(inner.split('/'));
+  return FIXED.get(inner) ?? entityRoute(inner.split('/'));
 }
 
 /** The path of a screen; the inverse of `parseFieldPath`. The unknown screen leads home. */

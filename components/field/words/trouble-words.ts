@@ -59,5 +59,7 @@ export function troubleWords(why: Why, code: string | null): TroubleWords {
     refused: REFUSED,
     'set-aside': SET_ASIDE,
   };
-  return (code !== null && known[why]?.[code]) || GENERAL[why];
+  const words = known[why] ?? {};
+  // The code comes from outside and may spell a name that every object has.
+  return (code !== null && Object.hasOwn(words, code) && words[code]) || GENERAL[why];
 }
