@@ -9,6 +9,7 @@ import { UnknownPath } from './parts/not-here';
 import { ReadingScreen } from './readings/reading-screen';
 import { parseFieldPath } from './routing/field-route';
 import { SettingsScreen } from './settings/settings-screen';
+import { BringInScreen } from './unsent/bring-in-screen';
 import { UnsentScreen } from './unsent/unsent-screen';
 import { NewVisitScreen } from './visits/new-visit-screen';
 import { VisitScreen } from './visits/visit-screen';
@@ -39,6 +40,8 @@ export function FieldScreen({ path }: { path: string }): ReactElement {
       return <ReadingScreen key={route.id} id={route.id} />;
     case 'unsent':
       return <UnsentScreen />;
+    case 'bring-in':
+      return <BringInScreen />;
     case 'settings':
       return <SettingsScreen />;
     case 'unknown':
