@@ -5,6 +5,8 @@ import { FieldFrame } from './frame/field-frame';
 import { NestScreen } from './nests/nest-screen';
 import { NestsScreen } from './nests/nests-screen';
 import { NewNestScreen } from './nests/new-nest-screen';
+import { BlankSheetScreen, SheetScreen } from './paper/sheet-screen';
+import { TypedScreen } from './paper/typed-screen';
 import { UnknownPath } from './parts/not-here';
 import { ReadingScreen } from './readings/reading-screen';
 import { parseFieldPath } from './routing/field-route';
@@ -38,6 +40,12 @@ export function FieldScreen({ path }: { path: string }): ReactElement {
       return <VisitScreen key={route.id} id={route.id} />;
     case 'reading':
       return <ReadingScreen key={route.id} id={route.id} />;
+    case 'sheet':
+      return <SheetScreen key={route.id} id={route.id} />;
+    case 'blank-sheet':
+      return <BlankSheetScreen />;
+    case 'typed':
+      return <TypedScreen key={route.id} id={route.id} />;
     case 'unsent':
       return <UnsentScreen />;
     case 'bring-in':

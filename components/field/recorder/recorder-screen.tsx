@@ -3,6 +3,7 @@
 import { type ReactElement, useEffect, useEffectEvent, useState } from 'react';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import type { PressState } from '@/components/field/frame/corner-status';
+import { usePressFeedback } from '@/components/field/hand/use-press-feedback';
 import { fieldHref } from '@/components/field/routing/field-route';
 import type { Recorder, RecorderView } from '@/lib/offline/recorder-view';
 import { countedOf } from './counted-query';
@@ -47,6 +48,7 @@ export function RecorderScreen({ recorder }: { recorder: Recorder }): ReactEleme
     window.scrollTo(0, 0);
   };
   useWakeLock();
+  usePressFeedback(view);
   useCounted(recorder);
   return (
     <FieldFrame
