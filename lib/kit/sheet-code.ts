@@ -3,7 +3,10 @@ const SIGNS = '23456789ABCDEFGHJKLMNPQRSTUVWXYZ';
 
 const GROUPS = 3;
 const PER_GROUP = 4;
-const BITS = BigInt(5 * GROUPS * PER_GROUP);
+/** Signs in a code, without the gaps. */
+export const CODE_LENGTH = GROUPS * PER_GROUP;
+
+const BITS = BigInt(5 * CODE_LENGTH);
 
 /**
  * The code on paper for a UUID: its last 60 bits, which chance has made, as `K7QF-2M9X-RTWB`. It tells nothing about
@@ -14,7 +17,7 @@ const BITS = BigInt(5 * GROUPS * PER_GROUP);
 export function sheetCode(id: string): string {
   let rest = BigInt(`0x${id.replaceAll('-', '')}`) & ((1n << BITS) - 1n);
   let signs = '';
-  for (let left = GROUPS * PER_GROUP; left > 0; left--) {
+  for (let left = CODE_LENGTH; left > 0; left--) {
     signs = (SIGNS[Number(rest & 31n)] ?? '') + signs;
     rest >>= 5n;
   }

@@ -1,5 +1,5 @@
 import { writtenOn } from '@/components/field/words/written-time';
-import { plainCode, sheetCode } from '@/lib/kit/sheet-code';
+import { CODE_LENGTH, plainCode, sheetCode } from '@/lib/kit/sheet-code';
 import type { NestSummary } from '@/lib/offline/nest-view';
 
 /** The nests of the day, and all the others. */
@@ -23,9 +23,11 @@ export function splitByDay(nests: readonly NestSummary[], today: string): NestLi
 export function findNests(nests: readonly NestSummary[], words: string): NestSummary[] {
   const wanted = words.trim().toLowerCase();
   const code = plainCode(words);
+  const mayBeCode = code.length === CODE_LENGTH;
   return nests.filter(
     (nest) =>
-      `${nest.code} ${nest.name ?? ''}`.toLowerCase().includes(wanted) || plainCode(sheetCode(nest.id)) === code,
+      `${nest.code} ${nest.name ?? ''}`.toLowerCase().includes(wanted) ||
+      (mayBeCode && plainCode(sheetCode(nest.id)) === code),
   );
 }
 
