@@ -13,7 +13,7 @@ export function Disclosure({ summary, size = 'lab', className = '', children }: 
   return (
     <details className={`group ${className}`}>
       <summary
-        className={`inline-flex items-center gap-2 font-bold text-main underline underline-offset-4 ${size === 'field' ? 'min-h-field' : 'min-h-8'}`}
+        className={`inline-flex items-center gap-2 font-bold text-main underline underline-offset-4 ${size === 'field' ? 'min-h-field min-w-field' : 'min-h-8'}`}
       >
         {summary}
       </summary>

@@ -23,7 +23,7 @@ export interface SheetLine {
 }
 
 /** Typed for a place of the ring where the comb has no cell. */
-export const NO_CELL = '.';
+const NO_CELL = '.';
 
 const STATES = new Map<string, CellState>([
   ...CELL_STATES.map((state) => [STATE_LETTERS[state], state] as const),

@@ -70,7 +70,11 @@ export function createCommands({ maker, commit }: CommandPorts): Commands {
     openTypedReading: async ({ nest, visit, marks }) => {
       const reading = maker.newId();
       const within = { nest, visit, reading };
-      const opening = await makeOp(maker, { kind: 'reading.open', ...within, body: { kind: 'field', source: 'paper' } });
+      const opening = await makeOp(maker, {
+        kind: 'reading.open',
+        ...within,
+        body: { kind: 'field', source: 'paper' },
+      });
       const drafts = [opening];
       for (const mark of marks) drafts.push(await makeOp(maker, { kind: 'cell.mark', ...within, body: mark }));
       await commit({ drafts });

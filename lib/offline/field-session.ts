@@ -42,6 +42,8 @@ export class FieldSession {
     tab: 'alone',
   });
   private asking: Promise<void> | null = null;
+  /** A deletion on its way: nobody may close the records under it. */
+  private deleting: Promise<boolean> | null = null;
 
   constructor(private readonly edges: Edges) {
     this.device = new DeviceDatabase(edges.dexie);
@@ -86,9 +88,11 @@ export class FieldSession {
     const { view, records } = this.own.get();
     if (!records || (view.kind !== 'ready' && view.kind !== 'needs-sign-in')) return false;
     // The person is forgotten first: a phone that dies in between has kept everything, closed.
-    await forgetPerson(this.device, view.person);
-    const deleted = await records.deleteIfCopied(copied);
-    this.nobody(true);
+    this.deleting = forgetPerson(this.device, view.person).then(() => records.deleteIfCopied(copied));
+    const deleted = await this.deleting.finally(() => {
+      this.deleting = null;
+      this.nobody(true);
+    });
     if (await signOutAtOffice(this.edges.network)) await noteLeft(this.device);
     return deleted;
   }
@@ -96,6 +100,7 @@ export class FieldSession {
   /** Somebody has left this phone, or come to it, in another tab: what is shown here may not be theirs. */
   async follow(): Promise<void> {
     await this.asking;
+    await this.deleting;
     const last = await lastPerson(this.device);
     const { records, view } = this.own.get();
     const shown = records && personKey(records.person);

@@ -124,7 +124,10 @@ test.describe('in the hand', () => {
     });
     // The attribute is there before the app has started: a script in the head has put it.
     await page.route('**/_next/static/**', (route) => route.abort());
-    const bare = await page.context().browser()?.newContext({ storageState: await page.context().storageState(), serviceWorkers: 'block' });
+    const bare = await page
+      .context()
+      .browser()
+      ?.newContext({ storageState: await page.context().storageState(), serviceWorkers: 'block' });
     const first = await bare?.newPage();
     await first?.route('**/_next/static/chunks/**', (route) => route.abort());
     await first?.goto(`${origin()}/field`);

@@ -1,6 +1,7 @@
 import { type Page, expect, test } from '@playwright/test';
 import { type AlteringProxy, startAlteringProxy } from '@/tests/support/altering-proxy';
 import { openField, pressAll, startReading, untilInstalled, untilSent } from '@/tests/support/pages/field';
+import { FIELD_SCREENS, knownIds } from '@/tests/support/pages/field-screens';
 import { screenshotPath } from '@/tests/support/pages/screenshots';
 import { signInByForm } from '@/tests/support/pages/sign-in';
 import { origin } from '@/tests/support/running-server';
@@ -90,11 +91,15 @@ test.describe('life on a phone', () => {
     await pressAll(page, ['Egg']);
     await untilSent(page);
     await page.goto('/field');
-    await expect(page.getByRole('region', { name: 'Clock' })).toContainText('about 15 minutes slow', { timeout: 20_000 });
+    await expect(page.getByRole('region', { name: 'Clock' })).toContainText('about 15 minutes slow', {
+      timeout: 20_000,
+    });
     await page.screenshot({ path: screenshotPath('field-clock-off-390') });
   });
 
-  test('Safari is told its own steps once there is a nest, and the hint stays away when put away', async ({ browser }) => {
+  test('Safari is told its own steps once there is a nest, and the hint stays away when put away', async ({
+    browser,
+  }) => {
     const userAgent =
       'Mozilla/5.0 (iPhone; CPU iPhone OS 18_4 like Mac OS X) AppleWebKit/605.1.15 (KHTML, like Gecko) Version/18.4 Mobile/15E148 Safari/604.1';
     const context = await browser.newContext({ baseURL: origin(), userAgent, viewport: { width: 390, height: 844 } });
@@ -112,6 +117,27 @@ test.describe('life on a phone', () => {
     await context.close();
   });
 
+  test('every screen has its help with no network at all', async ({ page, context }) => {
+    await signInByForm(page, TECHNICIAN);
+    await openField(page);
+    await untilInstalled(page);
+    const known = await knownIds(origin());
+    await page.reload();
+    await openField(page);
+    await context.setOffline(true);
+    const titles = new Set<string>();
+    for (const { name, path } of FIELD_SCREENS) {
+      await page.goto(path(known));
+      await page.getByRole('button', { name: 'Help' }).click();
+      const title = await page.getByRole('dialog').getByRole('heading', { level: 2 }).textContent();
+      expect(title, name).toMatch(/^Help: /);
+      await expect(page.getByRole('dialog').getByText('Somebody was stung')).toBeVisible();
+      titles.add(title ?? '');
+    }
+    expect(titles.size).toBeGreaterThanOrEqual(11);
+    await context.setOffline(false);
+  });
+
   test('lasting storage is asked for after the first nest', async ({ page }) => {
     await page.addInitScript(() => {
       navigator.storage.persist = async () => Boolean(sessionStorage.setItem('asked', 'yes')) || true;
@@ -123,7 +149,9 @@ test.describe('life on a phone', () => {
     expect(await page.evaluate(() => sessionStorage.getItem('asked'))).toBe('yes');
   });
 
-  test('two tabs read one comb: what the one keeps the other shows, and nothing is lost or doubled', async ({ page }) => {
+  test('two tabs read one comb: what the one keeps the other shows, and nothing is lost or doubled', async ({
+    page,
+  }) => {
     const recorder = await atTheNest(page, 'TABS-1');
     const other = await page.context().newPage();
     await other.goto(recorder);
@@ -157,7 +185,9 @@ test.describe('life on a phone', () => {
     });
     await expect(page.getByText('A newer version works in another tab.')).toBeVisible();
     await pressAll(page, ['Capped']);
-    await expect(page.getByRole('alert').filter({ hasText: 'Not saved: cell 1, capped' })).toBeVisible({ timeout: 40_000 });
+    await expect(page.getByRole('alert').filter({ hasText: 'Not saved: cell 1, capped' })).toBeVisible({
+      timeout: 40_000,
+    });
     await page.screenshot({ path: screenshotPath('field-taken-over-390') });
   });
 });

@@ -58,15 +58,23 @@ test.describe('paper', () => {
     });
   }
 
-  test('the blank sheet fits on one page of A4 and of Letter, black only, with the nest’s opaque code', async ({ page }) => {
+  test('the blank sheet fits on one page of A4 and of Letter, black only, with the nest’s opaque code', async ({
+    page,
+  }) => {
     await signInByForm(page, 'technician@tarrow.example');
     await openField(page);
     const { nest } = await knownIds(origin());
     await page.goto(`/field/nests/${nest}/sheet`);
     await settled(page);
-    await expect(page.getByRole('article', { name: 'Paper field sheet' })).toContainText(/[2-9A-HJ-NP-Z]{4}(-[2-9A-HJ-NP-Z]{4}){2}/);
+    await expect(page.getByRole('article', { name: 'Paper field sheet' })).toContainText(
+      /[2-9A-HJ-NP-Z]{4}(-[2-9A-HJ-NP-Z]{4}){2}/,
+    );
     for (const format of FORMATS) {
-      const pdf = await page.pdf({ format, path: screenshotPath(`sheet-${format}`).replace('.png', '.pdf'), preferCSSPageSize: false });
+      const pdf = await page.pdf({
+        format,
+        path: screenshotPath(`sheet-${format}`).replace('.png', '.pdf'),
+        preferCSSPageSize: false,
+      });
       expect(pagesOf(pdf), format).toBe(1);
     }
     await page.setViewportSize({ width: 703, height: 1032 });
@@ -115,9 +123,10 @@ test.describe('paper', () => {
       `/api/nests/${nests[0]?.id}`,
     );
     const handedIn = nest.visits[0]?.readings.find(({ submittedAt }) => submittedAt !== null);
-    const reading = await reviewer.get<{ source: string; marks: { cell: number; state: string; nectar: boolean; unsure: boolean }[] }>(
-      `/api/readings/${handedIn?.id}`,
-    );
+    const reading = await reviewer.get<{
+      source: string;
+      marks: { cell: number; state: string; nectar: boolean; unsure: boolean }[];
+    }>(`/api/readings/${handedIn?.id}`);
     expect(reading.source).toBe('paper');
     expect(reading.marks.map(({ cell, state }) => `${cell} ${state}`)).toEqual([
       '0 capped',

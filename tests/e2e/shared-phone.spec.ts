@@ -57,7 +57,10 @@ test.describe('a shared phone', () => {
     await signInByForm(page, FIRST);
     await openField(page);
     await startReading(page, { code: 'HANDED-50', counted: MARKS });
-    await pressAll(page, Array.from({ length: MARKS }, (_, n) => STATES[n % STATES.length] ?? 'Egg'));
+    await pressAll(
+      page,
+      Array.from({ length: MARKS }, (_, n) => STATES[n % STATES.length] ?? 'Egg'),
+    );
     await page.goto('/field/unsent');
     await expect(page.getByRole('heading', { name: `Still on this phone: ${MARKS + 3} items` })).toBeVisible();
     await page.goto('/field/settings');

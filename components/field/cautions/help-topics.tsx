@@ -57,8 +57,8 @@ function NestHelp(): ReactElement {
 function NewVisitHelp(): ReactElement {
   return (
     <p>
-      Choose why you are here. The visit begins at the moment you press the key, by this phone’s clock. Going back before
-      that starts nothing.
+      Choose why you are here. The visit begins at the moment you press the key, by this phone’s clock. Going back
+      before that starts nothing.
     </p>
   );
 }
@@ -94,12 +94,12 @@ function SheetHelp(): ReactElement {
   return (
     <>
       <p>
-        Write one letter into each cell, and behind it ’ for nectar or ? for unsure. Draw a line round the cells that are
-        there: a blank inside it is a cell you did not read.
+        Write one letter into each cell, and behind it ’ for nectar or ? for unsure. Draw a line round the cells that
+        are there: a blank inside it is a cell you did not read.
       </p>
       <p>
-        The square holds the code below it and nothing else: no name, no place. Type the code into <em>Find a nest</em> to
-        come to the nest.
+        The square holds the code below it and nothing else: no name, no place. Type the code into <em>Find a nest</em>{' '}
+        to come to the nest.
       </p>
     </>
   );
@@ -109,12 +109,12 @@ function TypedHelp(): ReactElement {
   return (
     <>
       <p>
-        Type ring by ring, clockwise from 12, as the numbers on the sheet run. Gaps and commas do not matter; Tab goes to
-        the next ring.
+        Type ring by ring, clockwise from 12, as the numbers on the sheet run. Gaps and commas do not matter; Tab goes
+        to the next ring.
       </p>
       <p>
-        Nothing is kept before you press <strong>Keep the reading</strong>. Then it opens as any reading: compare it with
-        the paper, put right what is wrong, finish, hand in. Keep the paper.
+        Nothing is kept before you press <strong>Keep the reading</strong>. Then it opens as any reading: compare it
+        with the paper, put right what is wrong, finish, hand in. Keep the paper.
       </p>
       <CombKey />
     </>
@@ -167,8 +167,8 @@ function BringInHelp(): ReactElement {
         whole, yours, and of this team.
       </p>
       <p>
-        Nothing is doubled: everything in it has a number of its own, and the office counts each once, whichever phone it
-        came from.
+        Nothing is doubled: everything in it has a number of its own, and the office counts each once, whichever phone
+        it came from.
       </p>
     </>
   );
@@ -177,10 +177,12 @@ function BringInHelp(): ReactElement {
 function SettingsHelp(): ReactElement {
   return (
     <>
-      <p>Who works on this phone, what it keeps, how it behaves in the hand, and how to sign out without losing anything.</p>
       <p>
-        A shared phone: sign out before you hand it on. What you have not sent stays closed on it, and goes when you sign
-        in here again.
+        Who works on this phone, what it keeps, how it behaves in the hand, and how to sign out without losing anything.
+      </p>
+      <p>
+        A shared phone: sign out before you hand it on. What you have not sent stays closed on it, and goes when you
+        sign in here again.
       </p>
       <p>Low lamp makes the screen dim and green for dusk. Left hand mirrors the rows of keys.</p>
       <h3 className="text-xl font-bold">Keyboard, while reading</h3>

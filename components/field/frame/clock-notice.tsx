@@ -13,8 +13,8 @@ export function ClockNotice(): ReactElement | null {
   return (
     <section aria-label="Clock" className="print-hidden border-b-2 border-warn bg-warn-wash px-gap py-4">
       <p>
-        <strong>{words}</strong> Set it in the phone’s settings. What you record keeps the time this phone shows, and the
-        office notes the difference.
+        <strong>{words}</strong> Set it in the phone’s settings. What you record keeps the time this phone shows, and
+        the office notes the difference.
       </p>
     </section>
   );

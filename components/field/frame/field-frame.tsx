@@ -47,7 +47,7 @@ export function FieldFrame({ back, title, help, reading = false, press, children
   return (
     <div className="flex min-h-dvh flex-col bg-paper text-field text-ink">
       <header className="print-hidden sticky top-0 z-10 border-b-3 border-ink bg-paper">
-        <div className="flex items-center gap-2 px-2">
+        <div className="flex flex-wrap items-center gap-x-2 px-2">
           {back ? <BackKey {...back} /> : <HomeMark />}
           <div className="min-w-0 flex-1 leading-tight">{title}</div>
           <HelpKey topic={help} />

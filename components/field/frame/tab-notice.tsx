@@ -30,7 +30,10 @@ export function TakenOverNotice(): ReactElement | null {
   const { notSaved } = useActivity();
   if (tab !== 'taken-over') return null;
   return (
-    <section aria-label="Other tab" className="print-hidden border-b-2 border-stop bg-stop-wash px-gap py-4 text-field text-ink">
+    <section
+      aria-label="Other tab"
+      className="print-hidden border-b-2 border-stop bg-stop-wash px-gap py-4 text-field text-ink"
+    >
       <p role="alert" className="font-bold">
         A newer version works in another tab. This one keeps nothing any more.
       </p>

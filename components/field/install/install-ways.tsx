@@ -40,7 +40,9 @@ export function InstallWays(): ReactElement {
   if (state === 'prompt') {
     return (
       <>
-        <p>From the home screen it opens without signal like any other app, and the browser keeps its records longer.</p>
+        <p>
+          From the home screen it opens without signal like any other app, and the browser keeps its records longer.
+        </p>
         <FieldButton className="mt-3" onClick={() => void promptInstall()}>
           Put it on the home screen
         </FieldButton>

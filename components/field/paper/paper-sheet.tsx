@@ -16,7 +16,15 @@ interface PaperSheetProps {
 const LETTER_ON_PAPER: Readonly<Record<CellState, string>> = { ...STATE_LETTERS, empty: '–', unread: 'blank' };
 
 /** A line to write on. */
-function Blank({ label, wide = false, children }: { label: string; wide?: boolean; children?: ReactNode }): ReactElement {
+function Blank({
+  label,
+  wide = false,
+  children,
+}: {
+  label: string;
+  wide?: boolean;
+  children?: ReactNode;
+}): ReactElement {
   return (
     <p className={`flex items-end gap-1 ${wide ? 'col-span-2' : ''}`}>
       <span className="shrink-0">{label}</span>

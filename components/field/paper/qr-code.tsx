@@ -16,7 +16,14 @@ export function QrCode({ text, sizeMm }: QrCodeProps): ReactElement {
   const { data, size } = encode(text, { ecc: 'Q', border: QUIET });
   const path = data.flatMap((row, y) => row.flatMap((dark, x) => (dark ? [`M${x} ${y}h1v1h-1z`] : []))).join('');
   return (
-    <svg role="img" aria-label={`Square code ${text}`} width={`${sizeMm}mm`} height={`${sizeMm}mm`} viewBox={`0 0 ${size} ${size}`} shapeRendering="crispEdges">
+    <svg
+      role="img"
+      aria-label={`Square code ${text}`}
+      width={`${sizeMm}mm`}
+      height={`${sizeMm}mm`}
+      viewBox={`0 0 ${size} ${size}`}
+      shapeRendering="crispEdges"
+    >
       <rect width={size} height={size} fill="#ffffff" />
       <path d={path} fill="#000000" />
     </svg>

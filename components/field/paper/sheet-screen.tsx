@@ -2,6 +2,7 @@
 
 import type { ReactElement } from 'react';
 import { FieldFrame } from '@/components/field/frame/field-frame';
+import { useHand } from '@/components/field/hand/use-hand';
 import { FieldButton } from '@/components/field/parts/field-button';
 import { Screen } from '@/components/field/parts/screen';
 import { fieldHref } from '@/components/field/routing/field-route';
@@ -16,14 +17,16 @@ interface SheetFrameProps {
 }
 
 function SheetFrame({ back, code, nest }: SheetFrameProps): ReactElement {
+  const { lamp } = useHand();
   return (
     <FieldFrame back={back} help="sheet">
       <Screen title="Paper field sheet" wide>
         <div className="print-hidden flex flex-col gap-gap">
           <p>
-            One page for a day without a phone, on A4 or Letter. What is written on it can be typed in afterwards, with the
-            same letters, at the visit.
+            One page for a day without a phone, on A4 or Letter. What is written on it can be typed in afterwards, with
+            the same letters, at the visit.
           </p>
+          {lamp && <p>By low lamp the white sheet is not shown here. It prints all the same.</p>}
           <FieldButton tone="main" onClick={() => window.print()}>
             Print
           </FieldButton>

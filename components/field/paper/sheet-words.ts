@@ -9,5 +9,7 @@ export function ringWords(ring: number): string {
 
 /** What is wrong with one sign, and where. */
 export function faultWords({ ring, cell, text }: SheetFault): string {
-  return cell === null ? `Ring ${ring} has no place left for “${text}”.` : `Cell ${cell}: the sheet has no letter “${text}”.`;
+  return cell === null
+    ? `Ring ${ring} has no place left for “${text}”.`
+    : `Cell ${cell}: the sheet has no letter “${text}”.`;
 }

@@ -66,7 +66,15 @@ function TypedComb({ marks }: { marks: readonly SheetMark[] }): ReactElement {
 }
 
 /** The key that keeps the reading, and why it does not yet. */
-function KeepKey({ lines, saving, onKeep }: { lines: readonly SheetLine[]; saving: boolean; onKeep: () => void }): ReactElement {
+function KeepKey({
+  lines,
+  saving,
+  onKeep,
+}: {
+  lines: readonly SheetLine[];
+  saving: boolean;
+  onKeep: () => void;
+}): ReactElement {
   const faults = lines.flatMap((line) => line.faults);
   const count = lines.reduce((sum, line) => sum + line.marks.length, 0);
   const ready = faults.length === 0 && count > 0;
@@ -101,9 +109,9 @@ function TypedBody({ visit }: { visit: VisitView }): ReactElement {
       <div className="grid gap-8 lg:grid-cols-2">
         <div className="flex flex-col gap-gap">
           <p>
-            One letter a cell, in the order of the numbers. <kbd className="font-mono font-bold">’</kbd> behind a letter is
-            nectar, <kbd className="font-mono font-bold">?</kbd> unsure, <kbd className="font-mono font-bold">.</kbd> a
-            place without a cell, <kbd className="font-mono font-bold">u</kbd> a blank inside the line.
+            One letter a cell, in the order of the numbers. <kbd className="font-mono font-bold">’</kbd> behind a letter
+            is nectar, <kbd className="font-mono font-bold">?</kbd> unsure, <kbd className="font-mono font-bold">.</kbd>{' '}
+            a place without a cell, <kbd className="font-mono font-bold">u</kbd> a blank inside the line.
           </p>
           {lines.map((line, k) => (
             <RingLine key={k} ring={k} text={texts[k] ?? ''} line={line} onChange={(text) => put(k, text)} />

@@ -19,7 +19,7 @@ export function UndoRow({ desk }: { desk: Desk }): ReactElement {
           aria-describedby="undo-words"
           aria-disabled={undoWords === null}
           onClick={() => undoWords !== null && recorder.undo()}
-          className="min-w-22 touch-manipulation border-s-3 border-ink px-3 text-xl font-bold select-none active:bg-main-wash aria-disabled:text-quiet"
+          className="min-h-field min-w-22 touch-manipulation border-s-3 border-ink px-3 text-xl font-bold select-none active:bg-main-wash aria-disabled:text-quiet"
         >
           Undo
         </button>

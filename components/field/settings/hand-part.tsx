@@ -38,12 +38,7 @@ export function HandPart(): ReactElement {
         on={lamp}
         onChange={(on) => setHand('lamp', on)}
       />
-      <SwitchKey
-        title="Left hand"
-        hint="Mirrors the rows of keys."
-        on={left}
-        onChange={(on) => setHand('left', on)}
-      />
+      <SwitchKey title="Left hand" hint="Mirrors the rows of keys." on={left} onChange={(on) => setHand('left', on)} />
       {canBuzz() ? (
         <SwitchKey
           title="Buzz"

@@ -13,7 +13,10 @@ import type { FileFault } from '@/lib/offline/unsent-file';
 type State = { kind: 'ready' | 'reading' | 'failed' } | BringInResult;
 
 const FAULT_WORDS: Readonly<Record<FileFault, { title: string; todo: string }>> = {
-  other: { title: 'This is not a copy of unsent work', todo: 'Choose the file whose name begins with undereave-unsent.' },
+  other: {
+    title: 'This is not a copy of unsent work',
+    todo: 'Choose the file whose name begins with undereave-unsent.',
+  },
   newer: { title: 'A newer app wrote this file', todo: 'Open this app once where there is signal, then try again.' },
   changed: {
     title: 'This file is not as it was written',

@@ -1,5 +1,5 @@
 /** From this difference on a person is told, in milliseconds. */
-export const CLOCK_OFF_MS = 5 * 60_000;
+const CLOCK_OFF_MS = 5 * 60_000;
 
 const MINUTE = 60_000;
 const HOUR = 60 * MINUTE;
@@ -7,10 +7,13 @@ const DAY = 24 * HOUR;
 
 /** A length of time in its largest fitting unit: `14 minutes`, `3 hours`, `2 days`. */
 function lengthWords(ms: number): string {
-  const [size, unit] = ([[DAY, 'day'], [HOUR, 'hour'], [MINUTE, 'minute']] as const).find(([least]) => ms >= 2 * least) ?? [
-    MINUTE,
-    'minute',
-  ];
+  const [size, unit] = (
+    [
+      [DAY, 'day'],
+      [HOUR, 'hour'],
+      [MINUTE, 'minute'],
+    ] as const
+  ).find(([least]) => ms >= 2 * least) ?? [MINUTE, 'minute'];
   return `${Math.round(ms / size)} ${unit}s`;
 }
 

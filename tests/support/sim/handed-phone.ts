@@ -19,7 +19,7 @@ export interface Taken {
 }
 
 /** An office that knows people by their cookie and keeps what they push, each operation once. */
-export class SmallOffice {
+class SmallOffice {
   /** Whose cookie the phone carries; null when their session has run out or was ended. */
   cookie: string | null = null;
   online = true;

@@ -10,7 +10,9 @@ const NOW = 2_000_000;
 const mark = (n: number, hlc = `${1_000 + n}.0`) =>
   op({ kind: 'cell.mark', n, hlc, visit: VISIT, reading: READING, body: { q: n, r: 0, state: 'egg' } });
 
-const fileOf = (...ops: ReturnType<typeof mark>[]) => ({ ops: ops.map((each) => ({ state: 'queued', code: null, op: each })) });
+const fileOf = (...ops: ReturnType<typeof mark>[]) => ({
+  ops: ops.map((each) => ({ state: 'queued', code: null, op: each })),
+});
 
 async function otherPhone() {
   const db = freshDatabase();

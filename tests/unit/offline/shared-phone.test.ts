@@ -20,8 +20,7 @@ async function atWork(who = 'tobiah') {
 }
 
 const waiting = async (phone: HandedPhone) => (await phone.records().store.counts()).queued;
-const databases = async (phone: HandedPhone) =>
-  (await phone.idb.databases()).map(({ name }) => name ?? '').sort();
+const databases = async (phone: HandedPhone) => (await phone.idb.databases()).map(({ name }) => name ?? '').sort();
 
 describe('a session that has run out', () => {
   test('keeps everything for weeks and asks the same person to sign in', async () => {
@@ -63,6 +62,15 @@ describe('copying and deleting at sign-out', () => {
     const session = await phone.open();
     expect(session.standing.get().view).toMatchObject({ kind: 'ready', storageCleared: false });
     expect(await waiting(phone)).toBe(0);
+  });
+
+  test('is not cut short when the page hears, meanwhile, that its person has left', async () => {
+    const { phone } = await atWork();
+    const keys = await phone.records().db.ops.toCollection().primaryKeys();
+    const leaving = phone.session?.signOutAndDelete(new Set(keys));
+    await Promise.all([phone.session?.follow(), phone.session?.follow()]);
+    expect(await leaving).toBe(true);
+    expect(await databases(phone)).toEqual(['undereave-device']);
   });
 
   test('deletes nothing when something was recorded after the copy: it stays, closed', async () => {
