@@ -45,27 +45,13 @@ test.describe('life on a phone', () => {
 
   test('a press that finds no room is shown as not saved, keeps its place, and is kept once there is room', async ({
     page,
+    context,
   }) => {
-    // Chromium fires `success` and then aborts the transaction with QuotaExceededError when the disk is full.
-    await page.addInitScript(() => {
-      const put = IDBObjectStore.prototype.put;
-      IDBObjectStore.prototype.put = function (value, key) {
-        const request = put.call(this, value, key);
-        const isFull = Boolean((window as { full?: boolean }).full);
-        if (isFull && this.name === 'ops') {
-          request.addEventListener('success', () => {
-            const failure = new DOMException('no room', 'QuotaExceededError');
-            Object.defineProperty(this.transaction, 'error', { get: () => failure });
-            this.transaction.abort();
-          });
-        }
-        return request;
-      };
-    });
     const recorder = await atTheNest(page, 'FULL-1');
     await pressAll(page, ['Egg', 'Capped']);
     await expect(page.getByText('Cell 2', { exact: true })).toBeVisible();
-    await page.evaluate(() => Object.assign(window, { full: true }));
+    const browser = await context.newCDPSession(page);
+    await browser.send('Storage.overrideQuotaForOrigin', { origin: origin(), quotaSize: 1 });
     await pressAll(page, ['Large', 'Small']);
     const alert = page.getByRole('alert').filter({ hasText: 'Not saved: cell 2, large larva' });
     await expect(alert).toBeVisible({ timeout: 20_000 });
@@ -73,7 +59,7 @@ test.describe('life on a phone', () => {
     await expect(alert).toContainText('storage is full');
     await expect(page.getByRole('link', { name: /Not saved/ })).toBeVisible();
     await page.screenshot({ path: screenshotPath('field-recorder-full-390') });
-    await page.evaluate(() => Object.assign(window, { full: false }));
+    await browser.send('Storage.overrideQuotaForOrigin', { origin: origin() });
     await alert.getByRole('button', { name: 'Try again' }).click();
     await expect(alert).toHaveCount(0);
     await page.goto(recorder);

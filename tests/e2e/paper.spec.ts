@@ -51,7 +51,7 @@ test.describe('paper', () => {
       await page.setViewportSize({ width: 703, height: 1000 });
       expect(await colourIn(page, `print-${name}`)).toBe(0);
       await expect(page.getByRole('list', { name: 'What the symbols mean' }).first()).toBeVisible();
-      await expect(page.getByText('N12').first()).toBeVisible();
+      await expect(page.getByText('N12').filter({ visible: true }).first()).toBeVisible();
       const comb = await page.locator('.comb-frame svg').first().boundingBox();
       expect(comb?.width).toBeLessThanOrEqual(703);
       await expect(page.getByRole('banner')).toBeHidden();

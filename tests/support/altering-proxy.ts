@@ -15,7 +15,8 @@ export interface AlteringProxy {
 
 /** Headers as the server behind has to see them: its own origin, and plain text back. */
 function forwarded(headers: IncomingHttpHeaders, from: string, to: string): IncomingHttpHeaders {
-  const { 'accept-encoding': _encoding, ...rest } = headers;
+  // No conditions either: "not modified" is no answer to change.
+  const { 'accept-encoding': _encoding, 'if-none-match': _tag, 'if-modified-since': _since, ...rest } = headers;
   const own = Object.entries(rest).map(([name, value]) => [
     name,
     typeof value === 'string' ? value.replaceAll(from, to) : value,
