@@ -15,6 +15,7 @@ const config: Config = {
         wash: 'var(--wash)',
         rule: 'var(--rule)',
         edge: 'var(--edge)',
+        shade: 'var(--shade)',
         main: { DEFAULT: 'var(--main)', wash: 'var(--main-wash)', on: 'var(--on-main)' },
         stop: { DEFAULT: 'var(--stop)', wash: 'var(--stop-wash)', on: 'var(--on-stop)' },
         warn: { DEFAULT: 'var(--warn)', wash: 'var(--warn-wash)' },

@@ -31,7 +31,7 @@ export const viewport: Viewport = {
 /** The frame of every page: faces of type and the symbols of the comb. */
 export default function RootLayout({ children }: { children: ReactNode }): ReactElement {
   return (
-    <html lang="en" className={`${next.variable} ${mono.variable}`}>
+    <html lang="en" suppressHydrationWarning className={`${next.variable} ${mono.variable}`}>
       <body>
         <CombSymbols />
         {children}

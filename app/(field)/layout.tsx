@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
-import type { ReactNode } from 'react';
+import type { ReactElement, ReactNode } from 'react';
+import { HAND_SCRIPT } from '@/components/field/hand/hand-settings';
 
 export const metadata: Metadata = {
   title: { absolute: 'Undereave' },
@@ -7,6 +8,11 @@ export const metadata: Metadata = {
 };
 
 /** The field side draws its own frame on the phone; nothing of the lab side comes with it. */
-export default function FieldLayout({ children }: { children: ReactNode }): ReactNode {
-  return children;
+export default function FieldLayout({ children }: { children: ReactNode }): ReactElement {
+  return (
+    <>
+      <script>{HAND_SCRIPT}</script>
+      {children}
+    </>
+  );
 }

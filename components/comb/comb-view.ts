@@ -108,7 +108,7 @@ const ACROSS_A_PHONE = 16;
  * scrolled in its own box, because its cells would become too small to tell apart.
  */
 export function naturalLook(across: number): string {
-  return across <= ACROSS_A_PHONE ? 'h-auto max-w-full' : 'max-w-none';
+  return across <= ACROSS_A_PHONE ? 'h-auto max-w-full' : 'max-w-none print:h-auto print:max-w-full';
 }
 
 const MARK_WORDS = [

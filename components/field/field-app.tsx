@@ -2,9 +2,13 @@
 
 import type { ReactElement } from 'react';
 import { useSession } from '@/lib/offline/hooks/use-session';
+import { useStanding } from '@/lib/offline/hooks/use-standing';
 import { FieldScreen } from './field-screen';
 import { SignedOut } from './frame/signed-out';
+import { OtherTabFirst, TakenOverNotice } from './frame/tab-notice';
 import { UpdateNotice } from './frame/update-notice';
+import { useHandOnDocument } from './hand/use-hand';
+import { useInstallState } from './install/install-ways';
 import { Fetching } from './parts/fetching';
 import { PersonProvider } from './parts/person-context';
 import { parseFieldPath } from './routing/field-route';
@@ -15,6 +19,11 @@ import { useFieldPath } from './routing/use-field-path';
 export function FieldApp(): ReactElement {
   const path = useFieldPath();
   const { view } = useSession();
+  const { tab } = useStanding();
+  useHandOnDocument();
+  // From the start: a browser offers to install once, early.
+  useInstallState();
+  if (tab === 'blocked') return <OtherTabFirst />;
   if (path === null || view.kind === 'loading') {
     return (
       <div className="min-h-dvh bg-paper text-field text-ink">
@@ -26,6 +35,7 @@ export function FieldApp(): ReactElement {
   return (
     <PersonProvider person={view.person}>
       <InnerLinks>
+        <TakenOverNotice />
         <UpdateNotice reading={parseFieldPath(path).kind === 'reading'} />
         <FieldScreen path={path} />
       </InnerLinks>

@@ -25,7 +25,7 @@ export function Dialog({ open, title, onClose, children }: DialogProps): ReactEl
       ref={dialog}
       aria-labelledby={heading}
       onClose={onClose}
-      className="m-auto w-[min(34rem,calc(100vw-2rem))] rounded border-2 border-ink bg-paper p-5 text-ink backdrop:bg-ink/60"
+      className="m-auto w-[min(34rem,calc(100vw-2rem))] rounded border-2 border-ink bg-paper p-5 text-ink backdrop:bg-shade/60"
     >
       <h2 id={heading} className="mb-3 text-xl font-bold">
         {title}

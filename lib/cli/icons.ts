@@ -1,4 +1,4 @@
-import { readFileSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import sharp from 'sharp';
 
@@ -36,9 +36,52 @@ function card(drawing: string, { scale, round }: IconFile): string {
   );
 }
 
-/** `npm run icons` draws the icon files anew from `public/icons/mark.svg`. */
+/** A picture for the browser's install dialogue, cut from one that the browser tests took. */
+interface InstallPicture {
+  from: string;
+  name: string;
+  width: number;
+  height: number;
+  /** How much larger it is drawn than it was taken. */
+  scale: number;
+}
+
+const TAKEN = join('.artifacts', 'screens');
+const PICTURES: readonly InstallPicture[] = [
+  { from: 'field-nest-390.png', name: 'comb-narrow.png', width: 390, height: 844, scale: 2 },
+  { from: 'field-nests-1280.png', name: 'nests-wide.png', width: 1280, height: 800, scale: 1 },
+];
+
+/** The upper part of a taken picture; nothing when the browser tests have not run here. */
+async function drawPicture({ from, name, width, height, scale }: InstallPicture): Promise<void> {
+  const taken = join(TAKEN, from);
+  if (!existsSync(taken)) return;
+  const drawn = sharp(taken)
+    .extract({ left: 0, top: 0, width, height })
+    .resize(width * scale, height * scale);
+  mkdirSync(join('public', 'screenshots'), { recursive: true });
+  writeFileSync(
+    join('public', 'screenshots', name),
+    await drawn.png({ compressionLevel: 9, palette: true }).toBuffer(),
+  );
+}
+
+/** The shape alone, which phones colour themselves. */
+async function drawMonochrome(): Promise<void> {
+  const shape = drawingOf(readFileSync(join(FOLDER, 'monochrome.svg'), 'utf8'));
+  const svg = `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 64 64"><g transform="translate(10.9 10) scale(.66)">${shape}</g></svg>`;
+  const drawn = sharp(Buffer.from(svg), { density: 2304 }).resize(512, 512);
+  writeFileSync(join(FOLDER, 'monochrome-512.png'), await drawn.png({ compressionLevel: 9 }).toBuffer());
+}
+
+/**
+ * `npm run icons` draws the icon files anew from `public/icons/mark.svg` and `monochrome.svg`, and the pictures of the
+ * install dialogue from those the browser tests took last.
+ */
 const mark = drawingOf(readFileSync(join(FOLDER, 'mark.svg'), 'utf8'));
 for (const icon of ICONS) {
   const drawn = sharp(Buffer.from(card(mark, icon)), { density: (72 * icon.size) / 16 }).resize(icon.size, icon.size);
   writeFileSync(join(FOLDER, icon.name), await drawn.png({ compressionLevel: 9, palette: true }).toBuffer());
 }
+await drawMonochrome();
+for (const picture of PICTURES) await drawPicture(picture);

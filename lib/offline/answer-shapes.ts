@@ -17,7 +17,8 @@ const pushResult = z.object({
 /** Answer of a push, as far as the phone relies on it. */
 export const PUSH_ANSWER = z.object({ ...ours, safeSeq: whole, results: z.array(pushResult) });
 
-const op = {
+/** The members of an operation as they travel. */
+export const OP_SHAPE = {
   v: z.literal(1),
   opId: z.string(),
   kind: z.string(),
@@ -35,7 +36,7 @@ const op = {
 };
 
 const pullRow = z.object({
-  ...op,
+  ...OP_SHAPE,
   seq: whole.min(1),
   actor: z.string(),
   receivedAt: z.string(),

@@ -1,7 +1,9 @@
+import { liveQuery } from 'dexie';
 import { askForWake } from './background-wake';
 import { browserClock, browserId, browserRandom, browserTimers } from './browser-clock-edge';
 import { browserSha256 } from './browser-sha256';
 import { browserWebLock } from './browser-web-lock';
+import { DeviceDatabase, lastPerson } from './device-database';
 import { FieldSession } from './field-session';
 import { httpNetwork } from './http-network';
 
@@ -25,6 +27,15 @@ function listen(app: FieldSession): void {
   });
 }
 
+/** Closes and opens records as other tabs of the phone are left and come to. */
+function followOtherTabs(app: FieldSession): void {
+  const device = new DeviceDatabase();
+  liveQuery(() => lastPerson(device)).subscribe({
+    next: () => void app.follow().catch(() => undefined),
+    error: () => undefined,
+  });
+}
+
 /** The field app of this page, made and started at the first call. Only in the browser. */
 export function browserFieldApp(): FieldSession {
   if (session) return session;
@@ -41,6 +52,7 @@ export function browserFieldApp(): FieldSession {
     label: phoneLabel(),
   });
   listen(session);
+  followOtherTabs(session);
   void session.start().catch(() => undefined);
   return session;
 }

@@ -1,3 +1,4 @@
+import type { SheetMark } from '@/lib/comb/sheet-letters';
 import type { OpKind } from '@/lib/protocol/op';
 import type { OpBody } from '@/lib/protocol/op-bodies';
 import type { Json } from '@/lib/protocol/canonical-json';
@@ -24,6 +25,8 @@ export interface Commands {
   openVisit(input: { nest: string; purpose: OpBody<'visit.open'>['purpose'] }): Promise<string>;
   /** Opens a reading of a visit; resolves to its id. */
   openReading(input: { nest: string; visit: string } & OpBody<'reading.open'>): Promise<string>;
+  /** Opens a reading of a filled paper sheet and puts all its marks in it, together or not at all; resolves to its id. */
+  openTypedReading(input: { nest: string; visit: string; marks: readonly SheetMark[] }): Promise<string>;
   setField(input: Target & { field: string; value: Json }): Promise<void>;
   setNote(input: Target & { text: string }): Promise<void>;
 }
@@ -62,6 +65,19 @@ export function createCommands({ maker, commit }: CommandPorts): Commands {
     openReading: async ({ nest, visit, ...body }) => {
       const reading = maker.newId();
       await record({ kind: 'reading.open', nest, visit, reading, body });
+      return reading;
+    },
+    openTypedReading: async ({ nest, visit, marks }) => {
+      const reading = maker.newId();
+      const within = { nest, visit, reading };
+      const opening = await makeOp(maker, {
+        kind: 'reading.open',
+        ...within,
+        body: { kind: 'field', source: 'paper' },
+      });
+      const drafts = [opening];
+      for (const mark of marks) drafts.push(await makeOp(maker, { kind: 'cell.mark', ...within, body: mark }));
+      await commit({ drafts });
       return reading;
     },
     setField: ({ field, value, entity, base, ...target }) => {

@@ -79,3 +79,13 @@ export async function leavingKey(db: DeviceDatabase): Promise<string | null> {
 export async function noteLeft(db: DeviceDatabase): Promise<void> {
   await db.pointers.delete('signing-out');
 }
+
+/** Nobody uses this phone any more, and it forgets this person. Their session is still to be ended. */
+export function forgetPerson(db: DeviceDatabase, person: Person): Promise<void> {
+  return db.transaction('rw', [db.pointers, db.people], async () => {
+    const key = personKey(person);
+    await db.people.delete(key);
+    await db.pointers.delete('signed-in');
+    await db.pointers.put({ id: 'signing-out', key });
+  });
+}

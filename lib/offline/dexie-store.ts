@@ -87,8 +87,24 @@ export function dexieStore(db: RecordsDatabase): Store {
       await db.meta.count();
     },
     reopen: async () => {
+      if (db.isTakenOver) throw new Error('a newer version of the app has taken the storage over');
       db.close({ disableAutoOpen: false });
       await db.open();
     },
   };
+}
+
+/**
+ * Empties a person's records in one transaction, but only when every operation that could still be needed is in a copy.
+ *
+ * @param copied the ids of the operations in that copy.
+ * @returns false, with everything still there, when the copy lacks one.
+ */
+export function emptyIfCopied(db: RecordsDatabase, copied: ReadonlySet<string>): Promise<boolean> {
+  return db.transaction('rw', db.tables, async () => {
+    const missing = await db.ops.filter((row) => row.state !== 'remote' && !copied.has(row.op.opId)).count();
+    if (missing > 0) return false;
+    await Promise.all(db.tables.map((table) => table.clear()));
+    return true;
+  });
 }

@@ -1,4 +1,12 @@
-import { DeviceDatabase, type KnownPerson, lastPerson, leavePhone, noteLeft, personKey } from './device-database';
+import {
+  DeviceDatabase,
+  type KnownPerson,
+  forgetPerson,
+  lastPerson,
+  leavePhone,
+  noteLeft,
+  personKey,
+} from './device-database';
 import type { DrainEnd } from './drain-ports';
 import type { Edges } from './edges';
 import { type Opening, openSession } from './open-session';
@@ -12,7 +20,15 @@ import { type OwnSignal, type Signal, createSignal } from './signal';
 export interface FieldStanding {
   view: SessionView;
   records: Records | null;
+  /** How other tabs of this app stand to this one. */
+  tab: TabState;
 }
+
+/**
+ * `blocked`: a tab with an older version still holds the records; they open once it lets go.
+ * `taken-over`: a tab with a newer version has them; this one has to be loaded again.
+ */
+export type TabState = 'alone' | 'blocked' | 'taken-over';
 
 /**
  * The session of one page. It opens the last person's records at once, whatever the network does, and asks the office
@@ -23,8 +39,11 @@ export class FieldSession {
   private readonly own: OwnSignal<FieldStanding> = createSignal<FieldStanding>({
     view: { kind: 'loading' },
     records: null,
+    tab: 'alone',
   });
   private asking: Promise<void> | null = null;
+  /** A deletion on its way: nobody may close the records under it. */
+  private deleting: Promise<boolean> | null = null;
 
   constructor(private readonly edges: Edges) {
     this.device = new DeviceDatabase(edges.dexie);
@@ -52,12 +71,42 @@ export class FieldSession {
 
   /** Leaves this phone. Unsent records stay on it, closed, until the same person signs in again. */
   async signOut(): Promise<void> {
-    const { view, records } = this.own.get();
+    const { view } = this.own.get();
     if (view.kind !== 'ready' && view.kind !== 'needs-sign-in') return;
     await leavePhone(this.device, view.person);
-    records?.close();
-    this.own.set({ view: { kind: 'signed-out', reachable: true }, records: null });
+    this.nobody(true);
     if (await signOutAtOffice(this.edges.network)) await noteLeft(this.device);
+  }
+
+  /**
+   * Leaves this phone and deletes the person's records from it.
+   *
+   * @param copied ids of the operations that a copy was made of.
+   * @returns false when something came after the copy: then the records stay, closed, as after `signOut`.
+   */
+  async signOutAndDelete(copied: ReadonlySet<string>): Promise<boolean> {
+    const { view, records } = this.own.get();
+    if (!records || (view.kind !== 'ready' && view.kind !== 'needs-sign-in')) return false;
+    // The person is forgotten first: a phone that dies in between has kept everything, closed.
+    this.deleting = forgetPerson(this.device, view.person).then(() => records.deleteIfCopied(copied));
+    const deleted = await this.deleting.finally(() => {
+      this.deleting = null;
+      this.nobody(true);
+    });
+    if (await signOutAtOffice(this.edges.network)) await noteLeft(this.device);
+    return deleted;
+  }
+
+  /** Somebody has left this phone, or come to it, in another tab: what is shown here may not be theirs. */
+  async follow(): Promise<void> {
+    await this.asking;
+    await this.deleting;
+    const last = await lastPerson(this.device);
+    const { records, view } = this.own.get();
+    const shown = records && personKey(records.person);
+    if (view.kind === 'loading' || shown === (last?.key ?? null)) return;
+    this.nobody(true);
+    if (last) await this.refresh();
   }
 
   private async ask(): Promise<void> {
@@ -72,7 +121,7 @@ export class FieldSession {
 
   private nobody(reachable: boolean): void {
     this.own.get().records?.close();
-    this.own.set({ view: { kind: 'signed-out', reachable }, records: null });
+    this.own.set({ view: { kind: 'signed-out', reachable }, records: null, tab: 'alone' });
   }
 
   /** Takes in what the office said about the person whose records are open. */
@@ -97,11 +146,17 @@ export class FieldSession {
     const records = new Records(this.edges, person, {
       ended: (end) => this.afterPass(records, end),
       cleared: () => this.change(records, { storageCleared: true }),
+      takenOver: () => this.takenOver(records),
+      blocked: () => this.own.set({ ...this.own.get(), tab: 'blocked' }),
     });
     const storageCleared = await records.start(this.device, person.sentinel);
     const meta = await records.store.readMeta();
     const enrolled = (meta?.deviceId ?? null) !== null;
-    this.own.set({ view: { kind: 'ready', person, enrolled, storageCleared }, records });
+    this.own.set({ view: { kind: 'ready', person, enrolled, storageCleared }, records, tab: 'alone' });
+  }
+
+  private takenOver(records: Records): void {
+    if (this.own.get().records === records) this.own.set({ ...this.own.get(), tab: 'taken-over' });
   }
 
   /** Changes the view of these records, unless others have been opened since. */

@@ -67,3 +67,10 @@ export async function readUnsent(db: RecordsDatabase): Promise<LocalOp[]> {
   const lists = await Promise.all(states.map((state) => inState(db, state, 'n').toArray()));
   return [...lists.flat(), ...(await setAside(db))];
 }
+
+/** Everything that the office's backup may not have, whole: what one needs a copy of before deleting it here. */
+export async function readUnbacked(db: RecordsDatabase): Promise<LocalOp[]> {
+  const states = ['queued', 'suspect', 'refused', 'held'] as const;
+  const lists = await Promise.all(states.map((state) => inState(db, state, 'n').toArray()));
+  return lists.flat();
+}

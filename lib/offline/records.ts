@@ -4,7 +4,7 @@ import { type CommitEntry, commitOps } from './commit-op';
 import { checkConnection } from './connection-health';
 import { type DeviceDatabase, noteOfPerson } from './device-database';
 import { RecordsDatabase, recordsName } from './dexie-database';
-import { dexieStore } from './dexie-store';
+import { dexieStore, emptyIfCopied } from './dexie-store';
 import { createDrain } from './drain';
 import type { DrainEnd, DrainPorts, Progress } from './drain-ports';
 import { officeEpoch } from './enrol-device';
@@ -32,6 +32,10 @@ export interface RecordsListener {
   ended(end: DrainEnd): void;
   /** The browser has emptied the records while they were open. */
   cleared(): void;
+  /** Another tab has taken the database over; nothing more is kept from this page. */
+  takenOver(): void;
+  /** A tab with an older version still holds the database. */
+  blocked(): void;
 }
 
 /** Roles whose phones may be enrolled. */
@@ -57,6 +61,7 @@ export class Records {
   ) {
     const { clock, newId, sha256, timers } = edges;
     this.db = new RecordsDatabase(recordsName(person.teamId, person.userId), edges.dexie);
+    this.db.listen(told);
     this.store = watchStore(dexieStore(this.db), timers);
     this.maker = { clock, newId, sha256, skewMs: () => this.skewMs };
     this.commands = createCommands({ maker: this.maker, commit: this.commit });
@@ -71,6 +76,8 @@ export class Records {
    * @returns true when the browser has emptied the records since they were last open.
    */
   async start(device: DeviceDatabase, sentinel: string | null): Promise<boolean> {
+    // Waits for a tab with an older version as long as that takes; what follows has no patience.
+    await this.db.open();
     const meta = await this.found();
     await noteOfPerson(device, this.person, { sentinel: meta.sentinel });
     this.schedule = startSchedule({
@@ -132,6 +139,19 @@ export class Records {
   /** Starts a pass now. */
   wake(reason: WakeReason): void {
     this.schedule?.wake(reason);
+  }
+
+  /**
+   * Deletes these records from the phone when every operation still needed is in a copy, and closes them either way.
+   *
+   * @returns false when the copy lacked one: then everything is still there.
+   */
+  async deleteIfCopied(copied: ReadonlySet<string>): Promise<boolean> {
+    this.schedule?.stop();
+    const emptied = await emptyIfCopied(this.db, copied);
+    this.db.close();
+    if (emptied) await this.db.delete();
+    return emptied;
   }
 
   /** Stops sending and closes the storage. Nothing is deleted. */

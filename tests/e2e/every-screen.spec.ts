@@ -49,6 +49,9 @@ const SCREENS: readonly Screen[] = [
   { name: 'field-visit', as: 'technician@tarrow.example', path: ({ visit }) => `/field/visits/${visit}` },
   { name: 'field-reading', as: 'technician@tarrow.example', path: ({ reading }) => `/field/readings/${reading}` },
   { name: 'field-unsent', as: 'technician@tarrow.example', path: () => '/field/unsent' },
+  { name: 'field-bring-in', as: 'technician@tarrow.example', path: () => '/field/unsent/bring-in' },
+  { name: 'field-sheet', as: 'technician@tarrow.example', path: ({ nest }) => `/field/nests/${nest}/sheet` },
+  { name: 'field-typed', as: 'technician@tarrow.example', path: ({ visit }) => `/field/visits/${visit}/typed` },
   { name: 'field-settings', as: 'technician@tarrow.example', path: () => '/field/settings' },
 ];
 

@@ -57,7 +57,7 @@ function EstimateWords({ estimate }: { estimate: BroodEstimate }): ReactElement 
           ))}
         </ul>
       )}
-      <Disclosure summary="Assumptions">
+      <Disclosure size="field" summary="Assumptions">
         <ul className="ml-5 list-disc">
           {assumptions.map((text) => (
             <li key={text}>{text}</li>

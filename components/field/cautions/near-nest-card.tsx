@@ -7,7 +7,7 @@ export function NearNestCard(): ReactElement {
   return (
     <Notice tone="warn" title="Before you go near">
       <p>She can sting if the nest is touched. Keep other people 3 m away. No reading on a ladder.</p>
-      <Disclosure summary="When to stop the visit" className="mt-2">
+      <Disclosure size="field" summary="When to stop the visit" className="mt-2">
         <ul className="ml-5 list-disc">
           <li>Somebody here, you too, has had a reaction beyond the sting itself, or is not sure.</li>
           <li>You would be on a ladder alone, or have no way to call for help.</li>

@@ -24,7 +24,7 @@ export function StingCard(): ReactElement {
           Call 911
         </a>
       </p>
-      <Disclosure summary="More" className="mt-3">
+      <Disclosure size="field" summary="More" className="mt-3">
         <ul className="ml-5 list-disc">
           <li>Use the emergency number of the place, if it is another one.</li>
           <li>The person’s own emergency plan and local medical direction rule. This app gives no doses.</li>

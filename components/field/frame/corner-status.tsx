@@ -23,7 +23,7 @@ export function CornerStatus({ press = null }: CornerStatusProps): ReactElement 
   return (
     <a
       href={fieldHref({ kind: 'unsent' })}
-      className={`flex min-h-field max-w-32 min-w-field items-center justify-end gap-2 text-right leading-tight font-bold no-underline ${needsYou ? 'text-stop' : 'text-ink'}`}
+      className={`ml-auto flex min-h-field max-w-32 min-w-field items-center justify-end gap-2 text-right leading-tight font-bold no-underline ${needsYou ? 'text-stop' : 'text-ink'}`}
     >
       <span>{sentence(press ? PRESS_WORDS[press] : words)}</span>
       {count > 0 && !words.includes(String(count)) && (

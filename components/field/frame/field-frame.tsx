@@ -5,6 +5,7 @@ import { HelpKey } from '@/components/field/cautions/help-key';
 import type { HelpTopic } from '@/components/field/cautions/help-topics';
 import { FIELD_ROOT } from '@/components/field/routing/field-route';
 import { Mark } from '@/components/shell/mark';
+import { ClockNotice } from './clock-notice';
 import { CornerStatus, type PressState } from './corner-status';
 import { SignInAgain } from './sign-in-again';
 
@@ -45,8 +46,8 @@ function HomeMark(): ReactElement {
 export function FieldFrame({ back, title, help, reading = false, press, children }: FieldFrameProps): ReactElement {
   return (
     <div className="flex min-h-dvh flex-col bg-paper text-field text-ink">
-      <header className="sticky top-0 z-10 border-b-3 border-ink bg-paper">
-        <div className="flex items-center gap-2 px-2">
+      <header className="print-hidden sticky top-0 z-10 border-b-3 border-ink bg-paper">
+        <div className="flex flex-wrap items-center gap-x-2 px-2">
           {back ? <BackKey {...back} /> : <HomeMark />}
           <div className="min-w-0 flex-1 leading-tight">{title}</div>
           <HelpKey topic={help} />
@@ -54,6 +55,7 @@ export function FieldFrame({ back, title, help, reading = false, press, children
         </div>
       </header>
       <SignInAgain brief={reading} />
+      {!reading && <ClockNotice />}
       {children}
     </div>
   );

@@ -17,7 +17,10 @@ export function SignInAgain({ brief }: SignInAgainProps): ReactElement | null {
   const { view } = useSession();
   if (view.kind !== 'needs-sign-in') return null;
   return (
-    <section aria-label="Sign in" className={`border-b-2 border-warn bg-warn-wash px-gap ${brief ? 'py-1' : 'py-4'}`}>
+    <section
+      aria-label="Sign in"
+      className={`print-hidden border-b-2 border-warn bg-warn-wash px-gap ${brief ? 'py-1' : 'py-4'}`}
+    >
       <p>
         <strong>Sign in again as {view.person.displayName}</strong> to send. Everything is kept on this phone.
       </p>

@@ -15,7 +15,10 @@ export function UpdateNotice({ reading }: UpdateNoticeProps): ReactElement | nul
   const [later, setLater] = useState(false);
   if (!offered || later || reading) return null;
   return (
-    <section aria-label="Update" className="border-b-2 text-field text-ink border-main bg-main-wash px-gap py-4">
+    <section
+      aria-label="Update"
+      className="print-hidden border-b-2 text-field text-ink border-main bg-main-wash px-gap py-4"
+    >
       <p role="status" className="font-bold">
         A newer version is ready.
       </p>

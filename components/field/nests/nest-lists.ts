@@ -1,4 +1,5 @@
 import { writtenOn } from '@/components/field/words/written-time';
+import { CODE_LENGTH, plainCode, sheetCode } from '@/lib/kit/sheet-code';
 import type { NestSummary } from '@/lib/offline/nest-view';
 
 /** The nests of the day, and all the others. */
@@ -18,10 +19,16 @@ export function splitByDay(nests: readonly NestSummary[], today: string): NestLi
   return lists;
 }
 
-/** Nests whose code or name holds the words, in any letter case. No words: all. */
+/** Nests whose code or name holds the words, in any letter case, or whose paper sheet bears them. No words: all. */
 export function findNests(nests: readonly NestSummary[], words: string): NestSummary[] {
   const wanted = words.trim().toLowerCase();
-  return nests.filter((nest) => `${nest.code} ${nest.name ?? ''}`.toLowerCase().includes(wanted));
+  const code = plainCode(words);
+  const mayBeCode = code.length === CODE_LENGTH;
+  return nests.filter(
+    (nest) =>
+      `${nest.code} ${nest.name ?? ''}`.toLowerCase().includes(wanted) ||
+      (mayBeCode && plainCode(sheetCode(nest.id)) === code),
+  );
 }
 
 /** What a nest is called: its name and code, or the code alone. */

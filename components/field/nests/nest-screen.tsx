@@ -1,7 +1,7 @@
 'use client';
 
 import type { ReactElement } from 'react';
-import { FieldLink } from '@/components/field/parts/field-button';
+import { FieldButton, FieldLink } from '@/components/field/parts/field-button';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import { Fetching } from '@/components/field/parts/fetching';
 import { NotOnThisPhone } from '@/components/field/parts/not-here';
@@ -85,6 +85,10 @@ function NestBody({ nest }: { nest: NestView }): ReactElement {
           <p>No reading yet. Start a visit, then read the cells.</p>
         )}
       </Part>
+      <div className="print-hidden flex flex-wrap gap-gap">
+        {nest.lastReadingId && <FieldButton onClick={() => window.print()}>Print the comb</FieldButton>}
+        <FieldLink href={fieldHref({ kind: 'sheet', id: nest.id })}>Paper sheet</FieldLink>
+      </div>
       <Part title="Visits">
         {nest.visitList.length === 0 && <p>No visit yet.</p>}
         {nest.visitList.toReversed().map((visit) => (

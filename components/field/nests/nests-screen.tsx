@@ -5,11 +5,13 @@ import { EmptyState } from '@/components/ui/empty-state';
 import { Notice } from '@/components/ui/notice';
 import { FieldLink } from '@/components/field/parts/field-button';
 import { FieldFrame } from '@/components/field/frame/field-frame';
+import { InstallHint } from '@/components/field/install/install-hint';
 import { Fetching } from '@/components/field/parts/fetching';
 import { Part } from '@/components/field/parts/part';
 import { mayRecord, usePerson } from '@/components/field/parts/person-context';
 import { Screen } from '@/components/field/parts/screen';
 import { TextLine } from '@/components/field/parts/text-line';
+import { LowSpace } from '@/components/field/settings/low-space';
 import { fieldHref } from '@/components/field/routing/field-route';
 import { useToday } from '@/components/field/words/use-today';
 import { useNests } from '@/lib/offline/hooks/use-nests';
@@ -42,7 +44,7 @@ function NestGroups({ nests }: { nests: readonly NestSummary[] }): ReactElement 
           id="find-nest"
           type="search"
           label="Find a nest"
-          hint="By code or name."
+          hint="By code or name, or the long code of a paper sheet."
           value={words}
           onChange={setWords}
           maxLength={200}
@@ -83,6 +85,8 @@ function Home({ nests }: { nests: readonly NestSummary[] }): ReactElement {
   return (
     <Screen title="Today’s nests" wide>
       <StartNest />
+      {nests.length > 0 && <InstallHint />}
+      {nests.length > 0 && <LowSpace />}
       {nests.length === 0 ? (
         <EmptyState title="No nest on this phone yet">
           <p>Start one at the nest, with or without signal. Nests of your team come here when there is signal.</p>

@@ -57,7 +57,7 @@ export function NewNestScreen(): ReactElement {
   const { state, start } = useNewNest(form);
   const put = (part: Partial<NestForm>): void => setForm({ ...form, ...part });
   return (
-    <FieldFrame back={{ href: fieldHref({ kind: 'nests' }), to: 'the nests' }} help="nests">
+    <FieldFrame back={{ href: fieldHref({ kind: 'nests' }), to: 'the nests' }} help="new-nest">
       <Screen title="Start a nest">
         <form onSubmit={(event) => void start(event)} noValidate className="flex flex-col gap-6">
           <TextLine

@@ -3,7 +3,7 @@ import { Button } from '@/components/ui/button';
 import { LinkButton } from '@/components/ui/link-button';
 
 /** Thick edges and round corners of everything one presses in the field. */
-const LOOK = 'rounded-xl border-3 touch-manipulation';
+const LOOK = 'rounded-xl border-3 touch-manipulation print:hidden';
 
 type FieldButtonProps = Omit<ComponentProps<typeof Button>, 'size'>;
 type FieldLinkProps = Omit<ComponentProps<typeof LinkButton>, 'size'>;

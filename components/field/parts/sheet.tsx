@@ -25,7 +25,7 @@ export function Sheet({ open, title, onClose, children }: SheetProps): ReactElem
       ref={dialog}
       aria-labelledby={heading}
       onClose={onClose}
-      className="m-auto mb-0 max-h-[92dvh] w-full max-w-[40rem] overflow-y-auto rounded-t-xl border-3 border-ink bg-paper p-gap text-field text-ink backdrop:bg-ink/60 lg:mb-auto lg:rounded-xl"
+      className="m-auto mb-0 max-h-[92dvh] w-full max-w-[40rem] overflow-y-auto rounded-t-xl border-3 border-ink bg-paper p-gap text-field text-ink backdrop:bg-shade/60 lg:mb-auto lg:rounded-xl"
     >
       <div className="mb-4 flex items-center justify-between gap-gap">
         <h2 id={heading} className="text-2xl font-bold">

@@ -52,6 +52,7 @@ function ReadOnlyBody({
       {!reading.blind && (
         <BroodPreview nest={reading.nest} reading={reading.id} taxon={nest?.taxon ?? null} marks={reading.marks} />
       )}
+      {!reading.blind && <FieldButton onClick={() => window.print()}>Print the comb</FieldButton>}
       {onCorrect && <FieldButton onClick={onCorrect}>Correct a cell</FieldButton>}
       <ReadingHistory reading={reading} today={today} />
     </Screen>

@@ -7,7 +7,7 @@ import type { ReadingView } from '@/lib/offline/nest-view';
 export function ReadingHistory({ reading, today }: { reading: ReadingView; today: string }): ReactElement | null {
   if (reading.history.length === 0) return null;
   return (
-    <Disclosure summary={`History (${reading.history.length})`}>
+    <Disclosure size="field" summary={`History (${reading.history.length})`}>
       <ol className="flex flex-col gap-1">
         {reading.history.map((entry) => (
           <li key={entry.opId}>

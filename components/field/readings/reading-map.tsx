@@ -1,4 +1,5 @@
 import type { ReactElement } from 'react';
+import { CombKey } from '@/components/comb/comb-key';
 import { CombPicture } from '@/components/comb/comb-picture';
 import { TallyLine } from '@/components/comb/tally-line';
 import { tallyWords } from '@/components/comb/comb-view';
@@ -17,11 +18,13 @@ export function ReadingMap({ reading }: { reading: ReadingView }): ReactElement 
     );
   }
   if (reading.marks.length === 0) return <p>No cell has a mark yet.</p>;
+  const cells = cellsOfMarks(reading.marks);
   const words = [countWords(reading.tally.cellsTotal, 'cell'), ...tallyWords(reading.tally)].join(', ');
   return (
     <div className="flex flex-col gap-3 [&_.comb-label]:text-field">
-      <CombPicture cells={cellsOfMarks(reading.marks)} label={`Comb: ${words}`} cellSize={46} />
+      <CombPicture cells={cells} label={`Comb: ${words}`} cellSize={46} />
       <TallyLine tally={reading.tally} />
+      <CombKey cells={cells} className="print-only" />
     </div>
   );
 }

@@ -23,7 +23,7 @@ export function ReadingScreen({ id }: { id: string }): ReactElement {
   const { mayMark, submitted, visit } = recorder.view;
   if (mayMark && (!submitted || correcting)) return <RecorderScreen key={id} recorder={recorder} />;
   return (
-    <FieldFrame back={{ href: fieldHref({ kind: 'visit', id: visit }), to: 'the visit' }} help="visit">
+    <FieldFrame back={{ href: fieldHref({ kind: 'visit', id: visit }), to: 'the visit' }} help="reading">
       <ReadOnly id={id} onCorrect={mayMark ? () => setCorrecting(true) : null} />
     </FieldFrame>
   );

@@ -51,7 +51,7 @@ export function KeyPad({ desk, onMore }: KeyPadProps): ReactElement {
   const { recorder, mode } = desk;
   const chosen = mode.kind === 'paint' ? mode.state : (currentMark(recorder.view)?.state ?? null);
   return (
-    <div role="group" aria-label="Keys" className="grid grid-cols-3 gap-gap">
+    <div role="group" aria-label="Keys" className="hand-mirror grid grid-cols-3 gap-gap">
       <UndoRow desk={desk} />
       <EverydayKeys chosen={chosen} tally={recorder.view.tally} onPress={(state) => chooseState(desk, state)} />
       <MarkToggles desk={desk} />

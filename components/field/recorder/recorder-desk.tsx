@@ -57,7 +57,7 @@ export function RecorderDesk({ recorder, title, expectation, onFinish }: Recorde
   const closeTools = (): void => setSheet((now) => (now === 'tools' ? 'none' : now));
   useRecorderKeys(desk);
   return (
-    <main className="flex flex-1 flex-col gap-2 px-gap pt-1 pb-gap lg:grid lg:grid-cols-[minmax(0,1fr)_28rem] lg:gap-8">
+    <main className="hand-mirror flex flex-1 flex-col gap-2 px-gap pt-1 pb-gap lg:grid lg:grid-cols-[minmax(0,1fr)_28rem] lg:gap-8">
       <h1 className="sr-only">Reading of {title}</h1>
       <RecorderComb
         desk={desk}
@@ -67,7 +67,7 @@ export function RecorderDesk({ recorder, title, expectation, onFinish }: Recorde
         onPress={setTapped}
       />
       <div className="flex flex-col gap-2 lg:justify-center lg:gap-5">
-        <div className="flex min-h-field items-center gap-3">
+        <div className="hand-mirror flex min-h-field items-center gap-3">
           <TallyHead tally={view.tally} />
           <SideKey onPress={() => setSheet('tools')}>Tools</SideKey>
           <SideKey main={view.current === null} onPress={onFinish}>

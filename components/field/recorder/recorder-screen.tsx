@@ -4,6 +4,7 @@ import { type ReactElement, useEffect, useEffectEvent, useState } from 'react';
 import { useExpectation } from '@/components/field/brood/use-expectation';
 import { FieldFrame } from '@/components/field/frame/field-frame';
 import type { PressState } from '@/components/field/frame/corner-status';
+import { usePressFeedback } from '@/components/field/hand/use-press-feedback';
 import { fieldHref } from '@/components/field/routing/field-route';
 import type { Recorder, RecorderView } from '@/lib/offline/recorder-view';
 import { countedOf } from './counted-query';
@@ -49,6 +50,7 @@ export function RecorderScreen({ recorder }: { recorder: Recorder }): ReactEleme
   };
   const expectation = useExpectation(view, label.taxon);
   useWakeLock();
+  usePressFeedback(view);
   useCounted(recorder);
   return (
     <FieldFrame

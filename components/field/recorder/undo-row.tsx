@@ -10,8 +10,8 @@ export function UndoRow({ desk }: { desk: Desk }): ReactElement {
   const mayBeNoCell = mode.kind === 'walk' && recorder.view.current !== null;
   return (
     <>
-      <div className="col-span-2 flex min-h-field items-stretch overflow-hidden rounded-xl border-3 border-ink">
-        <p id="undo-words" className="flex min-w-0 flex-1 items-center px-3 leading-tight">
+      <div className="hand-mirror col-span-2 flex min-h-field items-stretch gap-[3px] overflow-hidden rounded-xl border-3 border-ink bg-ink">
+        <p id="undo-words" className="flex min-w-0 flex-1 items-center bg-paper px-3 leading-tight">
           {undoWords ?? 'Nothing to undo'}
         </p>
         <button
@@ -19,7 +19,7 @@ export function UndoRow({ desk }: { desk: Desk }): ReactElement {
           aria-describedby="undo-words"
           aria-disabled={undoWords === null}
           onClick={() => undoWords !== null && recorder.undo()}
-          className="min-w-22 touch-manipulation border-l-3 border-ink px-3 text-xl font-bold select-none active:bg-main-wash aria-disabled:text-quiet"
+          className="min-h-field min-w-22 touch-manipulation bg-paper px-3 text-xl font-bold select-none active:bg-main-wash aria-disabled:text-quiet"
         >
           Undo
         </button>

@@ -9,6 +9,10 @@ export type FieldRoute =
   | { kind: 'visit'; id: string }
   | { kind: 'reading'; id: string }
   | { kind: 'unsent' }
+  | { kind: 'bring-in' }
+  | { kind: 'sheet'; id: string }
+  | { kind: 'blank-sheet' }
+  | { kind: 'typed'; id: string }
   | { kind: 'settings' }
   | { kind: 'unknown' };
 
@@ -21,6 +25,8 @@ const FIXED: ReadonlyMap<string, FieldRoute> = new Map([
   ['nests', { kind: 'nests' }],
   ['nests/new', { kind: 'new-nest' }],
   ['unsent', { kind: 'unsent' }],
+  ['unsent/bring-in', { kind: 'bring-in' }],
+  ['sheet', { kind: 'blank-sheet' }],
   ['settings', { kind: 'settings' }],
 ]);
 
@@ -37,6 +43,8 @@ function entityRoute(parts: readonly string[]): FieldRoute {
   if (!isUuidText(id)) return { kind: 'unknown' };
   const tail = rest.join('/');
   if (folder === 'nests' && tail === 'visits/new') return { kind: 'new-visit', id };
+  if (folder === 'nests' && tail === 'sheet') return { kind: 'sheet', id };
+  if (folder === 'visits' && tail === 'typed') return { kind: 'typed', id };
   if (tail !== '') return { kind: 'unknown' };
   if (folder === 'nests') return { kind: 'nest', id };
   if (folder === 'visits') return { kind: 'visit', id };
@@ -64,6 +72,10 @@ export function fieldHref(route: FieldRoute): string {
     visit: (id) => `/visits/${id}`,
     reading: (id) => `/readings/${id}`,
     unsent: () => '/unsent',
+    'bring-in': () => '/unsent/bring-in',
+    sheet: (id) => `/nests/${id}/sheet`,
+    'blank-sheet': () => '/sheet',
+    typed: (id) => `/visits/${id}/typed`,
     settings: () => '/settings',
     unknown: () => '',
   };

@@ -3,14 +3,15 @@
 import type { ReactElement } from 'react';
 import { DescriptionList } from '@/components/ui/description-list';
 import { FieldFrame } from '@/components/field/frame/field-frame';
+import { InstallWays } from '@/components/field/install/install-ways';
 import { Part } from '@/components/field/parts/part';
 import { usePerson } from '@/components/field/parts/person-context';
 import { Screen } from '@/components/field/parts/screen';
-import { canKeepAwake } from '@/components/field/recorder/use-wake-lock';
 import { fieldHref } from '@/components/field/routing/field-route';
 import { ROLE_WORDS } from '@/components/shell/role-words';
 import { useSession } from '@/lib/offline/hooks/use-session';
 import type { Person, SessionView } from '@/lib/offline/session-view';
+import { HandPart } from './hand-part';
 import { SignOutPart } from './sign-out-part';
 import { StoragePart } from './storage-part';
 
@@ -45,12 +46,9 @@ export function SettingsScreen(): ReactElement {
       <Screen title="Settings">
         <WhoPart person={person} view={view} />
         <StoragePart cleared={'storageCleared' in view && view.storageCleared} />
-        <Part title="Screen">
-          <p>
-            {canKeepAwake()
-              ? 'The screen stays awake while you read a comb.'
-              : 'This browser cannot keep the screen awake. Set the phone’s own sleep time to 10 minutes or more.'}
-          </p>
+        <HandPart />
+        <Part title="On the home screen">
+          <InstallWays />
         </Part>
         <SignOutPart />
       </Screen>

@@ -2,12 +2,14 @@
 
 import { type ReactElement, useState } from 'react';
 import { countWords } from '@/components/ui/date-words';
+import { Disclosure } from '@/components/ui/disclosure';
 import { Notice } from '@/components/ui/notice';
 import { FieldButton } from '@/components/field/parts/field-button';
 import { Part } from '@/components/field/parts/part';
 import { CopyUnsentKey } from '@/components/field/unsent/copy-unsent-key';
 import { type Outbox, useOutbox } from '@/lib/offline/hooks/use-outbox';
 import { useSession } from '@/lib/offline/hooks/use-session';
+import { DeleteHere } from './delete-here';
 
 /** Everything that has not arrived: unsent or held up. It stays on the phone when its person leaves. */
 function openItems({ waiting, attention }: Outbox): number {
@@ -22,25 +24,6 @@ function NotNow({ unsaved }: { unsaved: number }): ReactElement {
         <p>Go back to the reading and try again, or make a copy. Signing out now would lose them.</p>
       </Notice>
       <CopyUnsentKey>Copy of everything unsent</CopyUnsentKey>
-    </>
-  );
-}
-
-/** Warns about unsent work and offers to send or copy it first. */
-function StillHere({ outbox }: { outbox: Outbox }): ReactElement {
-  return (
-    <>
-      <Notice tone="warn" title={`Still on this phone: ${countWords(openItems(outbox), 'item')}`}>
-        <p>
-          Send first. If you sign out all the same, they stay closed on this phone and go when you sign in here again.
-        </p>
-      </Notice>
-      <div className="flex flex-wrap items-start gap-gap">
-        <FieldButton tone="main" onClick={outbox.sendNow} disabled={outbox.busy}>
-          {outbox.busy ? 'Sending …' : 'Send now'}
-        </FieldButton>
-        <CopyUnsentKey>Copy of everything unsent</CopyUnsentKey>
-      </div>
     </>
   );
 }
@@ -71,18 +54,37 @@ function SignOutKey({ children }: { children: string }): ReactElement {
   );
 }
 
-function WaysOut({ outbox }: { outbox: Outbox }): ReactElement {
-  if (outbox.unsaved > 0) return <NotNow unsaved={outbox.unsaved} />;
-  if (openItems(outbox) === 0) return <SignOutKey>Sign out</SignOutKey>;
+/** The three ways out with unsent work, those that delete nothing first. */
+function ThreeWays({ outbox }: { outbox: Outbox }): ReactElement {
   return (
     <>
-      <StillHere outbox={outbox} />
-      <SignOutKey>Sign out and keep them here</SignOutKey>
+      <Notice tone="warn" title={`Still on this phone: ${countWords(openItems(outbox), 'item')}`}>
+        <p>Send first where there is signal. Without signal, keep them here.</p>
+      </Notice>
+      <FieldButton tone="main" onClick={outbox.sendNow} disabled={outbox.busy}>
+        {outbox.busy ? 'Sending …' : 'Send now'}
+      </FieldButton>
+      <div className="flex flex-col gap-2">
+        <SignOutKey>Sign out and keep them here</SignOutKey>
+        <p className="text-quiet">
+          They stay closed on this phone. Whoever signs in next sees nothing of them; they go when you sign in here
+          again.
+        </p>
+      </div>
+      <Disclosure size="field" summary="Make a copy, then delete them here">
+        <DeleteHere outbox={outbox} />
+      </Disclosure>
     </>
   );
 }
 
-/** The way out: open when everything has arrived, with a warning when something is unsent, shut when it would lose work. */
+function WaysOut({ outbox }: { outbox: Outbox }): ReactElement {
+  if (outbox.unsaved > 0) return <NotNow unsaved={outbox.unsaved} />;
+  if (openItems(outbox) === 0) return <SignOutKey>Sign out</SignOutKey>;
+  return <ThreeWays outbox={outbox} />;
+}
+
+/** The way out: open when everything has arrived, three ways when something is unsent, shut when it would lose work. */
 export function SignOutPart(): ReactElement {
   const outbox = useOutbox();
   return <Part title="Sign out">{outbox ? <WaysOut outbox={outbox} /> : <p>Looking for unsent work …</p>}</Part>;

@@ -28,10 +28,18 @@ export async function readStorage(): Promise<StorageSpace> {
 
 const MEGABYTE = 1_000_000;
 
+/** Below this many megabytes a person is asked to make room. */
+const LEAST_MEGABYTES = 50;
+
+/** Is so little room left that a person should know? */
+export function isLow(left: number | null): boolean {
+  return left !== null && left < LEAST_MEGABYTES * MEGABYTE;
+}
+
 /** Room in words a person can weigh: `about 2,400 MB left`. */
 export function spaceWords(left: number | null): string {
   if (left === null) return 'This browser does not say how much room is left.';
   const megabytes = Math.floor(left / MEGABYTE);
-  if (megabytes < 50) return `Only about ${megabytes} MB left. Make room on the phone.`;
+  if (isLow(left)) return `Only about ${megabytes} MB left. Make room on the phone.`;
   return `About ${megabytes.toLocaleString('en')} MB left for records.`;
 }

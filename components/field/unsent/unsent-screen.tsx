@@ -57,6 +57,7 @@ function UnsentBody({ outbox }: { outbox: Outbox }): ReactElement {
           nothing here.
         </p>
         <CopyUnsentKey>Copy of everything unsent</CopyUnsentKey>
+        <FieldLink href={fieldHref({ kind: 'bring-in' })}>Take in a copy from another phone</FieldLink>
       </Part>
       <FieldLink href={fieldHref({ kind: 'settings' })}>Settings</FieldLink>
     </Screen>

@@ -57,7 +57,7 @@ function NewVisit({ nest }: { nest: NestView }): ReactElement {
 export function NewVisitScreen({ id }: { id: string }): ReactElement {
   const nest = useNest(id);
   return (
-    <FieldFrame back={{ href: fieldHref({ kind: 'nest', id }), to: 'the nest' }} help="visit">
+    <FieldFrame back={{ href: fieldHref({ kind: 'nest', id }), to: 'the nest' }} help="new-visit">
       {nest === undefined && <Fetching what="Nest" />}
       {nest === null && <NotOnThisPhone what="nest" />}
       {nest && <NewVisit nest={nest} />}

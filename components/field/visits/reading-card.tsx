@@ -22,8 +22,8 @@ function Contents({ id }: { id: string }): ReactElement | null {
   if (!reading || reading.blind) return null;
   const cells = countWords(reading.tally.cellsTotal, 'cell');
   return (
-    <span className="flex items-center justify-between gap-4">
-      <span>{[cells, ...tallyWords(reading.tally)].join(', ')}</span>
+    <span className="flex flex-wrap items-center justify-between gap-x-4">
+      <span className="min-w-0 flex-1 basis-40">{[cells, ...tallyWords(reading.tally)].join(', ')}</span>
       <CombThumb marks={reading.marks} />
     </span>
   );
@@ -37,7 +37,7 @@ export function ReadingCard({ reading, today }: ReadingCardProps): ReactElement 
     <li>
       <a
         href={fieldHref({ kind: 'reading', id: reading.id })}
-        className="flex min-h-key flex-col gap-1 rounded-xl border-3 border-ink bg-paper p-4 text-ink no-underline hover:bg-wash"
+        className="flex min-h-key flex-col [overflow-wrap:anywhere] gap-1 rounded-xl border-3 border-ink bg-paper p-4 text-ink no-underline hover:bg-wash"
       >
         <span className="font-bold">{title}</span>
         <span className="text-quiet">

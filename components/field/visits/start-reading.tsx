@@ -1,7 +1,7 @@
 'use client';
 
 import { type ReactElement, useState } from 'react';
-import { FieldButton } from '@/components/field/parts/field-button';
+import { FieldButton, FieldLink } from '@/components/field/parts/field-button';
 import { ComeDownCard } from '@/components/field/cautions/near-nest-card';
 import { Choices } from '@/components/field/parts/choices';
 import { CountField } from '@/components/field/parts/count-field';
@@ -52,6 +52,9 @@ export function StartReading({ visit, open, onClose }: StartReadingProps): React
       <div className="flex flex-col gap-6">
         {source === 'phone' && <ComeDownCard />}
         <Choices inline legend="What do you read from?" choices={SOURCE_CHOICES} value={source} onChange={setSource} />
+        {source === 'paper' && (
+          <FieldLink href={fieldHref({ kind: 'typed', id: visit.id })}>Type the whole sheet in, ring by ring</FieldLink>
+        )}
         <CountField value={counted} onChange={setCounted} />
         {state === 'failed' && <NotSavedNotice what="the reading" />}
         <FieldButton tone="main" onClick={() => void start(source, counted)} className="text-xl">

@@ -2,10 +2,12 @@
 
 import { browserClock } from '@/lib/offline/browser-clock-edge';
 import { acknowledge } from '@/lib/offline/acknowledge';
-import { exportUnsent } from '@/lib/offline/export-unsent';
+import { browserSha256 } from '@/lib/offline/browser-sha256';
+import type { LocalOp } from '@/lib/offline/local-op';
 import type { OutboxItem, OutboxLists } from '@/lib/offline/read-outbox';
-import { readOutbox, readUnsent } from '@/lib/offline/read-outbox';
+import { readOutbox, readUnbacked, readUnsent } from '@/lib/offline/read-outbox';
 import type { Records } from '@/lib/offline/records';
+import { writeUnsentFile } from '@/lib/offline/unsent-file';
 import { useActivity } from './use-activity';
 import { useRead } from './use-read';
 import { useRecords } from './use-standing';
@@ -24,13 +26,19 @@ export interface Outbox extends OutboxLists {
   acknowledge(): Promise<void>;
   /** Everything that is not at the office, as one JSON file to hand over. */
   exportUnsent(): Promise<Blob>;
+  /** Everything that the office's backup may not have, and the ids in it: the copy to make before deleting it here. */
+  exportAll(): Promise<{ file: Blob; opIds: ReadonlySet<string> }>;
 }
 
-async function unsentFile(records: Records): Promise<Blob> {
-  const rows = await readUnsent(records.db);
+async function unsentFile(records: Records, rows: readonly LocalOp[]): Promise<Blob> {
   const exportedAt = new Date(browserClock.now()).toISOString();
-  const text = exportUnsent({ person: records.person, exportedAt, rows, notSaved: records.notSaved() });
-  return new Blob([text], { type: 'application/json' });
+  const unsent = { person: records.person, exportedAt, rows, notSaved: records.notSaved() };
+  return new Blob([await writeUnsentFile(browserSha256, unsent)], { type: 'application/json' });
+}
+
+async function wholeFile(records: Records): Promise<{ file: Blob; opIds: ReadonlySet<string> }> {
+  const rows = await readUnbacked(records.db);
+  return { file: await unsentFile(records, rows), opIds: new Set(rows.map(({ op }) => op.opId)) };
 }
 
 /** What is not at the office yet. Undefined while loading. */
@@ -49,6 +57,7 @@ export function useOutbox(): Outbox | undefined {
         records.store,
         lists.attention.map((item) => item.opId),
       ),
-    exportUnsent: () => unsentFile(records),
+    exportUnsent: async () => unsentFile(records, await readUnsent(records.db)),
+    exportAll: () => wholeFile(records),
   };
 }

@@ -5,7 +5,7 @@ import { browserFieldApp } from '@/lib/offline/browser-field-app';
 import type { FieldStanding } from '@/lib/offline/field-session';
 import type { Records } from '@/lib/offline/records';
 
-const PRERENDERED: FieldStanding = { view: { kind: 'loading' }, records: null };
+const PRERENDERED: FieldStanding = { view: { kind: 'loading' }, records: null, tab: 'alone' };
 
 function subscribe(listener: () => void): () => void {
   return browserFieldApp().standing.subscribe(listener);

@@ -1,9 +1,8 @@
 import { describe, expect, test } from 'vitest';
 import { acknowledge } from '@/lib/offline/acknowledge';
 import { dexieStore } from '@/lib/offline/dexie-store';
-import { exportUnsent } from '@/lib/offline/export-unsent';
 import type { LocalOp } from '@/lib/offline/local-op';
-import { readOutbox, readUnsent } from '@/lib/offline/read-outbox';
+import { readOutbox, readUnbacked, readUnsent } from '@/lib/offline/read-outbox';
 import { readNest, readNests, readReading, readVisit } from '@/lib/offline/read-records';
 import { freshDatabase } from '@/tests/support/sim/fresh-database';
 import { ME, NEST, READING, VISIT, id, meta, row } from '@/tests/support/sim/local-ops';
@@ -58,29 +57,11 @@ describe('the outbox', () => {
     expect((await readOutbox(db)).attention).toHaveLength(3);
   });
 
-  test('is exported whole, with what could not be saved', async () => {
+  test('gives what a copy needs: everything unsent, and before a deletion everything the backup may lack', async () => {
     const { db } = await phone();
-    const rows = await readUnsent(db);
-    expect(rows.map(({ n }) => n).sort((a, b) => a - b)).toEqual([4, 5, 6, 7]);
-    const person = {
-      teamId: 't',
-      teamName: 'T',
-      userId: ME,
-      displayName: 'Me',
-      role: 'technician',
-      zone: 'UTC',
-      members: [],
-    } as const;
-    const { bodyHash: _hash, ...draft } = mark(11).op;
-    const text = exportUnsent({
-      person: { ...person, members: [] },
-      exportedAt: '2026-06-16T09:41:00.000Z',
-      rows,
-      notSaved: [draft],
-    });
-    const file: { ops: { op: unknown; state: string }[]; notSaved: unknown[] } = JSON.parse(text);
-    expect(file.ops.map(({ op }) => op)).toEqual(rows.map(({ op }) => op));
-    expect(file.notSaved).toEqual([draft]);
+    const numbers = (rows: readonly LocalOp[]) => rows.map(({ n }) => n).sort((a, b) => a - b);
+    expect(numbers(await readUnsent(db))).toEqual([4, 5, 6, 7]);
+    expect(numbers(await readUnbacked(db))).toEqual([1, 2, 3, 4, 5, 6, 7, 8]);
   });
 });
 

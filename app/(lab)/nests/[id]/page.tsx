@@ -8,6 +8,7 @@ import { NestFacts } from '@/components/lab/nest-facts';
 import { NestTitle } from '@/components/lab/nest-title';
 import { NoReading } from '@/components/lab/no-reading';
 import { TemperatureSection } from '@/components/lab/temperature/temperature-section';
+import { PaperLinks } from '@/components/lab/paper-links';
 import { WhenBlock } from '@/components/lab/when-block';
 import { dateWords } from '@/components/ui/date-words';
 import { Section } from '@/components/ui/section';
@@ -53,6 +54,7 @@ export default async function NestPage({ params, searchParams }: NestPageProps):
           ) : (
             <NoReading hidden={nest.visits.some(({ readings }) => readings.length > 0)} />
           )}
+          <PaperLinks nest={nest.id} />
         </div>
         <div className="min-w-0 print:mt-6">
           <Section id="when" title="When" aside={`as known on ${dateWords(asOf, data.today)}`}>

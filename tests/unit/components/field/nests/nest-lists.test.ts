@@ -44,6 +44,14 @@ describe('the nests of the day', () => {
   });
 });
 
+test('a nest is found by the whole code of its paper sheet, however it is typed', () => {
+  const id = '01890000-0000-7000-8000-00000000001f';
+  const nests = [nest('N12', { id }), nest('N13', { id: '01890000-0000-7000-8000-00000000002f' })];
+  expect(codes(findNests(nests, '2222-2222-222Z'))).toEqual(['N12']);
+  expect(codes(findNests(nests, '22222222222z'))).toEqual(['N12']);
+  expect(codes(findNests(nests, '2222-2222-222'))).toEqual([]);
+});
+
 test('a nest is found by code or name in any letter case', () => {
   const nests = [nest('N12', { name: 'Bandstand roof' }), nest('N07', { name: 'Tram depot' })];
   expect(codes(findNests(nests, ' BAND '))).toEqual(['N12']);

@@ -11,6 +11,10 @@ const ROUTES: readonly [path: string, route: FieldRoute][] = [
   [`/field/visits/${ID}`, { kind: 'visit', id: ID }],
   [`/field/readings/${ID}`, { kind: 'reading', id: ID }],
   ['/field/unsent', { kind: 'unsent' }],
+  ['/field/unsent/bring-in', { kind: 'bring-in' }],
+  [`/field/nests/${ID}/sheet`, { kind: 'sheet', id: ID }],
+  ['/field/sheet', { kind: 'blank-sheet' }],
+  [`/field/visits/${ID}/typed`, { kind: 'typed', id: ID }],
   ['/field/settings', { kind: 'settings' }],
 ];
 

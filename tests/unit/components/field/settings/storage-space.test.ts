@@ -1,5 +1,5 @@
 import { afterEach, describe, expect, test, vi } from 'vitest';
-import { keepStorage, readStorage, spaceWords } from '@/components/field/settings/storage-space';
+import { isLow, keepStorage, readStorage, spaceWords } from '@/components/field/settings/storage-space';
 
 afterEach(() => vi.unstubAllGlobals());
 
@@ -16,6 +16,10 @@ describe('the phone’s storage', () => {
     expect(await keepStorage()).toBe(false);
     vi.stubGlobal('navigator', { storage: { persist: () => Promise.reject(new Error('no')) } });
     expect(await keepStorage()).toBe(false);
+  });
+
+  test('is low below 50 MB, and never where the browser does not say', () => {
+    expect([49_999_999, 50_000_000, null].map(isLow)).toEqual([true, false, false]);
   });
 
   test('is said in megabytes, with a warning when there is little', () => {
