@@ -22,6 +22,9 @@ import { defineRetraction } from './retraction';
 import { defineSettlement } from './settlement';
 import { defineOutcome } from './outcome';
 import { defineEstimate } from './estimate';
+import { defineInvitation } from './invitation';
+import { defineResetToken } from './reset-token';
+import { defineLetter } from './letter';
 
 /**
  * Defines every model on a connection and ties them together.
@@ -52,6 +55,9 @@ export function defineModels(sequelize: Sequelize) {
     Settlement: defineSettlement(sequelize),
     Outcome: defineOutcome(sequelize),
     Estimate: defineEstimate(sequelize),
+    Invitation: defineInvitation(sequelize),
+    ResetToken: defineResetToken(sequelize),
+    Letter: defineLetter(sequelize),
   };
 }
 
