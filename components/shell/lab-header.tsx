@@ -13,10 +13,13 @@ export interface SignedInPerson {
 }
 
 /** The parts of the lab side; a part whose rights a role lacks is not offered. */
-const PARTS: readonly { href: string; title: string; not?: RoleName }[] = [
+const PARTS: readonly { href: string; title: string; not?: RoleName; only?: RoleName }[] = [
   { href: '/nests', title: 'Nests' },
   { href: '/hosts', title: 'Hosts', not: 'researcher' },
   { href: '/downloads', title: 'Downloads', not: 'technician' },
+  { href: '/members', title: 'Members', only: 'coordinator' },
+  { href: '/phones', title: 'Phones', not: 'researcher' },
+  { href: '/start', title: 'First steps' },
 ];
 
 /** The head of every lab page: mark, parts, the phone app, who is signed in. */
@@ -30,7 +33,7 @@ export function LabHeader({ person }: { person: SignedInPerson }): ReactElement 
           Undereave
         </Link>
         <nav aria-label="Parts" className="order-last flex w-full flex-wrap gap-x-6 md:order-none md:w-auto">
-          {PARTS.filter((part) => part.not !== role).map(({ href, title }) => (
+          {PARTS.filter(({ not, only }) => not !== role && (only ?? role) === role).map(({ href, title }) => (
             <NavLink key={href} href={href}>
               {title}
             </NavLink>
@@ -46,7 +49,10 @@ export function LabHeader({ person }: { person: SignedInPerson }): ReactElement 
         </nav>
         <div className="ml-auto flex flex-wrap items-center justify-end gap-x-3 text-right text-sm leading-tight">
           <p>
-            <span className="font-bold">{displayName}</span>, {ROLE_WORDS[role]}
+            <Link href="/account" className="inline-flex min-h-6 items-center font-bold underline underline-offset-4">
+              {displayName}
+            </Link>
+            , {ROLE_WORDS[role]}
             <span className="block text-quiet max-sm:sr-only">{teamName}</span>
           </p>
           <SignOutButton />

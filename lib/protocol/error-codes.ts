@@ -21,7 +21,8 @@ export const ERRORS = {
   'password-length': { status: 400, title: 'A password has 15 to 256 characters. A few words in a row do well.' },
   common: {
     status: 400,
-    title: 'This password would be guessed early: it is made of common words or of names that belong here. Choose another.',
+    title:
+      'This password would be guessed early: it is made of common words or of names that belong here. Choose another.',
   },
   device: { status: 400, title: 'Name the enrolled device in the X-Device header.' },
   signin: { status: 401, title: 'Sign in first. Nothing on your phone is lost.' },

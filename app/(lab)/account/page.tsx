@@ -48,8 +48,8 @@ export default async function AccountPage(): Promise<ReactElement> {
               then="/sign-in"
             >
               <p>
-                Every sign-in of yours to this team ends at once. Send what your phones hold first: afterwards only a new
-                invitation lets them send it.
+                Every sign-in of yours to this team ends at once. Send what your phones hold first: afterwards only a
+                new invitation lets them send it.
               </p>
             </ConfirmAct>
           </Section>

@@ -21,7 +21,10 @@ export default async function LettersPage(): Promise<ReactElement> {
       <PageTitle under={session.teamName}>Letters</PageTitle>
       {box === 'kept' && (
         <Notice className="mb-5 max-w-text">
-          <p>This is a demo: letters are kept here instead of being sent, with their links. Elsewhere only their readers see them.</p>
+          <p>
+            This is a demo: letters are kept here instead of being sent, with their links. Elsewhere only their readers
+            see them.
+          </p>
         </Notice>
       )}
       {list.length === 0 ? (

@@ -21,17 +21,15 @@ const KINDS: Readonly<Record<string, string>> = {
 
 /** Web addresses of this product in a letter's text, made pressable. */
 function withLinks(text: string): ReactElement[] {
-  return text
-    .split(/(https?:\/\/\S+)/)
-    .map((part, index) =>
-      /^https?:/.test(part) ? (
-        <a key={index} href={part} className="text-main underline [overflow-wrap:anywhere]">
-          {part}
-        </a>
-      ) : (
-        <span key={index}>{part}</span>
-      ),
-    );
+  return text.split(/(https?:\/\/\S+)/).map((part, index) =>
+    /^https?:/.test(part) ? (
+      <a key={index} href={part} className="text-main underline [overflow-wrap:anywhere]">
+        {part}
+      </a>
+    ) : (
+      <span key={index}>{part}</span>
+    ),
+  );
 }
 
 /** Letters, newest first; in the demo with their words. */

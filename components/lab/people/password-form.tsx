@@ -30,9 +30,7 @@ export function PasswordForm({ email }: { email: string }): ReactElement {
   return (
     <form onSubmit={(event) => void change(event)} aria-label="Change the password" className="flex flex-col gap-4">
       <FormTrouble words={trouble} />
-      <div role="status">
-        {isDone && <Notice>The new password stands. All your other sign-ins were ended.</Notice>}
-      </div>
+      <div role="status">{isDone && <Notice>The new password stands. All your other sign-ins were ended.</Notice>}</div>
       <AccountLine email={email} />
       <Field id="current-password" label="Present password" required>
         {(control) => (

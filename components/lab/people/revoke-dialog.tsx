@@ -33,12 +33,7 @@ export function RevokeDialog({ phone }: { phone: PhoneView }): ReactElement {
           <p>{unsentWarning(phone.unsent)}</p>
           <Field id={`reason-${phone.id}`} label="Reason" required error={trouble}>
             {(control) => (
-              <Input
-                {...control}
-                maxLength={200}
-                value={reason}
-                onChange={(event) => setReason(event.target.value)}
-              />
+              <Input {...control} maxLength={200} value={reason} onChange={(event) => setReason(event.target.value)} />
             )}
           </Field>
           <div className="mt-2 flex flex-wrap gap-3">

@@ -21,7 +21,13 @@ const OWN_DISTINCT = 4;
 const SHORTEST_PART = 3;
 
 /** Rows that fingers run along, either way. */
-const ROWS = ['abcdefghijklmnopqrstuvwxyz', 'qwertyuiopasdfghjklzxcvbnm', 'qwertzuiop', 'azertyuiop', 'qazwsxedcrfvtgb'];
+const ROWS = [
+  'abcdefghijklmnopqrstuvwxyz',
+  'qwertyuiopasdfghjklzxcvbnm',
+  'qwertzuiop',
+  'azertyuiop',
+  'qazwsxedcrfvtgb',
+];
 const SHORTEST_RUN = 4;
 
 const PRODUCT = 'undereave';

@@ -29,11 +29,7 @@ export async function homeTeam(userId: string): Promise<string | null> {
 }
 
 /** Writes the row of a new sign-in to a team; the caller has checked the membership. */
-export async function openSessionIn(
-  teamId: string,
-  { userId, agent }: NewSession,
-  nowMs: number,
-): Promise<SessionRef> {
+export async function openSessionIn(teamId: string, { userId, agent }: NewSession, nowMs: number): Promise<SessionRef> {
   const sessionId = newId();
   await database().models.Session.create({
     team_id: toBinary(teamId),

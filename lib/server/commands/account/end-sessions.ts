@@ -17,11 +17,7 @@ export interface EndedSessions {
  * @param text the session's id as it stands in the address.
  * @throws HttpProblem `not-found` for a session that is over or somebody else's.
  */
-export async function endOwnSession(
-  ctx: TeamContext,
-  text: string | undefined,
-  nowMs: number,
-): Promise<EndedSessions> {
+export async function endOwnSession(ctx: TeamContext, text: string | undefined, nowMs: number): Promise<EndedSessions> {
   const id = idInPath(text);
   return teamAct(ctx, nowMs, async (transaction) => {
     const [ended] = await database().models.Session.update(
