@@ -1,6 +1,5 @@
-import { createServer, type Socket } from 'node:net';
 import { once } from 'node:events';
-import type { AddressInfo } from 'node:net';
+import { type AddressInfo, createServer, type Socket } from 'node:net';
 
 /** A mail server of a test: takes every letter, or refuses every recipient. */
 export interface TestMailServer {
