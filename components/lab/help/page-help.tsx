@@ -11,7 +11,7 @@ export function PageHelp(): ReactElement | null {
   const words = helpFor(path);
   if (!words) return null;
   return (
-    <Disclosure key={path} summary="What is this page?" className="print-hidden mb-3 text-sm">
+    <Disclosure key={path} summary="What is this page?" className="print-hidden -mt-3 mb-2 text-sm">
       <div className="max-w-text text-base">
         {words.map((line) => (
           <p key={line} className="mb-1">

@@ -44,7 +44,7 @@ export function ConfirmAct({ words, label, tone, title, children, act, path, the
         {words}
       </Button>
       <Dialog open={isOpen} onClose={() => setOpen(false)} title={title}>
-        <div className="flex flex-col gap-3 text-left">
+        <div className="flex flex-col gap-3">
           {children}
           <FormTrouble words={trouble} />
           <div className="mt-2 flex flex-wrap gap-3">

@@ -42,7 +42,7 @@ export function InvitationsTable({ invitations, ...time }: InvitationsTableProps
         <thead>
           <tr>
             <HeadCell>E-mail</HeadCell>
-            <HeadCell>Standing</HeadCell>
+            <HeadCell className="max-sm:hidden">Standing</HeadCell>
             <HeadCell>
               <span className="sr-only">Acts</span>
             </HeadCell>
@@ -54,8 +54,11 @@ export function InvitationsTable({ invitations, ...time }: InvitationsTableProps
               <BodyCell className="[overflow-wrap:anywhere]">
                 {invitation.email}
                 <span className="block text-sm text-quiet">{ROLE_WORDS[invitation.role]}</span>
+                <span className="block text-sm sm:hidden">
+                  <Standing invitation={invitation} {...time} />
+                </span>
               </BodyCell>
-              <BodyCell>
+              <BodyCell className="max-sm:hidden">
                 <Standing invitation={invitation} {...time} />
               </BodyCell>
               <BodyCell>

@@ -30,6 +30,27 @@ function Part({ title, children, act }: PartProps): ReactElement {
   );
 }
 
+/** Two presses, because only a new invitation takes it back. */
+function EndButtons({ isSending, onEnd }: { isSending: boolean; onEnd: () => void }): ReactElement {
+  const [isAsked, setAsked] = useState(false);
+  if (!isAsked) {
+    return (
+      <Button tone="stop" onClick={() => setAsked(true)}>
+        End the membership …
+      </Button>
+    );
+  }
+  return (
+    <div role="group" aria-label="End the membership?" className="flex flex-wrap items-center gap-3">
+      <p role="status">Only a new invitation takes it back.</p>
+      <Button autoFocus tone="stop" disabled={isSending} onClick={onEnd}>
+        End it
+      </Button>
+      <Button onClick={() => setAsked(false)}>Leave it</Button>
+    </div>
+  );
+}
+
 /** Role, sign-ins and membership of one person, each with what follows from it. */
 export function MemberDialog({ member }: { member: MemberView }): ReactElement {
   const [isOpen, setOpen] = useState(false);
@@ -48,7 +69,7 @@ export function MemberDialog({ member }: { member: MemberView }): ReactElement {
         Change
       </Button>
       <Dialog open={isOpen} onClose={() => setOpen(false)} title={member.name}>
-        <div className="flex flex-col gap-4 text-left">
+        <div className="flex flex-col gap-4">
           <FormTrouble words={trouble} />
           <div className="flex flex-wrap items-end gap-3">
             <Field id={`role-${member.id}`} label="Role" hint="Counts from the next page on." className="min-w-52 grow">
@@ -68,14 +89,7 @@ export function MemberDialog({ member }: { member: MemberView }): ReactElement {
           >
             {`Signed in ${countWords(member.sessions, 'time')} to this team. Ended at once; what a phone has not sent stays on it.`}
           </Part>
-          <Part
-            title="Membership"
-            act={
-              <Button tone="stop" disabled={isSending} onClick={() => void act('end')}>
-                End the membership
-              </Button>
-            }
-          >
+          <Part title="Membership" act={<EndButtons isSending={isSending} onEnd={() => void act('end')} />}>
             Every sign-in to this team ends at once. What this person recorded stays, under their name.
           </Part>
           <Button className="self-start" onClick={() => setOpen(false)}>

@@ -39,8 +39,10 @@ export function MembersTable({ members, ...time }: MembersTableProps): ReactElem
             </BodyCell>
             <BodyCell className="max-sm:hidden">{ROLE_WORDS[member.role]}</BodyCell>
             <BodyCell className="whitespace-nowrap max-sm:hidden">{lastHere(member, time)}</BodyCell>
-            <BodyCell className="text-right">
-              <MemberDialog key={`${member.role}${member.sessions}`} member={member} />
+            <BodyCell>
+              <div className="flex justify-end">
+                <MemberDialog key={`${member.role}${member.sessions}`} member={member} />
+              </div>
             </BodyCell>
           </tr>
         ))}

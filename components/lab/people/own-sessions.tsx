@@ -43,17 +43,19 @@ export function OwnSessions({ sessions, showTeams, zone, today }: OwnSessionsPro
                 <span className="block text-sm text-quiet">since {momentWords(createdAt, zone, today)}</span>
               </BodyCell>
               <BodyCell>{here ? 'here, now' : momentWords(lastSeenAt, zone, today)}</BodyCell>
-              <BodyCell className="text-right">
+              <BodyCell>
                 {!here && (
-                  <ConfirmAct
-                    words="End"
-                    label={`End the sign-in of ${agent || 'a browser'}`}
-                    title="End this sign-in?"
-                    act="End it"
-                    path={`/api/account/sessions/${id}/end`}
-                  >
-                    <p>Its next page asks for the password. What a phone has not sent stays on it.</p>
-                  </ConfirmAct>
+                  <div className="flex justify-end">
+                    <ConfirmAct
+                      words="End"
+                      label={`End the sign-in of ${agent || 'a browser'}`}
+                      title="End this sign-in?"
+                      act="End it"
+                      path={`/api/account/sessions/${id}/end`}
+                    >
+                      <p>Its next page asks for the password. What a phone has not sent stays on it.</p>
+                    </ConfirmAct>
+                  </div>
                 )}
               </BodyCell>
             </tr>

@@ -33,8 +33,10 @@ export function PhonesTable({ phones, zone, today }: PhonesProps): ReactElement 
             </BodyCell>
             <BodyCell>{momentWords(phone.lastSeenAt, zone, today)}</BodyCell>
             <BodyCell className={phone.unsent ? 'font-bold text-warn' : ''}>{unsentWords(phone.unsent)}</BodyCell>
-            <BodyCell className="text-right">
-              <RevokeDialog phone={phone} />
+            <BodyCell>
+              <div className="flex justify-end">
+                <RevokeDialog phone={phone} />
+              </div>
             </BodyCell>
           </tr>
         ))}

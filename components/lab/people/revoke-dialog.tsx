@@ -28,7 +28,7 @@ export function RevokeDialog({ phone }: { phone: PhoneView }): ReactElement {
         Withdraw
       </Button>
       <Dialog open={isOpen} onClose={() => setOpen(false)} title={`Withdraw ${phoneName(phone)}?`}>
-        <form onSubmit={(event) => void revoke(event)} className="flex flex-col gap-3 text-left">
+        <form onSubmit={(event) => void revoke(event)} className="flex flex-col gap-3">
           <p>Its next request is refused. This cannot be undone: a phone that turns up again is enrolled anew.</p>
           <p>{unsentWarning(phone.unsent)}</p>
           <Field id={`reason-${phone.id}`} label="Reason" required error={trouble}>
