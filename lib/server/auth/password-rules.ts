@@ -49,15 +49,15 @@ function reversed(text: string): string {
   return [...text].reverse().join('');
 }
 
-function runsOf(row: string): string[] {
-  const runs: string[] = [];
-  for (let length = row.length; length >= SHORTEST_RUN; length--) {
-    for (let start = 0; start + length <= row.length; start++) runs.push(row.slice(start, start + length));
-  }
-  return runs;
+function piecesOf(row: string): string[] {
+  return Array.from({ length: row.length - SHORTEST_RUN + 1 }, (_, at) => row.slice(at, at + SHORTEST_RUN));
 }
 
-const RUNS = ROWS.flatMap((row) => [...runsOf(row), ...runsOf(reversed(row))]);
+/** Every piece of a row, either way; longer runs are made of these. */
+const RUNS = ROWS.flatMap((row) => [...piecesOf(row), ...piecesOf(reversed(row))]);
+
+/** What is tried first, whoever the password is for. */
+const TRIED_FIRST: readonly string[] = [...COMMON_WORDS, ...RUNS];
 
 /** The text without figures, spaces and signs; letters of every script and emoji stay. */
 function lettersOf(text: string): string {
@@ -84,16 +84,22 @@ function partsOf(text: string): string[] {
     .filter((part) => part.length >= SHORTEST_PART);
 }
 
-function longestFirst(words: readonly string[]): string[] {
-  return [...new Set(words)].sort((a, b) => b.length - a.length);
+/** What is left of a text when every place that belongs to one of these words is taken out of it. */
+function without(text: string, words: ReadonlySet<string>): string {
+  const longest = Math.max(...[...words].map((word) => word.length));
+  const covered = new Set<number>();
+  for (let from = 0; from < text.length; from++) {
+    for (let to = from + SHORTEST_PART; to <= Math.min(text.length, from + longest); to++) {
+      if (words.has(text.slice(from, to))) for (let at = from; at < to; at++) covered.add(at);
+    }
+  }
+  return text
+    .split('')
+    .filter((_, at) => !covered.has(at))
+    .join('');
 }
 
-/** What is left of a text when these words are taken out of it, the longest first. */
-function without(text: string, words: readonly string[]): string {
-  return words.reduce((rest, word) => rest.replaceAll(word, ' '), text).replaceAll(' ', '');
-}
-
-function isGuessable(text: string, words: readonly string[]): boolean {
+function isGuessable(text: string, words: ReadonlySet<string>): boolean {
   const own = withoutRepeats(without(text, words));
   return [...own].length < OWN_LETTERS || new Set(own).size < OWN_DISTINCT;
 }
@@ -114,7 +120,7 @@ function forbiddenNames({ email, teams }: PasswordOwner): string[] {
 export function passwordFault(password: string, owner: PasswordOwner): PasswordFault | null {
   if (!isPasswordLength(password)) return 'password-length';
   const about = [owner.email, owner.name, ...owner.teams].flatMap(partsOf);
-  const words = longestFirst([...COMMON_WORDS, ...RUNS, ...about]);
+  const words = new Set([...TRIED_FIRST, ...about]);
   const names = forbiddenNames(owner);
   const texts = readings(password);
   const isCommon = texts.some((text) => isGuessable(text, words) || names.some((name) => text.includes(name)));
