@@ -43,8 +43,7 @@ async function signedIn(): Promise<Browser> {
 }
 
 const cookieOf = (browser: Browser) => ({ cookie: browser.jar.header() });
-const meStatus = async (browser: Browser) =>
-  (await callApi(meRoute, 'GET', { headers: cookieOf(browser) })).status;
+const meStatus = async (browser: Browser) => (await callApi(meRoute, 'GET', { headers: cookieOf(browser) })).status;
 
 describe('one’s own password', () => {
   const change = (browser: Browser, current: string, password: string) =>
@@ -201,11 +200,7 @@ describe('routes for people without a sign-in', () => {
   ] as const;
 
   it.each(ROUTES)('%s takes nothing another site sends, nor a form (B71)', async (_name, handlers) => {
-    for (const headers of [
-      { origin: 'https://evil.example' },
-      { 'sec-fetch-site': 'cross-site' },
-      { 'x-sync': '0' },
-    ]) {
+    for (const headers of [{ origin: 'https://evil.example' }, { 'sec-fetch-site': 'cross-site' }, { 'x-sync': '0' }]) {
       expect(await problemOf(await callApi(handlers, 'POST', { headers, body: {} }))).toEqual([403, 'csrf']);
     }
     const form = { headers: { 'content-type': 'application/x-www-form-urlencoded' }, body: 'email=a' };
