@@ -30,6 +30,9 @@ import { defineReviewClaim } from './review-claim';
 import { definePrimaryChoice } from './primary-choice';
 import { defineReadingLock } from './reading-lock';
 import { defineReadingSample } from './reading-sample';
+import { defineInvitation } from './invitation';
+import { defineResetToken } from './reset-token';
+import { defineLetter } from './letter';
 
 /**
  * Defines every model on a connection and ties them together.
@@ -68,6 +71,9 @@ export function defineModels(sequelize: Sequelize) {
     PrimaryChoice: definePrimaryChoice(sequelize),
     ReadingLock: defineReadingLock(sequelize),
     ReadingSample: defineReadingSample(sequelize),
+    Invitation: defineInvitation(sequelize),
+    ResetToken: defineResetToken(sequelize),
+    Letter: defineLetter(sequelize),
   };
 }
 

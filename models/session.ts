@@ -1,4 +1,11 @@
-import { DataTypes, type InferAttributes, type InferCreationAttributes, Model, type Sequelize } from 'sequelize';
+import {
+  type CreationOptional,
+  DataTypes,
+  type InferAttributes,
+  type InferCreationAttributes,
+  Model,
+  type Sequelize,
+} from 'sequelize';
 
 /** A sign-in that can be ended from the office. */
 export class Session extends Model<InferAttributes<Session>, InferCreationAttributes<Session>> {
@@ -9,6 +16,8 @@ export class Session extends Model<InferAttributes<Session>, InferCreationAttrib
   declare last_seen_at: Date;
   declare expires_at: Date;
   declare revoked_at: Date | null;
+  /** Browser and system in words, such as `Firefox on Windows`; no address and no place. */
+  declare agent: CreationOptional<string>;
 }
 
 /** Puts the model of `sessions` on a connection. */
@@ -23,6 +32,7 @@ export function defineSession(sequelize: Sequelize): typeof Session {
       last_seen_at: { type: DataTypes.DATE(3), allowNull: false },
       expires_at: { type: DataTypes.DATE(3), allowNull: false },
       revoked_at: { type: DataTypes.DATE(3), allowNull: true },
+      agent: { type: DataTypes.STRING(200), allowNull: false, defaultValue: '' },
     },
     { sequelize, modelName: 'Session', tableName: 'sessions', timestamps: false },
   );

@@ -1,5 +1,6 @@
 import { redirect } from 'next/navigation';
 import type { ReactElement, ReactNode } from 'react';
+import { PageHelp } from '@/components/lab/help/page-help';
 import { CautionsLine } from '@/components/shell/cautions-line';
 import { LabHeader } from '@/components/shell/lab-header';
 import { OfflineNotice } from '@/components/shell/offline-notice';
@@ -22,6 +23,7 @@ export default async function LabLayout({ children }: { children: ReactNode }): 
         <LabHeader person={{ displayName, role, teamName }} />
         <main id="main" tabIndex={-1} className="mx-auto w-full max-w-page grow px-4 pt-6 outline-none sm:px-6">
           <OfflineNotice />
+          <PageHelp />
           {children}
         </main>
         <CautionsLine />

@@ -20,6 +20,9 @@ const PARTS: readonly { href: string; title: string; not?: RoleName; only?: read
   { href: '/hosts', title: 'Hosts', not: 'researcher' },
   { href: '/downloads', title: 'Downloads', not: 'technician' },
   { href: '/settings', title: 'Settings' },
+  { href: '/members', title: 'Members', only: ['coordinator'] },
+  { href: '/phones', title: 'Phones', not: 'researcher' },
+  { href: '/start', title: 'First steps' },
 ];
 
 /** The head of every lab page: mark, parts, the phone app, who is signed in. */
@@ -49,7 +52,10 @@ export function LabHeader({ person }: { person: SignedInPerson }): ReactElement 
         </nav>
         <div className="ml-auto flex flex-wrap items-center justify-end gap-x-3 text-right text-sm leading-tight">
           <p>
-            <span className="font-bold">{displayName}</span>, {ROLE_WORDS[role]}
+            <Link href="/account" className="inline-flex min-h-6 items-center font-bold underline underline-offset-4">
+              {displayName}
+            </Link>
+            , {ROLE_WORDS[role]}
             <span className="block text-quiet max-sm:sr-only">{teamName}</span>
           </p>
           <SignOutButton />

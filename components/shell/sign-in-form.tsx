@@ -67,6 +67,11 @@ export function SignInForm({ next, demo }: SignInFormProps): ReactElement {
           {isSending ? 'Signing in …' : 'Sign in'}
         </Button>
       </form>
+      <p className="mt-4">
+        <a href="/reset" className="inline-flex min-h-9 items-center text-main underline underline-offset-4">
+          Forgotten your password?
+        </a>
+      </p>
       <DemoSignIns people={demo} onTake={take} />
     </>
   );

@@ -1,10 +1,11 @@
-import { DEVICE_HEADER, SYNC_HEADER } from '@/lib/protocol/limits';
+import { DEVICE_HEADER, SYNC_HEADER, UNSENT_HEADER } from '@/lib/protocol/limits';
 import type { Network, NetworkAnswer, NetworkRequest } from './network';
 
-function headersOf({ body, deviceId }: NetworkRequest): Record<string, string> {
+function headersOf({ body, deviceId, unsent }: NetworkRequest): Record<string, string> {
   const headers: Record<string, string> = { [SYNC_HEADER]: '1', Accept: 'application/json' };
   if (body !== undefined) headers['Content-Type'] = 'application/json';
   if (deviceId) headers[DEVICE_HEADER] = deviceId;
+  if (deviceId && unsent !== undefined) headers[UNSENT_HEADER] = String(unsent);
   return headers;
 }
 

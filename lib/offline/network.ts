@@ -8,6 +8,8 @@ export interface NetworkRequest {
   /** The enrolled device, when the route asks for it. */
   deviceId?: string | null;
   timeoutMs: number;
+  /** Operations this phone holds that the office has not got, told so that a coordinator sees what a lost phone takes with it. */
+  unsent?: number;
 }
 
 /** What came back, whoever it came from: a router's sign-in page is an answer too. */

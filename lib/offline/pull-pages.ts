@@ -24,7 +24,9 @@ function pullRequest({ epoch, cursor, deviceId }: StoreMeta): NetworkRequest {
 
 /** Asks for one page and takes it in. `more` says whether another follows. */
 async function pullPage(ports: DrainPorts, meta: StoreMeta): Promise<{ end: StepEnd; more: boolean }> {
-  const { verdict, now, skewMs } = await askOffice(ports, pullRequest(meta), PULL_ANSWER);
+  const { queued, suspect } = await ports.store.counts();
+  const request = { ...pullRequest(meta), unsent: queued + suspect };
+  const { verdict, now, skewMs } = await askOffice(ports, request, PULL_ANSWER);
   if (verdict.kind === 'restart') {
     await ports.store.transact([], fromTheStart(meta.epoch));
     return { end: null, more: meta.cursor > 0 };

@@ -43,10 +43,10 @@ async function blame(
 async function sendBatch(
   ports: DrainPorts,
   batch: readonly LocalOp[],
-  at: { meta: StoreMeta; pace: PushPace },
+  at: { meta: StoreMeta; pace: PushPace; unsent: number },
 ): Promise<Sent> {
-  const { meta, pace } = at;
-  const { verdict, now, skewMs } = await askOffice(ports, pushRequest(batch, meta), PUSH_ANSWER);
+  const { meta, pace, unsent } = at;
+  const { verdict, now, skewMs } = await askOffice(ports, { ...pushRequest(batch, meta), unsent }, PUSH_ANSWER);
   if (verdict.kind === 'ok') {
     const keys = batch.map((row) => row.key);
     const settled = await ports.store.transact(keys, settleResults({ answer: verdict.value, now, skewMs }));
@@ -78,9 +78,9 @@ export async function pushQueue(ports: DrainPorts, lease: HeldLease, pace: { val
       pace.value = { ...newPace(), limit: pace.value.limit };
       return null;
     }
-    const { queued } = await store.counts();
+    const { queued, suspect } = await store.counts();
     report({ k: gone + batch.length, n: Math.max(gone + queued, gone + batch.length) });
-    const sent = await sendBatch(ports, batch, { meta, pace: pace.value });
+    const sent = await sendBatch(ports, batch, { meta, pace: pace.value, unsent: queued + suspect });
     pace.value = sent.pace;
     gone += sent.settled;
     if (sent.end) return sent.end;

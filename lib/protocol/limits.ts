@@ -34,5 +34,8 @@ export const CLOCK_FLAG_MS = 2 * 60_000;
 /** Header that every request of the sync protocol carries; it also forces a browser to ask before crossing origins. */
 export const SYNC_HEADER = 'X-Sync';
 
+/** Header in which a phone may say how many operations it still holds that the office has not got. */
+export const UNSENT_HEADER = 'X-Unsent';
+
 /** Header that names the enrolled device. */
 export const DEVICE_HEADER = 'X-Device';

@@ -5,6 +5,7 @@ import { addressWith, type ListQuery, readListQuery } from '@/components/lab/lis
 import { NestsTable } from '@/components/lab/nests-table';
 import { countWords } from '@/components/ui/date-words';
 import { EmptyState } from '@/components/ui/empty-state';
+import { LinkButton } from '@/components/ui/link-button';
 import { PageTitle } from '@/components/ui/page-title';
 import { Pager } from '@/components/ui/pager';
 import { localDate } from '@/lib/kit/local-date';
@@ -30,6 +31,9 @@ function NothingFound({ query }: { query: ListQuery }): ReactElement {
   ) : (
     <EmptyState title="No nests yet">
       <p>A nest appears here once a phone has sent it. Start one in the phone app, under Nests.</p>
+      <LinkButton href="/start" className="mt-4">
+        First steps
+      </LinkButton>
     </EmptyState>
   );
 }

@@ -21,14 +21,14 @@ function cookie(base: Parameters<typeof cookieName>[0]) {
   };
 }
 
-const callbacks: AuthOptions['callbacks'] = {
+const callbacks = (agent: string): AuthOptions['callbacks'] => ({
   redirect: ({ url, baseUrl }) => ownUrl(url) ?? baseUrl,
 
   /** The token names the session's row and nothing else: rights are read from the database on every request. */
   jwt: async ({ token, user }) => {
     const now = systemClock.now();
     if (user) {
-      const ref = await openSession(user.id, now);
+      const ref = await openSession({ userId: user.id, agent }, now);
       if (!ref) throw new Error(ENDED);
       return { sub: user.id, sid: formatSid(ref) };
     }
@@ -43,10 +43,17 @@ const callbacks: AuthOptions['callbacks'] = {
     const context = ref && (await loadSession(ref, systemClock.now()));
     return { expires: session.expires, user: { name: context?.displayName ?? null } };
   },
-};
+});
+
+/** Who sends a request to next-auth, as far as it matters here. */
+export interface AuthCaller {
+  address: string;
+  /** The browser in words. */
+  agent: string;
+}
 
 /** How next-auth is set up. A function, because the address and the key are known only when the server runs. */
-export function authOptions(address: string): AuthOptions {
+export function authOptions({ address, agent }: AuthCaller): AuthOptions {
   // next-auth reads its own address from the environment and from nowhere else.
   process.env.NEXTAUTH_URL ??= publicUrl();
   return {
@@ -68,7 +75,7 @@ export function authOptions(address: string): AuthOptions {
         },
       }),
     ],
-    callbacks,
+    callbacks: callbacks(agent),
     events: {
       signOut: async ({ token }) => {
         const ref = parseSid(token.sid);

@@ -9,7 +9,8 @@ import { isForeign } from '@/lib/server/http/csrf';
 import { failureResponse } from '@/lib/server/http/failure-response';
 import { HttpProblem } from '@/lib/server/http/problem';
 import type { RouteContext } from '@/lib/server/http/route';
-import { authOptions } from './auth-options';
+import { agentWords } from './agent-words';
+import { type AuthCaller, authOptions } from './auth-options';
 import { type AuthRequest, authRequest } from './auth-request';
 import { AuthResponse } from './auth-response';
 import { secondsToWait } from './login-throttle';
@@ -33,10 +34,10 @@ async function checkThrottle(email: string, address: string): Promise<void> {
   throw new HttpProblem('too-many', { headers: { 'Retry-After': String(seconds) }, members });
 }
 
-async function answer(authReq: AuthRequest, address: string): Promise<Response> {
+async function answer(authReq: AuthRequest, caller: AuthCaller): Promise<Response> {
   const response = new AuthResponse();
   // next-auth's handler for plain Node reads and writes only what these two classes have.
-  await NextAuth(authReq as unknown as NextApiRequest, response as unknown as NextApiResponse, authOptions(address));
+  await NextAuth(authReq as unknown as NextApiRequest, response as unknown as NextApiResponse, authOptions(caller));
   return response.toResponse();
 }
 
@@ -53,7 +54,7 @@ export async function authRoute(request: Request, context: RouteContext): Promis
       checkCredentials(authReq.body);
       await checkThrottle(authReq.body.email ?? '', address);
     }
-    return await answer(authReq, address);
+    return await answer(authReq, { address, agent: agentWords(request.headers.get('user-agent') ?? '') });
   } catch (error) {
     return failureResponse(error, newId());
   }

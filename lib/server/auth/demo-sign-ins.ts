@@ -22,7 +22,7 @@ export async function demoSignIns(): Promise<DemoSignIn[]> {
   const rows = await database().sequelize.query<Omit<DemoSignIn, 'password'>>(
     `SELECT u.email, u.display_name AS name, m.role, t.name AS team
      FROM users u JOIN memberships m ON m.user_id = u.id JOIN teams t ON t.id = m.team_id
-     WHERE u.email IN (:emails) AND u.disabled_at IS NULL`,
+     WHERE u.email IN (:emails) AND u.disabled_at IS NULL AND m.ended_at IS NULL`,
     { type: QueryTypes.SELECT, replacements: { emails } },
   );
   const order = (row: { email: string }) => emails.indexOf(row.email);

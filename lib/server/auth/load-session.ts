@@ -17,7 +17,7 @@ interface SessionRow extends MemberRow {
 
 /**
  * Who a session belongs to, read from the database each time: a session that was ended or ran out, a disabled
- * account and a removed membership all give null, and a changed role counts at once.
+ * account and an ended membership all give null, and a changed role counts at once.
  *
  * @param nowMs epoch milliseconds.
  */
@@ -28,7 +28,8 @@ export async function loadSession(ref: SessionRef, nowMs: number): Promise<TeamC
      JOIN users u ON u.id = s.user_id
      JOIN memberships m ON m.team_id = s.team_id AND m.user_id = s.user_id
      JOIN teams t ON t.id = s.team_id
-     WHERE s.team_id = ? AND s.id = ? AND s.revoked_at IS NULL AND s.expires_at > ? AND u.disabled_at IS NULL`,
+     WHERE s.team_id = ? AND s.id = ? AND s.revoked_at IS NULL AND s.expires_at > ?
+       AND u.disabled_at IS NULL AND m.ended_at IS NULL`,
     { type: QueryTypes.SELECT, replacements: [toBinary(ref.teamId), toBinary(ref.sessionId), new Date(nowMs)] },
   );
   const row = rows[0];

@@ -13,7 +13,7 @@ import type { TeamContext } from './team-context';
 export async function memberContext(teamId: string, userId: string): Promise<TeamContext> {
   const rows = await database().sequelize.query<MemberRow>(
     `SELECT ${MEMBER_COLUMNS} FROM memberships m JOIN users u ON u.id = m.user_id JOIN teams t ON t.id = m.team_id
-     WHERE m.team_id = ? AND m.user_id = ?`,
+     WHERE m.team_id = ? AND m.user_id = ? AND m.ended_at IS NULL`,
     { type: QueryTypes.SELECT, replacements: [toBinary(teamId), toBinary(userId)] },
   );
   const context = rows[0] ? contextOfRow(rows[0], { teamId, userId, sessionId: null }) : null;

@@ -1,6 +1,6 @@
 import 'server-only';
 import { isUuidText } from '@/lib/kit/uuid';
-import { DEVICE_HEADER } from '@/lib/protocol/limits';
+import { DEVICE_HEADER, UNSENT_HEADER } from '@/lib/protocol/limits';
 import type { TeamContext } from '@/lib/server/auth/team-context';
 import { database } from '@/lib/server/db/database';
 import { toBinary } from '@/lib/server/db/uuid-binary';
@@ -13,6 +13,12 @@ export interface EnrolledDevice {
 
 /** Use of a device is written down at most this often. */
 const SEEN_EVERY_MS = 10 * 60_000;
+
+/** The count of unsent operations a phone reports; null when it says nothing that can be one. */
+function unsentOf(request: Request): number | null {
+  const text = request.headers.get(UNSENT_HEADER);
+  return text !== null && /^\d{1,7}$/.test(text) ? Number(text) : null;
+}
 
 /**
  * The device a request names in `X-Device`; null when it names none.
@@ -33,6 +39,9 @@ export async function deviceOf(request: Request, ctx: TeamContext, nowMs: number
       })
     : null;
   if (!device) throw new HttpProblem('device-revoked');
-  if (nowMs - device.last_seen_at.getTime() > SEEN_EVERY_MS) await device.update({ last_seen_at: new Date(nowMs) });
+  const unsent = unsentOf(request) ?? device.unsent;
+  if (unsent !== device.unsent || nowMs - device.last_seen_at.getTime() > SEEN_EVERY_MS) {
+    await device.update({ last_seen_at: new Date(nowMs), unsent });
+  }
   return { deviceId };
 }

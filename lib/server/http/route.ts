@@ -83,7 +83,8 @@ async function namedDevice(request: Request, ctx: TeamContext, need: RouteSpec<u
 function toResponse(result: object, renewal: string | null): Response {
   const response = result instanceof Response ? result : Response.json(result);
   for (const [name, value] of Object.entries(API_HEADERS)) response.headers.set(name, value);
-  if (renewal) response.headers.append('Set-Cookie', renewal);
+  // A handler that hands out another session has the last word.
+  if (renewal && !response.headers.has('Set-Cookie')) response.headers.append('Set-Cookie', renewal);
   return response;
 }
 

@@ -28,6 +28,10 @@ const RIGHTS = {
   'settings.read': EVERYONE,
   'settings.write': ['biologist'],
   'people.read': ['reviewer', 'biologist', 'coordinator'],
+  'members.write': ['coordinator'],
+  'letters.read': ['coordinator'],
+  'devices.read': ['technician', 'reviewer', 'biologist', 'coordinator'],
+  'devices.revoke': ['technician', 'reviewer', 'biologist', 'coordinator'],
   'hosts.read': ['technician', 'reviewer', 'biologist', 'coordinator'],
   'export.read': ['reviewer', 'biologist', 'coordinator', 'researcher'],
 } as const satisfies Record<string, readonly Role[]>;

@@ -3,6 +3,7 @@ import { ROLES, type Role } from '@/lib/server/auth/role';
 import type { ApiCall } from '@/tests/support/factories/call-api';
 import { wireOp } from '@/tests/support/wire/wire-op';
 import type { Asker, MethodExpectation, RouteExpectation } from './expectation';
+import { PEOPLE_EXPECTATIONS } from './people-expectations';
 
 const EVERYONE: readonly Role[] = ROLES;
 const RECORDERS: readonly Role[] = ['technician', 'reviewer', 'biologist'];
@@ -85,6 +86,7 @@ const FIXED_OP = v7();
 
 /** What every route file under `app/api` does for whom, by its path. */
 export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
+  ...PEOPLE_EXPECTATIONS,
   'nests/route.ts': {
     load: () => import('@/app/api/nests/route'),
     methods: {

@@ -8,6 +8,7 @@ import { toBinary } from '@/lib/server/db/uuid-binary';
 import { makeNest, makeVisit } from '@/tests/support/factories/make-nest';
 import { makeReading } from '@/tests/support/factories/make-reading';
 import { type TestTeam, makeTeam } from '@/tests/support/factories/make-team';
+import { makeInvitation } from '@/tests/support/members/make-invitation';
 
 const NOW = Date.parse('2026-06-20T12:00:00Z');
 
@@ -30,6 +31,8 @@ export interface Tenant {
   only: EntityIds;
   /** Code of the nest that only this team has. */
   onlyCode: string;
+  /** An unanswered invitation of this team. */
+  invitation: string;
   /** `X-Device` of an enrolled phone by user id. */
   devices: ReadonlyMap<string, string>;
   /** Texts that may reach nobody of the other team. */
@@ -109,9 +112,10 @@ async function makeTenant(canary: string, shared: EntityIds, lat: number): Promi
   const { reading: final } = await settleReading(ctx, { id: shared.reading, cells }, NOW);
   await lockReading(ctx, { id: final }, NOW);
   await amendReading(ctx, { id: final, reason: `Amended ${canary}` }, NOW);
+  const invitation = await makeInvitation(team.teamId, canary);
   const people = Object.values(team.members).map(({ userId }) => userId);
-  const secrets = [canary, String(lat), team.teamId, final, ...Object.values(only), ...people];
-  return { team, canary, shared, only, onlyCode, devices: await enrolAll(team, canary), secrets };
+  const secrets = [canary, String(lat), team.teamId, final, invitation, ...Object.values(only), ...people];
+  return { team, canary, shared, only, onlyCode, invitation, devices: await enrolAll(team, canary), secrets };
 }
 
 /** Two teams whose nests, visits, readings and operations have the same ids, and one nest each of its own. */

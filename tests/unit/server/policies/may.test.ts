@@ -25,6 +25,10 @@ const TABLE: Record<Action, string> = {
   'settings.read': 'yyyyy',
   'settings.write': '--y--',
   'people.read': '-yyy-',
+  'members.write': '---y-',
+  'letters.read': '---y-',
+  'devices.read': 'yyyy-',
+  'devices.revoke': 'yyyy-',
   'hosts.read': 'yyyy-',
   'export.read': '-yyyy',
 };
