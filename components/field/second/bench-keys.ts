@@ -60,7 +60,8 @@ export function benchCommand(press: BenchKeyPress): BenchCommand | null {
   const way = SLANTED.get(press.key) ?? (press.ctrlKey || press.altKey ? undefined : SLANTED.get(press.code));
   if (way !== undefined) return { do: 'neighbour', way };
   const known = commandOfKey(press);
-  if (known) return known;
+  // A blind reader is shown no expectation, so there is none to confirm.
+  if (known && known.do !== 'expected') return known;
   if (press.ctrlKey || press.metaKey || press.altKey || isStepKey(press.key)) return null;
   if (INSTAR.test(press.key)) return { do: 'instar', instar: Number(press.key) };
   return PLAIN.get(press.key.toLowerCase()) ?? null;

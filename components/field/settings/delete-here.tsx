@@ -3,7 +3,7 @@
 import { type ReactElement, useState } from 'react';
 import { Notice } from '@/components/ui/notice';
 import { FieldButton } from '@/components/field/parts/field-button';
-import { saveFile } from '@/components/field/parts/save-file';
+import { saveFile } from '@/components/ui/save-file';
 import { usePerson } from '@/components/field/parts/person-context';
 import { TextLine } from '@/components/field/parts/text-line';
 import { useToday } from '@/components/field/words/use-today';

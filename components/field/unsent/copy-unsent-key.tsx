@@ -2,7 +2,7 @@
 
 import { type ReactElement, useState } from 'react';
 import { FieldButton } from '@/components/field/parts/field-button';
-import { saveFile } from '@/components/shell/save-file';
+import { saveFile } from '@/components/ui/save-file';
 import { usePerson } from '@/components/field/parts/person-context';
 import { useToday } from '@/components/field/words/use-today';
 import { useOutbox } from '@/lib/offline/hooks/use-outbox';

@@ -1,5 +1,5 @@
 import { useRef, useState } from 'react';
-import { saveFile } from '@/components/shell/save-file';
+import { saveFile } from '@/components/ui/save-file';
 import { type DownloadProgress, fetchFile } from './fetch-file';
 
 /** What a row of the downloads table knows about its download. */

@@ -1,1 +1,0 @@
-export { saveFile } from '@/components/ui/save-file';
