@@ -200,7 +200,12 @@ describe('routes for people without a sign-in', () => {
   ] as const;
 
   it.each(ROUTES)('%s takes nothing another site sends, nor a form (B71)', async (_name, handlers) => {
-    for (const headers of [{ origin: 'https://evil.example' }, { 'sec-fetch-site': 'cross-site' }, { 'x-sync': '0' }]) {
+    const foreign: Record<string, string>[] = [
+      { origin: 'https://evil.example' },
+      { 'sec-fetch-site': 'cross-site' },
+      { 'x-sync': '0' },
+    ];
+    for (const headers of foreign) {
       expect(await problemOf(await callApi(handlers, 'POST', { headers, body: {} }))).toEqual([403, 'csrf']);
     }
     const form = { headers: { 'content-type': 'application/x-www-form-urlencoded' }, body: 'email=a' };
