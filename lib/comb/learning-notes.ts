@@ -77,7 +77,7 @@ function advice({ read, settled }: SettledCell): string {
 }
 
 /** Words for cells in a state: `large larvae`, `eggs`, `capped cells`. */
-export function cellsWords(state: CellState, count: number): string {
+function cellsWords(state: CellState, count: number): string {
   const words = STATE_WORDS[state];
   if (words.endsWith('larva')) return count === 1 ? words : words.replace('larva', 'larvae');
   if (state === 'egg') return count === 1 ? 'egg' : 'eggs';

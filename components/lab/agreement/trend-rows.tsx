@@ -25,13 +25,13 @@ export function TrendRows({ caption, points }: { caption: string; points: readon
               {percentWords(share)}
             </BodyCell>
             <BodyCell number className="whitespace-nowrap">
-              {percentWords(interval.low)} to {percentWords(interval.high)}
+              {Math.round(interval.low * 100)} to {percentWords(interval.high)}
             </BodyCell>
             <BodyCell className="text-right">
               <span className="font-mono">
                 {agreed}/{n}
               </span>{' '}
-              <span className="text-sm whitespace-nowrap text-quiet">in {countWords(combs, 'comb')}</span>
+              <span className="text-sm whitespace-nowrap text-quiet max-sm:hidden">in {countWords(combs, 'comb')}</span>
             </BodyCell>
           </tr>
         ))}

@@ -3,22 +3,12 @@ import type { TeamContext } from '@/lib/server/auth/team-context';
 import { HttpProblem } from '@/lib/server/http/problem';
 import { describeError, log } from '@/lib/server/log/log';
 import type { ExportLines } from './export-call';
-import type { ExportQuery } from './export-query';
+import type { ExportRequest } from './export-request';
 import { EXPORT_FILES } from './file-lines';
 import { requireNest } from './require-nest';
 import { type Snapshot, openSnapshot } from './snapshot';
 import { textStream } from './text-stream';
 import { ZIP_NAME, zipResponse } from './zip-response';
-
-/** One download. */
-export interface ExportRequest {
-  /** As it stands in the address; anything may have been typed there. */
-  file: string;
-  query: ExportQuery;
-  requestId: string;
-  /** Epoch milliseconds. */
-  nowMs: number;
-}
 
 function respond(
   ctx: TeamContext,

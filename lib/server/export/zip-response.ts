@@ -2,7 +2,7 @@ import 'server-only';
 import type { TeamContext } from '@/lib/server/auth/team-context';
 import { describeError, log } from '@/lib/server/log/log';
 import { byteStream } from './byte-stream';
-import type { ExportRequest } from './export-response';
+import type { ExportRequest } from './export-request';
 import { EXPORT_FILES } from './file-lines';
 import type { Snapshot } from './snapshot';
 import { zipPieces } from './zip-pieces';
