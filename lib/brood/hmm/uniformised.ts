@@ -162,15 +162,19 @@ export function addScaled(
   }
 }
 
-/** Marks the blocks of a vector that hold more than `least`; the others are set to 0. */
-export function heldBlocks(vector: Float64Array, blocks: Blocks, least: number): void {
+/** Marks the blocks of a vector (or of `width` of them side by side) that hold more than `least`; others are emptied. */
+export function heldBlocks(
+  vector: Float64Array,
+  blocks: Blocks,
+  { least, width = 1 }: { least: number; width?: number },
+): void {
   for (let b = 0; b < blocks.length; b++) {
     if (blocks[b] === 0) continue;
-    const end = Math.min(vector.length, (b + 1) << BLOCK_BITS);
+    const [first, end] = [b * BLOCK * width, Math.min(vector.length, (b + 1) * BLOCK * width)];
     let most = 0;
-    for (let s = b << BLOCK_BITS; s < end; s++) most = Math.max(most, vector[s] ?? 0);
+    for (let s = first; s < end; s++) most = Math.max(most, vector[s] ?? 0);
     if (most > least) continue;
-    vector.fill(0, b << BLOCK_BITS, end);
+    vector.fill(0, first, end);
     blocks[b] = 0;
   }
 }
@@ -192,4 +196,9 @@ export function reachFrom({ fans }: Uniformised, held: Blocks): Blocks {
     }
   }
   return reach;
+}
+
+/** Adds the blocks of `more` to `blocks`. */
+export function joinBlocks(blocks: Blocks, more: Blocks): void {
+  for (let b = 0; b < blocks.length; b++) blocks[b] = (blocks[b] ?? 0) | (more[b] ?? 0);
 }
