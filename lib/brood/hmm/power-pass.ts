@@ -66,7 +66,7 @@ function moving(chain: Uniformised, { vector, least }: { vector: Float64Array; l
       if (n % (BLOCK / 2) !== 0) return blocks;
       const before = blocks;
       const held = blocks.slice();
-      heldBlocks(n === 0 ? vector : current, held, least);
+      heldBlocks(n === 0 ? vector : current, held, { least });
       blocks = reachFrom(chain, held);
       before.forEach((was, b) => {
         if (was === 1 && blocks[b] === 0) next.fill(0, b * BLOCK, (b + 1) * BLOCK);
@@ -120,12 +120,11 @@ export function massPass(chain: Uniformised, mass: Float64Array, request: PassRe
  * Carries values backward, like `massPass`; watched times count backwards from where the values are known.
  *
  * @param blocks the states whose values are asked for and all that they can pass through; others count as 0.
- * @param isEndNeeded false when only the watched sums are asked for.
  */
 export function valuePass(
   chain: Uniformised,
   value: Float64Array,
-  { blocks = blocksOf(chain, 1), isEndNeeded = true, ...request }: PassRequest & { blocks?: Blocks; isEndNeeded?: boolean },
+  { blocks = blocksOf(chain, 1), ...request }: PassRequest & { blocks?: Blocks },
 ): PassResult {
   const { days, watch = [], weightsOf = poissonWeights } = request;
   if (days === 0 || chain.clock === 0) return standing(value, watch, blocks);
@@ -143,7 +142,7 @@ export function valuePass(
       [current, next] = [next, current];
     }
     note(n, current);
-    if (isEndNeeded && n >= first) addScaled(end, { vector: current, weight: weights[n - first] ?? 0 }, blocks);
+    if (n >= first) addScaled(end, { vector: current, weight: weights[n - first] ?? 0 }, blocks);
   }
   return { end, watched: atTimes(chain, sequences, request), used: blocks };
 }

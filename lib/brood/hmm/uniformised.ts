@@ -70,7 +70,7 @@ export function uniformise(moves: Transitions, speeds: readonly number[]): Unifo
   return { states, clock, stay: leave.map((rate) => 1 - rate / clock), fromPrevious, fans: fansOf(moves, go) };
 }
 
-/** States are handled in blocks of this many; a block without mass is passed over. */
+/** States are handled in blocks of this many; a block without mass is passed over, neighbours are one loop. */
 const BLOCK_BITS = 4;
 
 /** States of one block. */
@@ -96,7 +96,8 @@ export const tickMass: Tick = ({ states, stay, fromPrevious, fans }, { current, 
   for (let b = 0; b < blocks.length; b++) {
     if (blocks[b] === 0) continue;
     const first = b << BLOCK_BITS;
-    const end = Math.min(states, first + BLOCK);
+    while (blocks[b + 1] === 1) b++;
+    const end = Math.min(states, (b + 1) << BLOCK_BITS);
     let before = first > 0 ? (current[first - 1] ?? 0) : 0;
     for (let s = first; s < end; s++) {
       const here = current[s] ?? 0;
@@ -108,8 +109,10 @@ export const tickMass: Tick = ({ states, stay, fromPrevious, fans }, { current, 
     let sum = 0;
     for (let b = from >> BLOCK_BITS; b <= (to - 1) >> BLOCK_BITS; b++) {
       if (blocks[b] === 0) continue;
+      const first = b << BLOCK_BITS;
+      while (blocks[b + 1] === 1) b++;
       const end = Math.min(to, (b + 1) << BLOCK_BITS);
-      for (let s = Math.max(from, b << BLOCK_BITS); s < end; s++) sum += current[s] ?? 0;
+      for (let s = Math.max(from, first); s < end; s++) sum += current[s] ?? 0;
     }
     if (sum > 0) next[target] = (next[target] ?? 0) + sum * go;
   }
@@ -119,10 +122,11 @@ export const tickMass: Tick = ({ states, stay, fromPrevious, fans }, { current, 
 export const tickValue: Tick = ({ states, stay, fromPrevious, fans }, { current, next }, blocks) => {
   for (let b = blocks.length - 1; b >= 0; b--) {
     if (blocks[b] === 0) continue;
+    const end = Math.min(states, (b + 1) << BLOCK_BITS);
+    while (b > 0 && blocks[b - 1] === 1) b--;
     const first = b << BLOCK_BITS;
-    const end = Math.min(states, first + BLOCK);
-    let after = current[end] ?? 0;
-    let share = fromPrevious[end] ?? 0;
+    let after = end < states ? (current[end] ?? 0) : 0;
+    let share = end < states ? (fromPrevious[end] ?? 0) : 0;
     for (let s = end - 1; s >= first; s--) {
       const here = current[s] ?? 0;
       next[s] = here * (stay[s] ?? 0) + after * share;
@@ -135,8 +139,10 @@ export const tickValue: Tick = ({ states, stay, fromPrevious, fans }, { current,
     if (gain === 0) continue;
     for (let b = from >> BLOCK_BITS; b <= (to - 1) >> BLOCK_BITS; b++) {
       if (blocks[b] === 0) continue;
+      const first = b << BLOCK_BITS;
+      while (blocks[b + 1] === 1) b++;
       const end = Math.min(to, (b + 1) << BLOCK_BITS);
-      for (let s = Math.max(from, b << BLOCK_BITS); s < end; s++) next[s] = (next[s] ?? 0) + gain;
+      for (let s = Math.max(from, first); s < end; s++) next[s] = (next[s] ?? 0) + gain;
     }
   }
 };
@@ -149,20 +155,26 @@ export function addScaled(
 ): void {
   for (let b = 0; b < blocks.length; b++) {
     if (blocks[b] === 0) continue;
+    const first = b << BLOCK_BITS;
+    while (blocks[b + 1] === 1) b++;
     const end = Math.min(sum.length, (b + 1) << BLOCK_BITS);
-    for (let s = b << BLOCK_BITS; s < end; s++) sum[s] = (sum[s] ?? 0) + weight * (vector[s] ?? 0);
+    for (let s = first; s < end; s++) sum[s] = (sum[s] ?? 0) + weight * (vector[s] ?? 0);
   }
 }
 
-/** Marks the blocks of a vector that hold more than `least`; the others are set to 0. */
-export function heldBlocks(vector: Float64Array, blocks: Blocks, least: number): void {
+/** Marks the blocks of a vector (or of `width` of them side by side) that hold more than `least`; others are emptied. */
+export function heldBlocks(
+  vector: Float64Array,
+  blocks: Blocks,
+  { least, width = 1 }: { least: number; width?: number },
+): void {
   for (let b = 0; b < blocks.length; b++) {
     if (blocks[b] === 0) continue;
-    const end = Math.min(vector.length, (b + 1) << BLOCK_BITS);
+    const [first, end] = [b * BLOCK * width, Math.min(vector.length, (b + 1) * BLOCK * width)];
     let most = 0;
-    for (let s = b << BLOCK_BITS; s < end; s++) most = Math.max(most, vector[s] ?? 0);
+    for (let s = first; s < end; s++) most = Math.max(most, vector[s] ?? 0);
     if (most > least) continue;
-    vector.fill(0, b << BLOCK_BITS, end);
+    vector.fill(0, first, end);
     blocks[b] = 0;
   }
 }
@@ -184,4 +196,9 @@ export function reachFrom({ fans }: Uniformised, held: Blocks): Blocks {
     }
   }
   return reach;
+}
+
+/** Adds the blocks of `more` to `blocks`. */
+export function joinBlocks(blocks: Blocks, more: Blocks): void {
+  for (let b = 0; b < blocks.length; b++) blocks[b] = (blocks[b] ?? 0) | (more[b] ?? 0);
 }

@@ -1,5 +1,6 @@
-import { type Gate, valuePass } from '@/lib/brood/hmm/power-pass';
-import type { Blocks, Uniformised } from '@/lib/brood/hmm/uniformised';
+import type { Gate } from '@/lib/brood/hmm/power-pass';
+import { valuePasses } from '@/lib/brood/hmm/tile-pass';
+import { type Blocks, type Uniformised, blocksOf, joinBlocks } from '@/lib/brood/hmm/uniformised';
 import type { NestKernel } from './nest-kernel';
 import type { Segment } from './timeline';
 
@@ -15,12 +16,10 @@ export interface BackwardPart {
   presentLog: number;
 }
 
-/** A record as seen from its last look. */
-interface Record {
-  /** The segments up to the last look. */
-  segments: readonly Segment[];
+/** A record to follow backward from its last look. */
+export interface BackwardRecord {
   seen: readonly (Float64Array | null)[];
-  /** For each segment the blocks of states that masses ever were in. */
+  /** For each segment up to the last look, the blocks of states that masses ever were in. */
   used: readonly Blocks[];
 }
 
@@ -34,62 +33,86 @@ function weighed(values: Float64Array, likelihood: Float64Array | null | undefin
   return likelihood ? values.map((v, s) => v * (likelihood[s + offset] ?? 0)) : values;
 }
 
-/** One kind of backward pass over all segments, last first. */
-function pass(
-  record: Record,
-  terminal: Float64Array,
-  kind: {
-    chain: (rate: number) => Uniformised;
-    gates: readonly Gate[];
-    offset: number;
-    blocks?: readonly Blocks[];
-    kernel: NestKernel;
-  },
-): { log: number; watched: Float64Array[] }[] {
-  let value = terminal;
-  let log = 0;
-  const parts = record.segments.map((segment, i) => ({ segment, i })).reverse();
-  return parts
-    .map(({ segment, i }) => {
-      const seen = segment.look === null ? null : record.seen[segment.look];
-      const start = scaled(weighed(value, seen, kind.offset));
-      log += start.log;
-      const { days, steps, rate } = segment;
-      const at = Float64Array.from({ length: steps }, (_, k) => days - ((k + 0.5) * days) / steps);
-      const { end, watched } = valuePass(kind.chain(rate), start.values, {
-        days,
-        watch: kind.gates.map((gate) => ({ gate, at })),
-        weightsOf: kind.kernel.weightsOf,
-        blocks: kind.blocks?.[i],
-        isEndNeeded: i > 0,
-      });
-      value = end;
-      return { log, watched };
-    })
-    .reverse();
+/** One kind of backward pass. */
+interface PassKind {
+  kernel: NestKernel;
+  terminal: Float64Array;
+  chain: (rate: number) => Uniformised;
+  gates: readonly Gate[];
+  /** Number of the first state of the chain among all states. */
+  offset: number;
+  isWhole: boolean;
 }
 
-/** Follows a record backward: for the cell as a whole, and for the one brood that is alive at the end. */
-export function backwardCell(kernel: NestKernel, record: Record): BackwardPart[] {
+/** The blocks that the records need in a segment, all together. */
+function neededBlocks(records: readonly BackwardRecord[], segment: number, chain: Uniformised): Blocks {
+  const blocks = blocksOf(chain, 0);
+  for (const { used } of records) joinBlocks(blocks, used[segment] ?? blocks);
+  return blocks;
+}
+
+/** What a pass says of one segment of one record. */
+type Watched = { log: number; watched: Float64Array[] };
+
+/** Follows records through all segments, last first, side by side; each begins at its own last look. */
+function pass(segments: readonly Segment[], records: readonly BackwardRecord[], kind: PassKind): Watched[][] {
+  const walks = records.map((record) => ({ record, value: kind.terminal, log: 0, parts: [] as Watched[] }));
+  for (const [i, segment] of [...segments.entries()].reverse()) {
+    const open = walks.filter(({ record }) => i < record.used.length);
+    const { days, steps, rate, look } = segment;
+    const chain = kind.chain(rate);
+    const starts = open.map((walk) => {
+      const seen = look === null ? null : walk.record.seen[look];
+      const start = scaled(weighed(walk.value, seen, kind.offset));
+      walk.log += start.log;
+      return start.values;
+    });
+    const at = Float64Array.from({ length: steps }, (_, k) => days - ((k + 0.5) * days) / steps);
+    const results = valuePasses(chain, starts, {
+      days,
+      watch: kind.gates.map((gate) => ({ gate, at })),
+      weightsOf: kind.kernel.weightsOf,
+      isEndNeeded: i > 0,
+      ...(kind.isWhole ? { blocks: neededBlocks(open.map(({ record }) => record), i, chain) } : {}),
+    });
+    open.forEach((walk, k) => {
+      walk.value = results[k]?.end ?? walk.value;
+      walk.parts.unshift({ log: walk.log, watched: results[k]?.watched ?? [] });
+    });
+  }
+  return walks.map(({ parts }) => parts);
+}
+
+/** Follows records backward: for the cell as a whole, and for the one brood that is alive at the end. */
+export function backwardCells(
+  kernel: NestKernel,
+  segments: readonly Segment[],
+  records: readonly BackwardRecord[],
+): BackwardPart[][] {
   const { model } = kernel;
-  const whole = pass(record, new Float64Array(model.states.count).fill(1), {
+  const whole = pass(segments, records, {
     kernel,
+    terminal: new Float64Array(model.states.count).fill(1),
     chain: kernel.full,
     gates: [[[model.eggState, 1]]],
     offset: 0,
-    blocks: record.used,
+    isWhole: true,
   });
-  const present = pass(record, model.broodLiving, {
+  const present = pass(segments, records, {
     kernel,
+    terminal: model.broodLiving,
     chain: kernel.brood,
     gates: [[[0, 1]], [[model.pupaPhase, 1]]],
     offset: model.eggState,
+    isWhole: false,
   });
-  return record.segments.map((_, i) => ({
-    firstEgg: whole[i]?.watched[0] ?? new Float64Array(0),
-    firstLog: whole[i]?.log ?? 0,
-    presentEgg: present[i]?.watched[0] ?? new Float64Array(0),
-    presentCapped: present[i]?.watched[1] ?? new Float64Array(0),
-    presentLog: present[i]?.log ?? 0,
-  }));
+  return records.map(({ used }, r) =>
+    used.map((_, i) => ({
+      firstEgg: whole[r]?.[i]?.watched[0] ?? new Float64Array(0),
+      firstLog: whole[r]?.[i]?.log ?? 0,
+      presentEgg: present[r]?.[i]?.watched[0] ?? new Float64Array(0),
+      presentCapped: present[r]?.[i]?.watched[1] ?? new Float64Array(0),
+      presentLog: present[r]?.[i]?.log ?? 0,
+    })),
+  );
 }

@@ -1,5 +1,5 @@
-import { massPass } from '@/lib/brood/hmm/power-pass';
-import { type Blocks, blocksOf } from '@/lib/brood/hmm/uniformised';
+import { massPasses } from '@/lib/brood/hmm/tile-pass';
+import { type Blocks, blocksOf, joinBlocks } from '@/lib/brood/hmm/uniformised';
 import { NOT_BUILT } from '@/lib/brood/hmm/brood-states';
 import type { BuildingPrior } from './building';
 import { NEW_CELL } from './brood-model';
@@ -61,34 +61,40 @@ function plus(sum: Float64Array, more: Float64Array, weight: number): void {
   for (let i = 0; i < sum.length; i++) sum[i] = (sum[i] ?? 0) + weight * (more[i] ?? 0);
 }
 
-/** What was built before the segment moves on through it. */
+/** What happens within a segment, and the masses at its end before its look. */
+type Moved = Omit<ForwardPart, 'log'> & { end: Float64Array };
+
+/** Cells move on through a segment together: what was built before it. */
 function moveOn(
   kernel: NestKernel,
   segment: Segment,
-  { mass, isFlowNeeded }: { mass: Float64Array; isFlowNeeded: boolean },
-): Omit<ForwardPart, 'log'> & { end: Float64Array } {
+  { masses, isFlowNeeded }: { masses: readonly Float64Array[]; isFlowNeeded: boolean },
+): Moved[] {
   const { days, steps, rate } = segment;
   const chain = kernel.full(rate);
   const step = days / steps;
-  if (mass.every((p) => p <= LEAST)) {
-    const none = new Float64Array(steps);
-    const end = new Float64Array(mass.length);
-    return { first: none, later: none.slice(), capping: none.slice(), used: blocksOf(chain, 0), end };
-  }
   const at = Float64Array.from({ length: steps }, (_, i) => (i + 0.5) * step);
-  const { end, watched, used } = massPass(chain, mass, {
+  const moving = masses.filter((mass) => mass.some((p) => p > LEAST));
+  const results = massPasses(chain, moving, {
     days,
     least: LEAST,
     weightsOf: kernel.weightsOf,
     watch: isFlowNeeded ? [kernel.model.relayGate, kernel.cappingGate(rate)].map((gate) => ({ gate, at })) : [],
   });
-  const { laid } = firstEggs(new Float64Array(steps), {
-    layFirst: kernel.model.layFirst,
-    step,
-    waiting: mass[NEW_CELL] ?? 0,
+  const byMass = new Map(moving.map((mass, i) => [mass, results[i]]));
+  return masses.map((mass) => {
+    const moved = byMass.get(mass);
+    const waiting = mass[NEW_CELL] ?? 0;
+    const { laid } = firstEggs(new Float64Array(steps), { layFirst: kernel.model.layFirst, step, waiting });
+    const flow = (i: number) => moved?.watched[i]?.map((perDay) => perDay * step) ?? new Float64Array(steps);
+    return {
+      first: laid,
+      later: flow(0),
+      capping: flow(1),
+      used: moved?.used.slice() ?? blocksOf(chain, 0),
+      end: moved?.end ?? new Float64Array(mass.length),
+    };
   });
-  const [later, capping] = watched.map((flow) => flow.map((perDay) => perDay * step));
-  return { first: laid, later: later ?? laid, capping: capping ?? laid, used, end };
 }
 
 /** Takes a look into account; null when nothing can explain it. */
@@ -100,54 +106,72 @@ function take(standing: Standing, likelihood: Float64Array, absent: number): Sta
   return { mass: mass.map((p) => p / total), unbuilt: unbuilt / total, log: standing.log + Math.log(total) };
 }
 
+/** A cell to follow. */
+export interface ForwardCell {
+  prior: BuildingPrior;
+  seen: readonly (Float64Array | null)[];
+}
+
+/** A cell on its way. */
+interface Walk extends Omit<ForwardPass, 'logLik' | 'last'> {
+  cell: ForwardCell;
+  standing: Standing;
+}
+
+/** Adds the cells built within the segment to those that were there. */
+function addNewcomers(moved: Moved, fresh: Newcomers, { unbuilt, isFlowNeeded }: { unbuilt: number; isFlowNeeded: boolean }) {
+  plus(moved.end, fresh.end, unbuilt);
+  joinBlocks(moved.used, fresh.used);
+  if (!isFlowNeeded) return;
+  plus(moved.first, fresh.first, unbuilt);
+  plus(moved.later, fresh.later(), unbuilt);
+  plus(moved.capping, fresh.capping(), unbuilt);
+}
+
+/** Takes the look at the end of a segment into account; one that nothing can explain is passed over. */
+function lookAt(walk: Walk, look: number, absent: number): void {
+  const likelihood = walk.cell.seen[look];
+  const taken = likelihood ? take(walk.standing, likelihood, absent) : walk.standing;
+  walk.isImpossible ||= taken === null;
+  walk.standing = taken ?? walk.standing;
+  const whole = walk.standing.mass.slice();
+  whole[NOT_BUILT] = walk.standing.unbuilt * absent;
+  walk.atLooks.push(whole);
+}
+
 /**
- * Follows a cell forward through everything seen of it.
+ * Follows cells forward through everything seen of them, side by side.
  *
- * @param cell `isFlowNeeded` false when only the likelihood and the states are asked for.
+ * @param work `isFlowNeeded` false when only the likelihood and the states are asked for.
  */
-export function forwardCell(
+export function forwardCells(
   kernel: NestKernel,
   timeline: Timeline,
-  cell: {
-    prior: BuildingPrior;
-    seen: readonly (Float64Array | null)[];
-    newcomers: SharedNewcomers;
-    isFlowNeeded: boolean;
-  },
-): ForwardPass {
-  const { prior, seen, newcomers, isFlowNeeded } = cell;
-  let standing: Standing = { mass: new Float64Array(kernel.model.states.count), unbuilt: 1, log: 0 };
-  const parts: ForwardPart[] = [];
-  const atLooks: Float64Array[] = [];
+  { cells, newcomers, isFlowNeeded }: { cells: readonly ForwardCell[]; newcomers: SharedNewcomers; isFlowNeeded: boolean },
+): ForwardPass[] {
+  const walks = cells.map((cell): Walk => {
+    const standing = { mass: new Float64Array(kernel.model.states.count), unbuilt: 1, log: 0 };
+    return { cell, standing, parts: [], atLooks: [], isImpossible: false };
+  });
   let edge = 0;
-  let isImpossible = false;
   for (const [s, segment] of timeline.segments.entries()) {
-    const { end, ...moved } = moveOn(kernel, segment, { mass: standing.mass, isFlowNeeded });
-    const before = (prior.absent[edge] ?? 0) * standing.unbuilt;
+    const open = walks.filter(({ cell, atLooks }) => atLooks.length < cell.seen.length);
+    const moved = moveOn(kernel, segment, { masses: open.map(({ standing }) => standing.mass), isFlowNeeded });
+    open.forEach((walk, i) => {
+      const { standing, cell } = walk;
+      const part = moved[i];
+      if (!part) return;
+      const { unbuilt } = standing;
+      if ((cell.prior.absent[edge] ?? 0) * unbuilt > LEAST)
+        addNewcomers(part, newcomers(cell.prior, s), { unbuilt, isFlowNeeded });
+      const { end, ...flows } = part;
+      walk.parts.push({ ...flows, log: standing.log });
+      walk.standing = { ...standing, mass: end };
+      if (segment.look !== null) lookAt(walk, segment.look, cell.prior.absent[edge + segment.steps] ?? 0);
+    });
     edge += segment.steps;
-    if (before > LEAST) {
-      const fresh = newcomers(prior, s);
-      plus(end, fresh.end, standing.unbuilt);
-      if (isFlowNeeded) {
-        plus(moved.first, fresh.first, standing.unbuilt);
-        plus(moved.later, fresh.later(), standing.unbuilt);
-        plus(moved.capping, fresh.capping(), standing.unbuilt);
-      }
-      fresh.used.forEach((is, b) => {
-        if (is === 1) moved.used[b] = 1;
-      });
-    }
-    parts.push({ ...moved, log: standing.log });
-    standing = { ...standing, mass: end };
-    if (segment.look === null) continue;
-    const likelihood = seen[segment.look];
-    const taken = likelihood ? take(standing, likelihood, prior.absent[edge] ?? 0) : standing;
-    isImpossible ||= taken === null;
-    standing = taken ?? standing;
-    const whole = standing.mass.slice();
-    whole[NOT_BUILT] = standing.unbuilt * (prior.absent[edge] ?? 0);
-    atLooks.push(whole);
-    if (segment.look + 1 >= seen.length) break;
   }
-  return { logLik: standing.log, parts, last: standing.mass, atLooks, isImpossible };
+  return walks.map(({ standing, parts, atLooks, isImpossible }) => {
+    return { logLik: standing.log, parts, last: standing.mass, atLooks, isImpossible };
+  });
 }

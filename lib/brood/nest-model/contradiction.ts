@@ -1,6 +1,6 @@
 import type { BuildingPrior } from './building';
 import { type CellLooks, likelihoods } from './cell-evidence';
-import { forwardCell, sharedNewcomers } from './cell-forward';
+import { forwardCells, sharedNewcomers } from './cell-forward';
 import type { NestKernel } from './nest-kernel';
 import type { Timeline } from './timeline';
 
@@ -16,12 +16,9 @@ export function isContradictory(
   const all = looks.flat();
   if (all.length < 2 && !all.some(({ reused }) => reused)) return false;
   const newcomers = sharedNewcomers(kernel, timeline);
-  const follow = (floor: number) =>
-    forwardCell(kernel, timeline, {
-      ...{ prior, newcomers, isFlowNeeded: false },
-      seen: likelihoods(kernel.model, looks, floor),
-    });
-  const plain = follow(0);
-  const floored = follow(kernel.model.settings.values.slipFloor.value);
+  const floors = [0, kernel.model.settings.values.slipFloor.value];
+  const cells = floors.map((floor) => ({ prior, seen: likelihoods(kernel.model, looks, floor) }));
+  const [plain, floored] = forwardCells(kernel, timeline, { cells, newcomers, isFlowNeeded: false });
+  if (!plain || !floored) return false;
   return plain.isImpossible || plain.logLik - floored.logLik < Math.log(SHARE);
 }

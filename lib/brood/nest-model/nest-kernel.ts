@@ -59,7 +59,7 @@ function extend({ chain, rows, blocks, relaid, capping }: EggRows, gates: { layi
     let active = blocks.at(-1) ?? blocksOf(chain, 1);
     if (n % (BLOCK / 2) === 1) {
       const held = active.slice();
-      heldBlocks(last, held, LEAST);
+      heldBlocks(last, held, { least: LEAST });
       active = reachFrom(chain, held);
     }
     tickMass(chain, { current: last, next }, active);

@@ -1,4 +1,4 @@
-import { type Blocks, addScaled, blocksOf } from '@/lib/brood/hmm/uniformised';
+import { type Blocks, addScaled, blocksOf, joinBlocks } from '@/lib/brood/hmm/uniformised';
 import type { BuildingPrior } from './building';
 import { NEW_CELL } from './brood-model';
 import { LEAST, type NestKernel } from './nest-kernel';
@@ -68,7 +68,7 @@ function mixedRows(kernel: NestKernel, segment: Segment, laid: Float64Array): { 
     const [row, active, weight] = [rows[n], blocks[n], weights[n] ?? 0];
     if (weight < LEAST || !row || !active) continue;
     addScaled(end, { vector: row, weight }, active);
-    for (let b = 0; b < used.length; b++) used[b] = (used[b] ?? 0) | (active[b] ?? 0);
+    joinBlocks(used, active);
   }
   return { end, used };
 }

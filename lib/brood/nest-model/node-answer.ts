@@ -1,5 +1,6 @@
-import { backwardCell, type BackwardPart } from './cell-backward';
-import { type ForwardPass, type SharedNewcomers, forwardCell, sharedNewcomers } from './cell-forward';
+import { joinBlocks } from '@/lib/brood/hmm/uniformised';
+import { type BackwardPart, type BackwardRecord, backwardCells } from './cell-backward';
+import { type ForwardPass, forwardCells, sharedNewcomers } from './cell-forward';
 import { type Future, type Outlook, outlookOf } from './cell-outlook';
 import type { BuildingPrior } from './building';
 import type { NestKernel } from './nest-kernel';
@@ -38,10 +39,8 @@ export interface NestFrame {
 /** Log-likelihood of everything seen at one value of the nest factor. */
 export function nodeLogLik(kernel: NestKernel, { timeline, groups }: NestFrame): number {
   const newcomers = sharedNewcomers(kernel, timeline);
-  return groups.reduce(
-    (sum, { prior, seen, cells }) => sum + cells * forwardCell(kernel, timeline, { prior, seen, newcomers, isFlowNeeded: false }).logLik,
-    0,
-  );
+  const passes = forwardCells(kernel, timeline, { cells: groups, newcomers, isFlowNeeded: false });
+  return groups.reduce((sum, { cells }, i) => sum + cells * (passes[i]?.logLik ?? 0), 0);
 }
 
 function sumOf(values: Float64Array): number {
@@ -75,33 +74,27 @@ function combine({ parts, logLik }: ForwardPass, backward: readonly BackwardPart
 
 /** Backward passes by record; the blocks of states are those of all groups with the record. */
 function backwardByRecord(kernel: NestKernel, { timeline, groups }: NestFrame, forwards: readonly ForwardPass[]) {
-  const byRecord = new Map<string, { group: CellGroup; used: Uint8Array[] }>();
-  groups.forEach((group, i) => {
+  const byRecord = new Map<string, BackwardRecord>();
+  groups.forEach(({ record, seen }, i) => {
     const used = (forwards[i]?.parts ?? []).map((part) => part.used.slice());
-    const known = byRecord.get(group.record);
-    if (!known) byRecord.set(group.record, { group, used });
-    else known.used.forEach((blocks, k) => blocks.forEach((is, b) => (blocks[b] = is | (used[k]?.[b] ?? 0))));
+    const known = byRecord.get(record);
+    if (known) known.used.forEach((blocks, k) => joinBlocks(blocks, used[k] ?? blocks));
+    else byRecord.set(record, { seen, used });
   });
-  return new Map(
-    [...byRecord].map(([record, { group, used }]) => [
-      record,
-      backwardCell(kernel, { segments: timeline.segments.slice(0, used.length), seen: group.seen, used }),
-    ]),
-  );
+  const passes = backwardCells(kernel, timeline.segments, [...byRecord.values()]);
+  return new Map([...byRecord.keys()].map((record, i) => [record, passes[i] ?? []]));
 }
 
 /** Everything about the groups at one value of the nest factor. */
 export function nodeAnswer(kernel: NestKernel, frame: NestFrame): { logLik: number; groups: GroupAnswer[] } {
   const { timeline, groups, futures } = frame;
-  const newcomers: SharedNewcomers = sharedNewcomers(kernel, timeline);
-  const forwards = groups.map(({ prior, seen }) =>
-    forwardCell(kernel, timeline, { prior, seen, newcomers, isFlowNeeded: true }),
-  );
+  const newcomers = sharedNewcomers(kernel, timeline);
+  const forwards = forwardCells(kernel, timeline, { cells: groups, newcomers, isFlowNeeded: true });
   const backwards = backwardByRecord(kernel, frame, forwards);
-  const answers = groups.map((group, i): GroupAnswer => {
-    const forward = forwards[i] ?? forwardCell(kernel, timeline, { ...group, newcomers, isFlowNeeded: true });
-    const { first, laid, capped } = combine(forward, backwards.get(group.record) ?? [], timeline.edges.length - 1);
-    const future = futures[group.seen.length - 1];
+  const answers = forwards.map((forward, i): GroupAnswer => {
+    const { record = '', seen = [] } = groups[i] ?? {};
+    const { first, laid, capped } = combine(forward, backwards.get(record) ?? [], timeline.edges.length - 1);
+    const future = futures[seen.length - 1];
     const outlook = future ? outlookOf(kernel, forward.last, future) : null;
     const { logLik, last, atLooks } = forward;
     const everLaid = 1 - neverLaid(kernel, atLooks.at(-1) ?? last);

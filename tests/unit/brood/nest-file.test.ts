@@ -19,7 +19,7 @@ describe('a nest file', () => {
     const result = parse({ readings: [READING, { at: '2026-06-01', marks: [] }] });
     expect(result).toMatchObject({
       ok: true,
-      value: { nest: 'nest', zone: 'UTC', taxon: null, asOf: Date.parse(READING.at), hasTemperature: false },
+      value: { nest: 'nest', zone: 'UTC', taxon: null, asOf: Date.parse(READING.at), temperature: null },
     });
   });
 
@@ -47,9 +47,26 @@ describe('a nest file', () => {
     expect(result.ok && estimateNest(result.value).durations).toMatchObject({ ...row, trust: 'assumption' });
   });
 
-  it('marks a temperature record as there', () => {
-    const result = parse({ readings: [READING], temperature: { kind: 'daily', days: [] } });
-    expect(result.ok && result.value.hasTemperature).toBe(true);
+  it('reads daily extremes and logger readings in any order, and where the nest hangs', () => {
+    const days = ['2026-06-02', '2026-06-01'].map((date) => ({ date, min: 12, max: 26 }));
+    const daily = parse({ readings: [READING], temperature: { kind: 'daily', days }, place: { lat: 40, lon: -75 } });
+    expect(daily).toMatchObject({
+      value: { temperature: { kind: 'daily', days: [{ date: '2026-06-01' }, { date: '2026-06-02' }] }, place: { lat: 40 } },
+    });
+    const readings = ['2026-06-02T01:00:00Z', '2026-06-02T00:00:00Z'].map((at) => ({ at, celsius: 21.5 }));
+    const logger = parse({ readings: [READING], temperature: { readings } });
+    expect(logger).toMatchObject({
+      value: { temperature: { kind: 'logger', readings: [{ at: Date.parse('2026-06-02T00:00:00Z') }, { celsius: 21.5 }] } },
+    });
+  });
+
+  it('takes what a team has learnt: how its readers err and how fast its nests are', () => {
+    const confusion = { rows: { egg: { egg: 0.9, empty: 0.1 } }, source: '40 double readings' };
+    const durationFactors = [{ taxon: 'Polistes fuscatus', logMean: 0.1, logSd: 0.05, source: 'nine nests' }];
+    const result = parse({ readings: [READING], settings: { confusion, durationFactors } });
+    expect(result).toMatchObject({
+      value: { settings: { confusion: { rows: { egg: { empty: 0.1 }, L2: { small: 1 } }, trust: 'assumption' }, durationFactors } },
+    });
   });
 });
 
@@ -110,6 +127,32 @@ describe('a malformed nest file is refused with one line that names the field', 
       'a duration of nothing',
       { readings: [READING], settings: { durations: [{ taxon: 'x', egg: 0 }] } },
       'settings.durations[0].egg:',
+    ],
+    ['a temperature of no kind', { readings: [READING], temperature: { kind: 'air' } }, 'temperature.kind: must be'],
+    [
+      'a day whose maximum lies below its minimum',
+      { readings: [READING], temperature: { days: [{ date: '2026-06-01', min: 20, max: 12 }] } },
+      'temperature.days[0].max: must be between 20 and 70',
+    ],
+    [
+      'a day that comes twice',
+      { readings: [READING], temperature: { days: [1, 2].map(() => ({ date: '2026-06-01', min: 2, max: 12 })) } },
+      'temperature.days[1]: is of the same time',
+    ],
+    [
+      'a temperature no nest ever had',
+      { readings: [READING], temperature: { readings: [{ at: '2026-06-01T00:00:00Z', celsius: 212 }] } },
+      'temperature.readings[0].celsius: must be between -40 and 70, is 212',
+    ],
+    [
+      'a confusion row that does not sum to 1',
+      { readings: [READING], settings: { confusion: { rows: { egg: { egg: 0.9 } } } } },
+      'settings.confusion.rows.egg: row egg: sums to 0.9',
+    ],
+    [
+      'a number of generations that is not whole',
+      { readings: [READING], settings: { generations: 2.5 } },
+      'settings.generations: must be a whole number',
     ],
     ['no reading and no day asked for', { readings: [] }, 'asOf: is needed when there is no reading'],
   ])('%s', (_, value, line) => {

@@ -33,5 +33,14 @@ export function settingsWith(values: Partial<Record<SettingName, number>>): Broo
   return { ...DEFAULT_SETTINGS, values: { ...DEFAULT_SETTINGS.values, ...Object.fromEntries(replaced) } };
 }
 
-/** Next to no spread: the estimate comes close to arithmetic with the mean durations. */
-export const NO_SPREAD = settingsWith({ cvEgg: 0.05, cvInstar: 0.05, cvCapped: 0.05, nestFactorCv: 0 });
+/**
+ * Next to no spread, and nothing known from where a cell lies: the estimate comes close to arithmetic with the mean
+ * durations. One brood a cell and a short search, because so little spread takes thousands of phases.
+ */
+export const NO_SPREAD = settingsWith({
+  ...{ cvEgg: 0.05, cvInstar: 0.07, cvCapped: 0.05, nestFactorCv: 0 },
+  ...{ generations: 1, orderSpread: 500, priorSpan: 60 },
+});
+
+/** Few phases: the same model, quick enough to be run hundreds of times. */
+export const COARSE = settingsWith({ cvEgg: 0.4, cvInstar: 0.9, cvCapped: 0.4, generations: 2, priorSpan: 90 });

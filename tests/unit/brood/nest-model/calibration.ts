@@ -15,11 +15,10 @@ import { type TrueCell, broodAt, classAt, recorded, simulateCell } from './simul
 const LOOKS = [0, 7.3, 13.8, 21.1];
 const LAST = 21.1;
 const FIRST_COUNT = 14;
-/** Rank and spread of the three cells of a nest. */
+/** Rank and spread of the cells of a nest. */
 const CELLS = [
   { rank: 1, spread: 1.6 },
-  { rank: 6, spread: 2.1 },
-  { rank: 16, spread: 3.1 },
+  { rank: 8, spread: 2.3 },
 ];
 const PRIOR_DAYS = 45;
 const SD = Math.sqrt(Math.log1p(0.2 ** 2));

@@ -1,0 +1,122 @@
+import { poissonMean, poissonWeights } from '@/lib/brood/poisson';
+import type { PassRequest, PassResult } from './power-pass';
+import { TILE, type TilePair, type TilePlan, addTile, column, interleave, planTile, tickMassTile, tickValueTile } from './tile';
+import { BLOCK, type Blocks, type Uniformised, blocksOf, heldBlocks, reachFrom } from './uniformised';
+
+type TileTick = (chain: Uniformised, pair: TilePair, plan: TilePlan) => void;
+
+/** Which blocks are in play while masses move on. */
+interface Play {
+  used: Blocks;
+  plan: TilePlan;
+  blocks: Blocks;
+}
+
+/** Looks anew at where mass is, before it can have crossed a block; what dropped out is emptied in both tiles. */
+function follow(chain: Uniformised, play: Play, { pair, least }: { pair: TilePair; least: number }): void {
+  const held = play.blocks.slice();
+  heldBlocks(pair.current, held, { least, width: TILE });
+  const reach = reachFrom(chain, held);
+  play.blocks.forEach((was, b) => {
+    if (was === 1 && reach[b] === 0) pair.next.fill(0, b * BLOCK * TILE, (b + 1) * BLOCK * TILE);
+  });
+  reach.forEach((is, b) => {
+    if (is === 1) play.used[b] = 1;
+  });
+  play.plan = planTile(chain, reach);
+  play.blocks = reach;
+}
+
+/** Watched sums of every column, tick by tick. */
+function noteWatched(
+  sequences: readonly Float64Array[],
+  watch: NonNullable<PassRequest['watch']>,
+  { n, tile }: { n: number; tile: Float64Array },
+): void {
+  for (let i = 0; i < watch.length; i++) {
+    for (let c = 0; c < TILE; c++) {
+      const sequence = sequences[i * TILE + c];
+      let sum = 0;
+      for (const [state, weight] of watch[i]?.gate ?? []) sum += weight * (tile[state * TILE + c] ?? 0);
+      if (sequence) sequence[n] = sum;
+    }
+  }
+}
+
+/** One tile's pass. */
+function passTile(
+  chain: Uniformised,
+  vectors: readonly Float64Array[],
+  { tick, play, isMoving, isEndNeeded, request }: TilePass,
+): PassResult[] {
+  const { days, watch = [], weightsOf = poissonWeights, least = 0 } = request;
+  const { first, weights } = weightsOf(chain.clock * days);
+  const ticks = first + weights.length;
+  const sequences = Array.from({ length: watch.length * TILE }, () => new Float64Array(ticks));
+  const end = new Float64Array(chain.states * TILE);
+  const pair = { current: interleave(vectors, chain.states), next: new Float64Array(chain.states * TILE) };
+  if (!isMoving) play.blocks.forEach((is, b) => is === 0 && pair.current.fill(0, b * BLOCK * TILE, (b + 1) * BLOCK * TILE));
+  for (let n = 0; n < ticks; n++) {
+    if (n > 0) {
+      tick(chain, pair, play.plan);
+      [pair.current, pair.next] = [pair.next, pair.current];
+    }
+    if (isMoving && n % (BLOCK / 2) === 0) follow(chain, play, { pair, least });
+    noteWatched(sequences, watch, { n, tile: pair.current });
+    if (isEndNeeded && n >= first) addTile(end, pair.current, { weight: weights[n - first] ?? 0, plan: play.plan });
+  }
+  return vectors.map((_, c) => ({
+    end: column(end, c),
+    watched: watch.map(({ at }, i) =>
+      at.map((time) => poissonMean(sequences[i * TILE + c] ?? end, weightsOf(chain.clock * time))),
+    ),
+    used: play.used,
+  }));
+}
+
+interface TilePass {
+  tick: TileTick;
+  play: Play;
+  isMoving: boolean;
+  isEndNeeded: boolean;
+  request: PassRequest;
+}
+
+function standing(vectors: readonly Float64Array[], { watch = [] }: PassRequest, used: Blocks): PassResult[] {
+  return vectors.map((vector) => ({
+    end: vector.slice(),
+    watched: watch.map(({ gate, at }) => {
+      const value = gate.reduce((sum, [state, weight]) => sum + weight * (vector[state] ?? 0), 0);
+      return new Float64Array(at.length).fill(value);
+    }),
+    used,
+  }));
+}
+
+function inTiles(vectors: readonly Float64Array[], pass: (tile: readonly Float64Array[]) => PassResult[]): PassResult[] {
+  const tiles = Array.from({ length: Math.ceil(vectors.length / TILE) }, (_, i) => vectors.slice(i * TILE, (i + 1) * TILE));
+  return tiles.flatMap(pass);
+}
+
+/** `massPass` for many vectors at once. */
+export function massPasses(chain: Uniformised, masses: readonly Float64Array[], request: PassRequest): PassResult[] {
+  if (request.days === 0 || chain.clock === 0) return standing(masses, request, blocksOf(chain, 1));
+  return inTiles(masses, (tile) => {
+    const blocks = blocksOf(chain, 1);
+    const play = { blocks, used: blocksOf(chain, 0), plan: planTile(chain, blocks) };
+    return passTile(chain, tile, { tick: tickMassTile, play, isMoving: true, isEndNeeded: true, request });
+  });
+}
+
+/** `valuePass` for many vectors at once, all with the same blocks. */
+export function valuePasses(
+  chain: Uniformised,
+  values: readonly Float64Array[],
+  { blocks = blocksOf(chain, 1), isEndNeeded = true, ...request }: PassRequest & { blocks?: Blocks; isEndNeeded?: boolean },
+): PassResult[] {
+  if (request.days === 0 || chain.clock === 0) return standing(values, request, blocks);
+  const play = { blocks, used: blocks, plan: planTile(chain, blocks) };
+  return inTiles(values, (tile) =>
+    passTile(chain, tile, { tick: tickValueTile, play, isMoving: false, isEndNeeded, request }),
+  );
+}
