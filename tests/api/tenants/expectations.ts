@@ -3,6 +3,7 @@ import { ROLES, type Role } from '@/lib/server/auth/role';
 import type { ApiCall } from '@/tests/support/factories/call-api';
 import { wireOp } from '@/tests/support/wire/wire-op';
 import type { Asker, MethodExpectation, RouteExpectation } from './expectation';
+import { HEAT_EXPECTATIONS } from './heat-expectations';
 
 const EVERYONE: readonly Role[] = ROLES;
 const RECORDERS: readonly Role[] = ['technician', 'reviewer', 'biologist'];
@@ -251,6 +252,7 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
       },
     },
   },
+  ...HEAT_EXPECTATIONS,
   '[...path]/route.ts': { load: () => import('@/app/api/[...path]/route'), methods: {}, otherwise: 404 },
 };
 
