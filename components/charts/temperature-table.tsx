@@ -23,7 +23,7 @@ export function TemperatureTable({ days, inYear }: { days: readonly DaySummary[]
       <tbody>
         {days.map(({ date, min, max, drawnHours, calendarHours, development }) => (
           <tr key={date}>
-            <BodyCell>{dateWords(date, inYear)}</BodyCell>
+            <BodyCell className="whitespace-nowrap">{dateWords(date, inYear)}</BodyCell>
             <BodyCell number>{degrees(min)}</BodyCell>
             <BodyCell number>{degrees(max)}</BodyCell>
             <BodyCell number>{hours(drawnHours)}</BodyCell>

@@ -25,16 +25,17 @@ function NumberField({ item, value, isWrong, onChange }: NumberFieldProps): Reac
   const { name, label, unit, does, min, max } = item;
   return (
     <li className="keep-together flex flex-col gap-1 border-b border-rule py-2 lg:grid lg:grid-cols-[minmax(0,1.2fr)_9rem_minmax(0,1.3fr)] lg:items-center lg:gap-x-4">
-      <label htmlFor={`value-${name}`}>
-        {sentence(label)}
-        <span className="block text-sm text-quiet">
+      <div>
+        <label htmlFor={`value-${name}`}>{sentence(label)}</label>
+        <p id={`value-${name}-hint`} className="text-sm text-quiet">
           {does} {numberText(min)} to {numberText(max)}.
-        </span>
-      </label>
+        </p>
+      </div>
       <span className="flex items-center gap-2">
         <Input
           id={`value-${name}`}
           inputMode="decimal"
+          aria-describedby={`value-${name}-hint`}
           value={value.text}
           aria-invalid={isWrong || undefined}
           onChange={({ target }) => onChange({ ...value, text: target.value })}

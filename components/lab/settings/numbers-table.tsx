@@ -15,9 +15,9 @@ function GroupTable({ group, values }: NumbersTableProps & { group: SettingGroup
     <Table scrolls caption={group.title} className="text-[0.9375rem]">
       <thead>
         <tr>
-          <HeadCell>Setting</HeadCell>
-          <HeadCell className="text-right">Value</HeadCell>
-          <HeadCell>Trust</HeadCell>
+          <HeadCell className="lg:w-[26rem]">Setting</HeadCell>
+          <HeadCell className="text-right lg:w-36">Value</HeadCell>
+          <HeadCell className="lg:w-32">Trust</HeadCell>
           <HeadCell className="min-w-56">Source</HeadCell>
         </tr>
       </thead>

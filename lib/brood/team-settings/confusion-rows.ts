@@ -45,11 +45,6 @@ export const DEFAULT_CONFUSION: ConfusionRows = {
 /** Rounding that a person typing shares may leave. */
 const SUM_TOLERANCE = 1e-9;
 
-/** Is this one of the true classes? */
-export function isTrueClass(name: string): name is TrueClass {
-  return (TRUE_CLASSES as readonly string[]).includes(name);
-}
-
 /** Is this one of the recorded classes? */
 export function isRecordedClass(name: string): name is RecordedClass {
   return (RECORDED_CLASSES as readonly string[]).includes(name);

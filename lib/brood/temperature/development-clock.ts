@@ -24,7 +24,7 @@ export interface DevelopmentClock {
 }
 
 /** The clock of a nest nobody measured: calendar days. */
-export const CALENDAR_CLOCK: DevelopmentClock = {
+const CALENDAR_CLOCK: DevelopmentClock = {
   kind: 'none',
   from: null,
   to: null,

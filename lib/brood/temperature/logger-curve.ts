@@ -17,7 +17,7 @@ function pairs(readings: readonly LoggerReading[]): Pair[] {
 }
 
 /** The usual time between two readings, ms; 0 with fewer than two. */
-export function usualStep(readings: readonly LoggerReading[]): number {
+function usualStep(readings: readonly LoggerReading[]): number {
   const steps = pairs(readings)
     .map(([a, b]) => b.at - a.at)
     .sort((a, b) => a - b);
@@ -53,7 +53,7 @@ function hotRuns(readings: readonly LoggerReading[], limit: number): LoggerReadi
 }
 
 /** `2026-07-04 14:30`, local. */
-export function momentText(epochMs: number, zone: string): string {
+function momentText(epochMs: number, zone: string): string {
   const { date, time } = localParts(epochMs, zone);
   return `${date} ${time}`;
 }

@@ -4,6 +4,7 @@ import type { ApiCall } from '@/tests/support/factories/call-api';
 import { wireOp } from '@/tests/support/wire/wire-op';
 import type { Asker, MethodExpectation, RouteExpectation } from './expectation';
 import { PEOPLE_EXPECTATIONS } from './people-expectations';
+import { HEAT_EXPECTATIONS } from './heat-expectations';
 
 const EVERYONE: readonly Role[] = ROLES;
 const RECORDERS: readonly Role[] = ['technician', 'reviewer', 'biologist'];
@@ -336,6 +337,7 @@ export const EXPECTATIONS: Readonly<Record<string, RouteExpectation>> = {
       },
     },
   },
+  ...HEAT_EXPECTATIONS,
   '[...path]/route.ts': { load: () => import('@/app/api/[...path]/route'), methods: {}, otherwise: 404 },
 };
 

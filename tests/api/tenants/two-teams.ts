@@ -1,8 +1,12 @@
 import { v7 } from 'uuid';
 import { memberContext } from '@/lib/server/auth/member-context';
 import { amendReading } from '@/lib/server/commands/readings/amend-reading';
+import { saveDraft } from '@/lib/server/commands/settings/save-draft';
+import { signSettings } from '@/lib/server/commands/settings/sign-settings';
+import { keepTemperature } from '@/lib/server/commands/temperature/keep-temperature';
 import { lockReading } from '@/lib/server/commands/readings/lock-reading';
 import { settleReading } from '@/lib/server/commands/readings/settle-reading';
+import type { TeamContext } from '@/lib/server/auth/team-context';
 import { database } from '@/lib/server/db/database';
 import { toBinary } from '@/lib/server/db/uuid-binary';
 import { makeNest, makeVisit } from '@/tests/support/factories/make-nest';
@@ -33,6 +37,8 @@ export interface Tenant {
   onlyCode: string;
   /** An unanswered invitation of this team. */
   invitation: string;
+  /** A temperature record of that nest. */
+  temperature: string;
   /** `X-Device` of an enrolled phone by user id. */
   devices: ReadonlyMap<string, string>;
   /** Texts that may reach nobody of the other team. */
@@ -101,6 +107,17 @@ async function enrolAll(team: TestTeam, canary: string): Promise<Map<string, str
   return devices;
 }
 
+/** A signed version and a draft of the settings, and a temperature record; returns the record's id. */
+async function makeSettingsAndTemperature(ctx: TeamContext, nest: string, canary: string): Promise<string> {
+  const values = { lossEgg: { value: 0.02, trust: 'low' as const, source: `Trial ${canary}` } };
+  await saveDraft(ctx, { values }, NOW);
+  await signSettings(ctx, { reason: `Signed ${canary}`, basedOn: 0 }, NOW);
+  await saveDraft(ctx, { values }, NOW);
+  const text = `time,${canary} °C\n2026-06-02 05:00,20\n2026-06-02 06:00,21`;
+  const { id } = await keepTemperature(ctx, { id: nest, input: { text, fileName: `${canary}.csv` } }, NOW);
+  return id;
+}
+
 async function makeTenant(canary: string, shared: EntityIds, lat: number): Promise<Tenant> {
   const team = await makeTeam({ name: `Programme ${canary}`, canary: ` ${canary}` });
   const [only, onlyCode] = [freshIds(), `ONLY-${canary}`];
@@ -113,9 +130,11 @@ async function makeTenant(canary: string, shared: EntityIds, lat: number): Promi
   await lockReading(ctx, { id: final }, NOW);
   await amendReading(ctx, { id: final, reason: `Amended ${canary}` }, NOW);
   const invitation = await makeInvitation(team.teamId, canary);
+  const temperature = await makeSettingsAndTemperature(ctx, only.nest, canary);
   const people = Object.values(team.members).map(({ userId }) => userId);
-  const secrets = [canary, String(lat), team.teamId, final, invitation, ...Object.values(only), ...people];
-  return { team, canary, shared, only, onlyCode, invitation, devices: await enrolAll(team, canary), secrets };
+  const secrets = [canary, String(lat), team.teamId, final, invitation, temperature, ...Object.values(only), ...people];
+  const devices = await enrolAll(team, canary);
+  return { team, canary, shared, only, onlyCode, invitation, temperature, devices, secrets };
 }
 
 /** Two teams whose nests, visits, readings and operations have the same ids, and one nest each of its own. */

@@ -10,7 +10,7 @@ import { readDaily } from './read-daily';
 import { readLogger } from './read-logger';
 
 /** Longest file that is read, in lines: a season in steps of a minute. */
-export const MAX_LINES = 400_000;
+const MAX_LINES = 400_000;
 
 /** What came of a file. */
 export type TemperatureCsv =
