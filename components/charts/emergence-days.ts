@@ -24,6 +24,6 @@ export function emergenceWords(days: readonly EmergenceDay[]): string {
   const [from, to] = [dayOfShare(days, total / 4), dayOfShare(days, (total * 3) / 4)];
   const many = `About ${countWords(Math.round(total), 'adult')} ${Math.round(total) === 1 ? 'is' : 'are'} expected`;
   return from === to
-    ? `${many} in the days shown, most on ${dateWords(from)}.`
+    ? `${many} in the days shown, half of them within the day of ${dateWords(from)}.`
     : `${many} in the days shown, half of them between ${spanWords([from, to])}.`;
 }

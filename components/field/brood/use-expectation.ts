@@ -11,6 +11,7 @@ import { askBrood } from '@/lib/offline/browser-brood';
 import type { BroodHistory } from '@/lib/offline/brood-history';
 import { useBroodHistory } from '@/lib/offline/hooks/use-brood-history';
 import type { RecorderView } from '@/lib/offline/recorder-view';
+import { afterPaint } from './after-paint';
 
 /** What a comb is expected to hold today, and what changes are judged by. */
 export interface Expectation {
@@ -48,17 +49,20 @@ export function useExpectation({ nest, reading }: RecorderView, taxon: string | 
     if (!history || history.kind === 'second' || history.earlier.length === 0) return;
     let current = true;
     const { visitAt, earlier } = history;
-    askBrood({ nest, zone, taxon, asOf: visitAt, readings: earlier }).then(
-      (estimate) => {
-        const cells = expectedToday(estimate, earlier);
-        const states = new Map(cells.map((cell) => [cellKey(cell), cell.state]));
-        if (current) setKnown({ reading, states, failed: false });
-      },
-      // Without an estimate the recorder works as at a first reading.
-      () => current && setKnown({ reading, states: NOTHING_EXPECTED, failed: true }),
-    );
+    const ask = (): void =>
+      void askBrood({ nest, zone, taxon, asOf: visitAt, readings: earlier }).then(
+        (estimate) => {
+          const cells = expectedToday(estimate, earlier);
+          const states = new Map(cells.map((cell) => [cellKey(cell), cell.state]));
+          if (current) setKnown({ reading, states, failed: false });
+        },
+        // Without an estimate the recorder works as at a first reading.
+        () => current && setKnown({ reading, states: NOTHING_EXPECTED, failed: true }),
+      );
+    const withdraw = afterPaint(ask);
     return () => {
       current = false;
+      withdraw();
     };
   }, [history, nest, reading, taxon, zone]);
   const own = known?.reading === reading ? known : null;

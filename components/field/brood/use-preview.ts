@@ -8,6 +8,7 @@ import { NoEstimateError, type NoEstimateReason } from '@/lib/offline/brood-aske
 import type { BroodTask } from '@/lib/offline/brood-messages';
 import type { BroodHistory } from '@/lib/offline/brood-history';
 import { useBroodHistory } from '@/lib/offline/hooks/use-brood-history';
+import { afterPaint } from './after-paint';
 
 /** What is estimated from. */
 export interface PreviewSource {
@@ -49,12 +50,15 @@ export function usePreview(source: PreviewSource): Preview {
     const show = (preview: Preview): void => {
       if (current) setFound({ question, preview });
     };
-    askBrood(taskOf({ nest, reading, taxon, marks, zone }, history)).then(
-      (estimate) => show({ kind: 'ready', estimate }),
-      (error: unknown) => show({ kind: 'none', reason: error instanceof NoEstimateError ? error.reason : 'model' }),
-    );
+    const ask = (): void =>
+      void askBrood(taskOf({ nest, reading, taxon, marks, zone }, history)).then(
+        (estimate) => show({ kind: 'ready', estimate }),
+        (error: unknown) => show({ kind: 'none', reason: error instanceof NoEstimateError ? error.reason : 'model' }),
+      );
+    const withdraw = afterPaint(ask);
     return () => {
       current = false;
+      withdraw();
     };
     // The marks are one list by value: `question` says when they change.
     // eslint-disable-next-line react-hooks/exhaustive-deps

@@ -9,6 +9,8 @@ import { wireOp } from './wire-op';
 export interface ReadVisit {
   startedAt: string;
   states: readonly CellState[];
+  /** Not handed in yet. */
+  open?: boolean;
 }
 
 const AT_ONCE = 80;
@@ -24,7 +26,7 @@ export async function pushVisitedNest(
   await client.push([
     wireOp({ kind: 'nest.open', nest, body: { code, name: `${code} roof`, taxon: 'Polistes fuscatus' } }),
   ]);
-  for (const { startedAt, states } of visits) {
+  for (const { startedAt, states, open = false } of visits) {
     ids = { nest, visit: v7(), reading: v7() };
     await client.push([
       wireOp({ kind: 'visit.open', nest, visit: ids.visit, body: { purpose: 'check', startedAt } }),
@@ -34,7 +36,7 @@ export async function pushVisitedNest(
       markOp(ids, { ...cell, state: states[index] ?? 'unread' }),
     );
     for (let from = 0; from < marks.length; from += AT_ONCE) await client.push(marks.slice(from, from + AT_ONCE));
-    await client.push([wireOp({ kind: 'reading.submit', ...ids, body: {} })]);
+    if (!open) await client.push([wireOp({ kind: 'reading.submit', ...ids, body: {} })]);
   }
   return ids;
 }
