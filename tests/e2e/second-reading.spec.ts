@@ -140,6 +140,11 @@ test.describe('the lab', () => {
     await lab.page.setViewportSize(DESKTOP);
     received = listenTo(lab.context);
     await lab.page.goto(`/review/${field.ids.visit}/read`);
+    // The browser writes its cookies every half minute: after a kill a person may have to sign in again.
+    if (lab.page.url().includes('/sign-in')) {
+      await signInByForm(lab.page, 'reviewer@tarrow.example');
+      await lab.page.goto(`/review/${field.ids.visit}/read`);
+    }
     await expect(lab.page.getByText('Cell 25', { exact: true })).toBeVisible({ timeout: 30_000 });
     await timed(async () => {
       for (const letter of typed.slice(25)) await lab.page.keyboard.press(letter);

@@ -33,8 +33,7 @@ export function FiguresTable({ compared }: { compared: ComparedView }): ReactEle
   return (
     <>
       <p className="mb-2">
-        {agreement.alike} of {agreement.compared} cells are read alike; {leftOutWords(agreement.leftOut)}, because one
-        reader has no such cell or could not tell.
+        {agreement.alike} of {agreement.compared} cells are read alike; {leftOutWords(agreement.leftOut)}.
       </p>
       <Table caption="Agreement of the two readings" scrolls>
         <thead>

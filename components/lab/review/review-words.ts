@@ -44,7 +44,8 @@ export function daysWords(days: number): string {
   return `${days.toFixed(1)} days`;
 }
 
-/** Cells that took no part: `2 left out`. */
+/** Cells that took no part, and why: `2 cells left out, because …`. */
 export function leftOutWords(count: number): string {
-  return count === 0 ? 'no cell left out' : `${countWords(count, 'cell')} left out`;
+  if (count === 0) return 'no cell is left out';
+  return `${countWords(count, 'cell')} left out, because one reader has no such cell or could not tell`;
 }
