@@ -37,27 +37,27 @@ export default async function AccountPage(): Promise<ReactElement> {
               <OwnTeams teams={teams} />
             </Section>
           )}
-          <Section id="leave" title="Leave the team">
-            <p className="mb-3">What you recorded stays with {session.teamName}, under your name.</p>
-            <ConfirmAct
-              words={`Leave ${session.teamName}`}
-              tone="stop"
-              title={`Leave ${session.teamName}?`}
-              act="Leave the team"
-              path="/api/account/leave"
-              then="/sign-in"
-            >
-              <p>
-                Every sign-in of yours to this team ends at once. Send what your phones hold first: afterwards only a
-                new invitation lets them send it.
-              </p>
-            </ConfirmAct>
-          </Section>
         </div>
         <Section id="password" title="Change the password" className="min-w-0">
           <PasswordForm email={email} />
         </Section>
       </div>
+      <Section id="leave" title="Leave the team" className="mt-10 max-w-text">
+        <p className="mb-3">What you recorded stays with {session.teamName}, under your name.</p>
+        <ConfirmAct
+          words={`Leave ${session.teamName}`}
+          tone="stop"
+          title={`Leave ${session.teamName}?`}
+          act="Leave the team"
+          path="/api/account/leave"
+          then="/sign-in"
+        >
+          <p>
+            Every sign-in of yours to this team ends at once. Send what your phones hold first: afterwards only a new
+            invitation lets them send it.
+          </p>
+        </ConfirmAct>
+      </Section>
     </>
   );
 }

@@ -9,6 +9,11 @@ interface PhonesProps extends TimeView {
   phones: readonly PhoneView[];
 }
 
+/** Something that may be lost with the phone stands out. */
+function unsentLook({ unsent }: PhoneView): string {
+  return unsent ? 'font-bold text-warn' : '';
+}
+
 /** The phones that may send, with what they held when last seen. */
 export function PhonesTable({ phones, zone, today }: PhonesProps): ReactElement {
   return (
@@ -16,8 +21,8 @@ export function PhonesTable({ phones, zone, today }: PhonesProps): ReactElement 
       <thead>
         <tr>
           <HeadCell>Phone</HeadCell>
-          <HeadCell>Last seen</HeadCell>
-          <HeadCell>Unsent then</HeadCell>
+          <HeadCell className="max-sm:hidden">Last seen</HeadCell>
+          <HeadCell className="max-sm:hidden">Unsent then</HeadCell>
           <HeadCell>
             <span className="sr-only">Acts</span>
           </HeadCell>
@@ -30,9 +35,13 @@ export function PhonesTable({ phones, zone, today }: PhonesProps): ReactElement 
               <span className="font-bold">{phone.label}</span>
               <span className="block text-sm">{phone.own ? 'yours' : phone.person}</span>
               <span className="block text-sm text-quiet">since {dayWords(phone.enrolledAt, zone, today)}</span>
+              <span className="block text-sm sm:hidden">
+                last seen {momentWords(phone.lastSeenAt, zone, today)}, unsent then:{' '}
+                <span className={unsentLook(phone)}>{unsentWords(phone.unsent)}</span>
+              </span>
             </BodyCell>
-            <BodyCell>{momentWords(phone.lastSeenAt, zone, today)}</BodyCell>
-            <BodyCell className={phone.unsent ? 'font-bold text-warn' : ''}>{unsentWords(phone.unsent)}</BodyCell>
+            <BodyCell className="max-sm:hidden">{momentWords(phone.lastSeenAt, zone, today)}</BodyCell>
+            <BodyCell className={`max-sm:hidden ${unsentLook(phone)}`}>{unsentWords(phone.unsent)}</BodyCell>
             <BodyCell>
               <div className="flex justify-end">
                 <RevokeDialog phone={phone} />

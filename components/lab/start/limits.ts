@@ -82,5 +82,6 @@ export const TRUST_MEANINGS: readonly { trust: Trust; words: string }[] = [
 /** A number of the model as it is told: at most three decimals, no trailing noughts. */
 export function settingWords(value: number, unit: string): string {
   const figure = String(Number(value.toFixed(3)));
-  return unit === '' ? figure : `${figure} ${unit}`;
+  const one = value === 1 && unit === 'days' ? 'day' : unit;
+  return one === '' ? figure : `${figure} ${one}`;
 }

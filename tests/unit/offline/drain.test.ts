@@ -84,6 +84,12 @@ describe('a pass of the drain', () => {
     expect(sizes.reduce((sum, size) => sum + size)).toBe(500);
   });
 
+  test('tells the office with each request how much it still holds', async () => {
+    const { network, drain } = phone(60);
+    await drain(pass);
+    expect(network.asked.map(({ unsent }) => unsent)).toEqual([60, 35, 0]);
+  });
+
   test('reports how far it is while a push is on its way', async () => {
     const { report, drain } = phone(60);
     await drain(pass);

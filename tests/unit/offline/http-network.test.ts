@@ -32,6 +32,14 @@ describe('a request', () => {
     );
   });
 
+  test('tells how much the phone still holds, but not before the office knows the phone', async () => {
+    const fetch = answering(() => new Response('{}'));
+    await httpNetwork.send({ ...ASK, deviceId: 'd-1', unsent: 7 });
+    await httpNetwork.send({ ...ASK, deviceId: null, unsent: 7 });
+    const said = fetch.mock.calls.map(([, init]) => new Headers(init?.headers).get('X-Unsent'));
+    expect(said).toEqual(['7', null]);
+  });
+
   test('without a device or a body says nothing about them', async () => {
     const fetch = answering(() => new Response('{}'));
     await httpNetwork.send(ASK);

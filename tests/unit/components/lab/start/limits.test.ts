@@ -11,6 +11,7 @@ it('explains every word of trust that a default carries', () => {
 it('tells a number with at most three decimals and its unit', () => {
   expect(settingWords(1 / 3, '')).toBe('0.333');
   expect(settingWords(7, 'days')).toBe('7 days');
+  expect(settingWords(1, 'days')).toBe('1 day');
   expect(settingWords(0.002, 'per day')).toBe('0.002 per day');
 });
 
