@@ -127,7 +127,6 @@ test.describe('in the hand', () => {
       await page.screenshot({ path: screenshotPath(`field-${name}-lamp`), fullPage: true });
     });
     // The attribute is there before the app has started: a script in the head has put it.
-    await page.route('**/_next/static/**', (route) => route.abort());
     const bare = await page
       .context()
       .browser()

@@ -45,13 +45,28 @@ test.describe('life on a phone', () => {
 
   test('a press that finds no room is shown as not saved, keeps its place, and is kept once there is room', async ({
     page,
-    context,
   }) => {
+    // As Chromium does it on a full disk: every request reports success, then the transaction is aborted over its room.
+    await page.addInitScript(() => {
+      const put = IDBObjectStore.prototype.put;
+      const doomed = new WeakSet<IDBTransaction>();
+      const doom = (transaction: IDBTransaction) => {
+        Object.defineProperty(transaction, 'error', { value: new DOMException('no room', 'QuotaExceededError') });
+        transaction.abort();
+      };
+      IDBObjectStore.prototype.put = function (value, key) {
+        const request = put.call(this, value, key);
+        const { transaction } = this;
+        if ((window as { full?: boolean }).full && this.name === 'ops') doomed.add(transaction);
+        if (this.name === 'meta' && doomed.has(transaction))
+          request.addEventListener('success', () => doom(transaction));
+        return request;
+      };
+    });
     const recorder = await atTheNest(page, 'FULL-1');
     await pressAll(page, ['Egg', 'Capped']);
     await expect(page.getByText('Cell 2', { exact: true })).toBeVisible();
-    const browser = await context.newCDPSession(page);
-    await browser.send('Storage.overrideQuotaForOrigin', { origin: origin(), quotaSize: 1 });
+    await page.evaluate(() => Object.assign(window, { full: true }));
     await pressAll(page, ['Large', 'Small']);
     const alert = page.getByRole('alert').filter({ hasText: 'Not saved: cell 2, large larva' });
     await expect(alert).toBeVisible({ timeout: 20_000 });
@@ -59,7 +74,7 @@ test.describe('life on a phone', () => {
     await expect(alert).toContainText('storage is full');
     await expect(page.getByRole('link', { name: /Not saved/ })).toBeVisible();
     await page.screenshot({ path: screenshotPath('field-recorder-full-390') });
-    await browser.send('Storage.overrideQuotaForOrigin', { origin: origin() });
+    await page.evaluate(() => Object.assign(window, { full: false }));
     await alert.getByRole('button', { name: 'Try again' }).click();
     await expect(alert).toHaveCount(0);
     await page.goto(recorder);

@@ -86,7 +86,7 @@ test.describe('paper', () => {
     const code = await page.locator('.paper-sheet .font-mono').first().textContent();
     await page.goto('/field');
     await page.getByLabel('Find a nest').fill(code?.toLowerCase() ?? '');
-    await expect(page.getByRole('link', { name: /Bandstand roof/ })).toBeVisible();
+    await expect(page.getByRole('link', { name: /bandstand roof/ })).toBeVisible();
     await expect(page.getByRole('main').getByRole('listitem')).toHaveCount(1);
   });
 

@@ -29,7 +29,7 @@ export function SheetComb(): ReactElement {
               stroke="currentColor"
               strokeWidth="1"
             />
-            <text y="19" textAnchor="middle" fontSize="7" fill="currentColor">
+            <text y="15" textAnchor="middle" fontSize="6" fill="currentColor">
               {cellNumber(cell)}
             </text>
           </g>

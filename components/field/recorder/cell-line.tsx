@@ -17,7 +17,7 @@ function StepKey({ desk, way }: StepKeyProps): ReactElement {
       aria-label={way === 'back' ? 'One cell back' : 'One cell forward'}
       aria-disabled={to === null}
       onClick={() => to && desk.recorder.jump(to)}
-      className="min-h-16 min-w-16 shrink-0 touch-manipulation rounded-xl border-3 border-ink bg-paper text-3xl font-bold select-none active:bg-main-wash aria-disabled:border-rule aria-disabled:text-quiet"
+      className="min-h-16 min-w-[min(4rem,max(64px,17vw))] shrink-0 touch-manipulation rounded-xl border-3 border-ink bg-paper text-3xl font-bold select-none active:bg-main-wash aria-disabled:border-rule aria-disabled:text-quiet"
     >
       <span aria-hidden="true">{way === 'back' ? '‹' : '›'}</span>
     </button>

@@ -67,7 +67,7 @@ export function RecorderDesk({ recorder, title, expectation, onFinish }: Recorde
         onPress={setTapped}
       />
       <div className="flex flex-col gap-2 lg:justify-center lg:gap-5">
-        <div className="hand-mirror flex min-h-field items-center gap-3">
+        <div className="hand-mirror flex min-h-field flex-wrap items-center gap-3">
           <TallyHead tally={view.tally} />
           <SideKey onPress={() => setSheet('tools')}>Tools</SideKey>
           <SideKey main={view.current === null} onPress={onFinish}>

@@ -14,7 +14,7 @@ function besides(tally: Tally): string {
 /** The head of the running tally; the six everyday counts stand on their keys. All of it is also there in words, unseen. */
 export function TallyHead({ tally }: { tally: Tally }): ReactElement {
   return (
-    <div className="min-w-0 flex-1 leading-tight">
+    <div className="min-w-0 flex-1 basis-24 leading-tight">
       <p className="sr-only">{tally.cellsTotal === 0 ? 'No cell marked yet' : tallyWords(tally).join(', ')}</p>
       <p aria-hidden="true" className="truncate text-xl font-bold">
         {countWords(tally.cellsTotal, 'cell')}

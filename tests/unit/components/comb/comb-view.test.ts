@@ -54,9 +54,9 @@ describe('the box of a drawing', () => {
     expect(cellsAcross(box)).toBeCloseTo(7, 9);
   });
 
-  it('lets a narrow comb shrink with the page and a wide one scroll', () => {
+  it('lets a narrow comb shrink with the page; a wide one scrolls, and shrinks on paper', () => {
     expect(naturalLook(9)).toContain('max-w-full');
-    expect(naturalLook(26)).toBe('max-w-none');
+    expect(naturalLook(26)).toBe('max-w-none print:h-auto print:max-w-full');
   });
 });
 
