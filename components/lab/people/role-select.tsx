@@ -5,7 +5,7 @@ import { sentence } from '@/components/ui/sentence';
 import type { FieldControl } from '@/components/ui/field';
 
 /** What each role does, in a line. */
-export const ROLE_LINES: Readonly<Record<RoleName, string>> = {
+const ROLE_LINES: Readonly<Record<RoleName, string>> = {
   technician: 'reads combs at the nest, with a phone',
   reviewer: 'reads a second time, settles, locks',
   biologist: 'a reviewer who also owns the settings',

@@ -94,7 +94,7 @@ describe('one’s own sign-ins', () => {
     const [session] = await listOf();
     expect(session?.agent).toBe('Firefox on Windows');
     const rows = await database().models.Session.findAll({ where: { user_id: toBinary(account.userId) }, raw: true });
-    expect(JSON.stringify(rows)).not.toMatch(/145|127\.0\.0\.1|direct/);
+    expect(JSON.stringify(rows)).not.toMatch(/145\.0|127\.0\.0\.1|direct/);
   });
 
   it('are ended one by one; a second time there is nothing to end', async () => {
@@ -200,12 +200,12 @@ describe('routes for people without a sign-in', () => {
   ] as const;
 
   it.each(ROUTES)('%s takes nothing another site sends, nor a form (B71)', async (_name, handlers) => {
-    const foreign: Record<string, string>[] = [
-      { origin: 'https://evil.example' },
-      { 'sec-fetch-site': 'cross-site' },
-      { 'x-sync': '0' },
-    ];
-    for (const headers of foreign) {
+    for (const [name, value] of [
+      ['origin', 'https://evil.example'],
+      ['sec-fetch-site', 'cross-site'],
+      ['x-sync', '0'],
+    ] as const) {
+      const headers = { [name]: value };
       expect(await problemOf(await callApi(handlers, 'POST', { headers, body: {} }))).toEqual([403, 'csrf']);
     }
     const form = { headers: { 'content-type': 'application/x-www-form-urlencoded' }, body: 'email=a' };

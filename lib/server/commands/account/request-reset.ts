@@ -12,7 +12,7 @@ import { inBackground } from './background';
 import { letterTeam } from './set-password';
 
 /** A link to a new password works this long. */
-export const RESET_MS = 60 * 60_000;
+const RESET_MS = 60 * 60_000;
 
 /** Letters one address gets in an hour, and questions one caller may ask in a minute. */
 const PER_EMAIL = { most: 5, perMs: 60 * 60_000 };

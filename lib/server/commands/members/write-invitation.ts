@@ -7,7 +7,7 @@ import { invitationLetter } from '@/lib/server/mail/letter-words';
 import { type NotedLetter, noteLetter } from '@/lib/server/mail/send-letter';
 
 /** An invitation can be answered for this long. */
-export const INVITATION_MS = 7 * 24 * 60 * 60_000;
+const INVITATION_MS = 7 * 24 * 60 * 60_000;
 
 /** The link of an invitation as it is stored, and its letter as it can be read. */
 export interface FreshLink {
