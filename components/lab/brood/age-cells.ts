@@ -8,7 +8,7 @@ import { cellKey } from '@/lib/comb/axial';
 const DAY_MS = 86_400_000;
 
 /** Whole days since the egg of a cell was most likely laid; null when it holds no brood that can be dated. */
-export function ageInDays({ laid }: Pick<CellEstimate, 'laid'>, asOf: string): number | null {
+function ageInDays({ laid }: Pick<CellEstimate, 'laid'>, asOf: string): number | null {
   return laid ? Math.max(0, Math.floor((Date.parse(asOf) - Date.parse(laid.utc.median)) / DAY_MS)) : null;
 }
 

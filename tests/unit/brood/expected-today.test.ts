@@ -1,4 +1,5 @@
 import { describe, expect, test } from 'vitest';
+import type { BroodEstimate } from '@/lib/brood/answer';
 import { expectedToday } from '@/lib/brood/expected-today';
 import { estimateNest } from '@/lib/brood/estimate-nest';
 import type { BroodReading } from '@/lib/brood/input';
@@ -49,6 +50,22 @@ describe('what a cell is expected to hold', () => {
       before = now;
     }
     expect(before).toBe(order.length - 1);
+  });
+
+  test('stays what was seen for a while, even where the dates put the brood further on', () => {
+    const readings = [reading(['small'])];
+    const asOf = SEEN_AT + DAY / 2;
+    const made = estimateNest({ nest: 'n', zone: 'UTC', asOf, readings, taxon: 'Polistes fuscatus' });
+    const on = (days: number) => {
+      const median = new Date(SEEN_AT + days * DAY).toISOString();
+      const spread = { median, p50: [median, median], p80: [median, median], p95: [median, median] } as const;
+      return { ...spread, utc: spread };
+    };
+    // 25 days old: by Rabb 1960 a medium larva, which was read as a small one.
+    const [cell] = made.cells;
+    const dates = { laid: on(-25), capped: on(6), emerges: { ...on(20), probability: 1 } };
+    const estimate = { ...made, cells: [{ ...cell, ...dates }] } as unknown as BroodEstimate;
+    expect(expectedToday(estimate, readings).map(({ state }) => state)).toEqual(['small']);
   });
 
   test('starts from the last look, not from an unread later one', () => {

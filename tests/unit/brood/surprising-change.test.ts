@@ -18,7 +18,7 @@ describe('a change that is asked about', () => {
     ['empty', 'large', 4, 'fast'],
     ['empty', 'opened', 10, 'fast'],
     ['small', 'opened', 5, 'fast'],
-  ] as const)('%s to %s within %i days is %s', (from, to, days, surprise) => {
+  ] as const)('%s to %s within %i days is %s', (...[from, to, days, surprise]) => {
     expect(judge(from, to, days)).toBe(surprise);
   });
 });
