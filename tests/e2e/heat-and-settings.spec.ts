@@ -68,8 +68,8 @@ test('a technician keeps a logger’s file after seeing what it is, and takes it
 
   await page.getByText('Note a day by hand').click();
   await page.getByLabel('Day', { exact: true }).fill('2026-06-04');
-  await page.getByLabel('Lowest').fill('25');
-  await page.getByLabel('Highest').fill('12,5');
+  await page.getByLabel('Lowest', { exact: true }).fill('25');
+  await page.getByLabel('Highest', { exact: true }).fill('12,5');
   await page.getByRole('button', { name: 'Keep the day' }).click();
   await expect(page.getByText('The lowest is above the highest.')).toBeVisible();
 });

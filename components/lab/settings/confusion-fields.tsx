@@ -36,7 +36,7 @@ function RowFields({ name, row, isWrong, onChange }: RowFieldsProps): ReactEleme
             inputMode="decimal"
             value={row.shares[seen] ?? ''}
             onChange={({ target }) => onChange({ ...row, shares: { ...row.shares, [seen]: target.value } })}
-            className="w-18 px-1 text-right font-mono text-sm"
+            className="min-w-16 px-1 text-right font-mono text-sm"
           />
         </BodyCell>
       ))}

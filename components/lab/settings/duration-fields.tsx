@@ -46,7 +46,7 @@ function DurationRowFields({ row, isWrong, onChange, onRemove }: RowProps): Reac
             inputMode="decimal"
             value={row[field]}
             onChange={({ target }) => onChange({ ...row, [field]: target.value })}
-            className="w-18 px-1 text-right font-mono"
+            className="min-w-18 px-1 text-right font-mono"
           />
         </BodyCell>
       ))}
@@ -59,7 +59,7 @@ function DurationRowFields({ row, isWrong, onChange, onRemove }: RowProps): Reac
           />
         </span>
       </BodyCell>
-      <BodyCell>
+      <BodyCell className="relative">
         <Button tone="quiet" onClick={onRemove}>
           Remove<span className="sr-only"> {name}</span>
         </Button>
@@ -113,7 +113,7 @@ export function DurationFields({ form, onChange, wrong }: DurationFieldsProps): 
               </HeadCell>
             ))}
             <HeadCell className="min-w-80">Trust and source</HeadCell>
-            <HeadCell>
+            <HeadCell className="relative">
               <span className="sr-only">Remove</span>
             </HeadCell>
           </tr>

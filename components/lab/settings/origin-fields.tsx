@@ -19,7 +19,7 @@ export function OriginFields({ label, origin, onChange }: OriginFieldsProps): Re
         aria-label={`Trust in: ${label}`}
         value={trust}
         onChange={({ target }) => isTrust(target.value) && onChange({ trust: target.value, source })}
-        className="min-h-9 w-32 rounded border-2 border-edge bg-paper px-1"
+        className="min-h-9 w-32 shrink-0 rounded border-2 border-edge bg-paper px-1"
       >
         {TRUST_WORDS.map((word) => (
           <option key={word} value={word}>
