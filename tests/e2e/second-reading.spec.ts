@@ -221,6 +221,27 @@ test.describe('the lab', () => {
     await Promise.all(pages.map((open) => open.context().close()));
   });
 
+  test('the bench fits a phone, a tablet and a desk, with nothing for axe to find', async ({ page }) => {
+    const field = await readInField(server.origin, { code: 'FIT-7', states: combStates(7) });
+    await signInAt(page, server.origin);
+    await page.goto(`${server.origin}/review`);
+    await page.getByRole('button', { name: 'Read FIT-7 a second time' }).click();
+    await page.getByRole('button', { name: 'Begin the blind reading' }).click();
+    await expect(page.getByRole('group', { name: 'States' })).toBeVisible();
+    for (const letter of ['c', 'l', '5', 'm', 's', '?', 'o', "'", '-']) await page.keyboard.press(letter);
+    for (const size of [{ width: 390, height: 844 }, { width: 820, height: 1180 }, DESKTOP]) {
+      await page.setViewportSize(size);
+      await page.screenshot({ path: screenshotPath(`second-reading-${size.width}`), fullPage: true });
+      const wider = await page.evaluate(
+        () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+      );
+      expect(wider, 'the page is wider than the screen').toBeLessThanOrEqual(0);
+      const { violations } = await new AxeBuilder({ page }).analyze();
+      expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' | ')}`)).toEqual([]);
+    }
+    expect(page.url()).toContain(field.ids.visit);
+  });
+
   for (const count of [1, 7, 61, 500]) {
     test(`two readings of ${count} cells are compared, with nothing for axe to find`, async ({ page }) => {
       const states = combStates(count);

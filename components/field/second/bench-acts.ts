@@ -28,7 +28,7 @@ const TOGGLE_NAMES = ['nectar', 'unsure', 'reused', 'scrap'] as const satisfies 
 const LARVA_OF: Readonly<Partial<Record<CellState, readonly number[]>>> = { small: [1, 2, 3], medium: [4], large: [5] };
 
 /** Every place one can go to. */
-export function stopsOn({ marks, last, rim, skipped }: RecorderView): Axial[] {
+function stopsOn({ marks, last, rim, skipped }: RecorderView): Axial[] {
   const keys = new Set([...marks.keys(), ...last.keys(), ...rim.map(cellKey)]);
   return [...keys].filter((key) => marks.has(key) || !skipped.has(key)).map(parseCellKey);
 }

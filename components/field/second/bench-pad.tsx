@@ -26,7 +26,7 @@ function PadKey({ letter, pressed, onPress, glyph, children }: PadKeyProps): Rea
       type="button"
       aria-pressed={pressed}
       onClick={onPress}
-      className="flex min-h-12 min-w-0 touch-manipulation items-center gap-1.5 rounded border-2 border-ink bg-paper px-2 py-1 text-left leading-tight font-bold select-none hover:bg-wash aria-pressed:bg-main-wash aria-pressed:outline-2 aria-pressed:-outline-offset-1 aria-pressed:outline-main"
+      className="flex min-h-12 min-w-0 touch-manipulation items-center gap-1.5 rounded lg:pointer-fine:min-h-9 border-2 border-ink bg-paper px-2 py-1 text-left leading-tight font-bold select-none hover:bg-wash aria-pressed:bg-main-wash aria-pressed:outline-2 aria-pressed:-outline-offset-1 aria-pressed:outline-main"
     >
       {glyph}
       <span className="min-w-0 grow">{children}</span>
@@ -52,7 +52,7 @@ const MARKS: readonly { name: keyof Toggles; letter: string; words: string }[] =
 
 const INSTARS = [1, 2, 3, 4, 5] as const;
 
-const PAD_GRID = 'grid grid-cols-2 gap-2 sm:grid-cols-3 md:grid-cols-4 lg:grid-cols-2';
+const PAD_GRID = 'grid grid-cols-2 gap-2 lg:pointer-fine:gap-1.5 sm:grid-cols-3 md:grid-cols-4 lg:grid-cols-2';
 
 /** The states, with the letters of the paper sheet. */
 function StateKeys({ bench }: { bench: Bench }): ReactElement {
@@ -101,7 +101,7 @@ function MarkKeys({ bench }: { bench: Bench }): ReactElement {
             type="button"
             aria-pressed={inHand?.instar === instar}
             onClick={() => bench.run({ do: 'instar', instar })}
-            className="min-h-12 min-w-12 touch-manipulation rounded border-2 border-ink bg-paper font-mono font-bold hover:bg-wash aria-pressed:bg-ink aria-pressed:text-paper"
+            className="min-h-12 min-w-12 touch-manipulation lg:pointer-fine:min-h-9 rounded border-2 border-ink bg-paper font-mono font-bold hover:bg-wash aria-pressed:bg-ink aria-pressed:text-paper"
           >
             {instar}
           </button>

@@ -66,8 +66,8 @@ describe('taking on a second reading', () => {
     const { visit } = await handedIn();
     const { reviewer, reviewer2, biologist } = team.members;
     const answers = await Promise.all([reviewer, reviewer2, biologist].map((as) => claim(as, visit)));
-    expect(answers.map(({ status }) => status).sort()).toEqual([200, 409, 409]);
-    for (const answer of answers.filter(({ status }) => status === 409)) {
+    expect(answers.filter(({ status }) => status === 200)).toHaveLength(1);
+    for (const answer of answers.filter(({ status }) => status !== 200)) {
       expect(await problemOf(answer)).toEqual([409, 'claimed']);
     }
     expect(await queued(reviewer, visit)).toMatchObject({ waitsFor: 'reading' });

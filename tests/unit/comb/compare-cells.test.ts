@@ -40,7 +40,7 @@ describe('two readings laid over each other', () => {
     [at('unread'), at('unread'), 'unread', false],
     [at('unread'), null, 'unread', false],
     [null, at('unread'), 'unread', true],
-  ] as const)('%j and %j stand as %s, to be decided: %s', (field, lab, standing, open) => {
+  ] as const)('%j and %j stand as %s, to be decided: %s', (...[field, lab, standing, open]) => {
     expect(one(field, lab)).toMatchObject({ standing, open });
   });
 
