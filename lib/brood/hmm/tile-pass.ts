@@ -54,7 +54,7 @@ function passTile(
   const ticks = first + weights.length;
   const sequences = Array.from({ length: watch.length * TILE }, () => new Float64Array(ticks));
   const end = new Float64Array(chain.states * TILE);
-  const pair = { current: interleave(vectors, chain.states), next: new Float64Array(chain.states * TILE) };
+  const pair: TilePair = { current: interleave(vectors, chain.states), next: new Float64Array(chain.states * TILE) };
   if (!isMoving) play.blocks.forEach((is, b) => is === 0 && pair.current.fill(0, b * BLOCK * TILE, (b + 1) * BLOCK * TILE));
   for (let n = 0; n < ticks; n++) {
     if (n > 0) {
@@ -67,9 +67,10 @@ function passTile(
   }
   return vectors.map((_, c) => ({
     end: column(end, c),
-    watched: watch.map(({ at }, i) =>
-      at.map((time) => poissonMean(sequences[i * TILE + c] ?? end, weightsOf(chain.clock * time))),
-    ),
+    watched: watch.map(({ at }, i) => {
+      const sequence = sequences[i * TILE + c] ?? end;
+      return Float64Array.from(at, (time) => poissonMean(sequence, weightsOf(chain.clock * time)));
+    }),
     used: play.used,
   }));
 }

@@ -56,7 +56,7 @@ function priorsOf(history: NestHistory, timeline: Timeline, { values }: BroodSet
       const since = isGrowthSeen ? 0 : Math.max(0, firstCount - rank);
       const order = values.orderSpread.value + values.orderSpreadPerCell.value * rank;
       const spread = order + values.growthSpread.value * since;
-      const prior = known.get(rank) ?? buildingPrior(timeline, curve, { rank, spread });
+      const prior = known.get(rank) ?? buildingPrior(timeline, curve, { rank, spread, slip: values.orderSlip.value / keys.length });
       known.set(rank, prior);
       return [key, prior];
     }),

@@ -1,4 +1,4 @@
-import type { LossByStage } from '@/lib/brood/losses';
+import { type LossByStage, lossTotal } from '@/lib/brood/losses';
 import type { TimeLaw } from '@/lib/brood/time-law';
 import type { BroodModel } from './brood-model';
 import type { Future } from './cell-outlook';
@@ -80,6 +80,7 @@ function presentOf(living: readonly Weighted[], { edges, lastLook, future }: Gro
   const before = edges.findIndex((edge) => edge >= lastLook - 1e-9) + 1;
   const after = future.times.map((time) => time + lastLook);
   const loss = (stage: keyof LossByStage) => mean(living, ({ outlook }) => outlook?.losses[stage] ?? 0);
+  const losses = { egg: loss('egg'), larva: loss('larva'), capped: loss('capped') };
   return {
     laid: { times: edges, cdf: complete(laid) },
     capped: {
@@ -87,8 +88,8 @@ function presentOf(living: readonly Weighted[], { edges, lastLook, future }: Gro
       cdf: complete(Float64Array.from([...past.subarray(0, before), ...later.subarray(1)])),
     },
     out: { times: after, cdf: complete(out) },
-    chance: out.at(-1) ?? 0,
-    losses: { egg: loss('egg'), larva: loss('larva'), capped: loss('capped') },
+    chance: 1 - lossTotal(losses),
+    losses,
   };
 }
 

@@ -14,8 +14,8 @@ import type { BroodModel } from './brood-model';
 import type { Segment } from './timeline';
 
 /** Masses below this share of a whole cell are dropped, and so are Poisson tails. */
-export const LEAST = 1e-15;
-const TAIL = 1e-11;
+export const LEAST = 1e-14;
+const TAIL = 1e-10;
 
 /** A brood just laid, followed tick by tick: what every egg has in common. */
 export interface EggRows {

@@ -17,8 +17,8 @@ const LAST = 21.1;
 const FIRST_COUNT = 14;
 /** Rank and spread of the cells of a nest. */
 const CELLS = [
-  { rank: 1, spread: 1.6 },
-  { rank: 8, spread: 2.3 },
+  { rank: 1, spread: 1.6, slip: 0 },
+  { rank: 8, spread: 2.3, slip: 0 },
 ];
 const PRIOR_DAYS = 45;
 const SD = Math.sqrt(Math.log1p(0.2 ** 2));
