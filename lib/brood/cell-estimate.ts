@@ -18,7 +18,13 @@ export function datableBrood({ mixed, looks }: DatedGroup): PresentBrood | null 
 /** The members of an estimate that equal cells share. */
 type SharedEstimate = Omit<CellEstimate, 'q' | 'r' | 'state'>;
 
-const NOTHING_SEEN: SharedEstimate = { generation: 0, laid: null, capped: null, emerges: null, lost: { probability: 0 } };
+const NOTHING_SEEN: SharedEstimate = {
+  generation: 0,
+  laid: null,
+  capped: null,
+  emerges: null,
+  lost: { probability: 0 },
+};
 
 /** The estimate of a group of equal cells. */
 export function groupEstimate(group: DatedGroup, frame: DateFrame): SharedEstimate {

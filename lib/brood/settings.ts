@@ -109,7 +109,10 @@ export const DEFAULT_SETTINGS: BroodSettings = {
     orderSpread: assumed(1.5, ORDER_SOURCE),
     orderSpreadPerCell: assumed(0.1, ORDER_SOURCE),
     growthSpread: assumed(0.15, 'founding nests are read to grow by 0.39 to 1.2 cells a day, about 30 % either way'),
-    orderSlip: assumed(0.02, 'combs are started anew, partly lost or recorded in part; place alone must not rule a date out'),
+    orderSlip: assumed(
+      0.02,
+      'combs are started anew, partly lost or recorded in part; place alone must not rule a date out',
+    ),
     foundingLead: assumed(1, 'an egg is laid as soon as a cell is begun (P. metricus); the stalk takes about a day'),
     priorSpan: assumed(120, 'longest time an egg is searched for before the first visit'),
     forecastSpan: assumed(60, GATE_SOURCE),

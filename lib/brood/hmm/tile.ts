@@ -150,7 +150,11 @@ function spread(current: Float64Array, next: Float64Array, { from, to, target, g
 }
 
 /** `sum += weight · tile`, in the runs of a plan. */
-export function addTile(sum: Float64Array, tile: Float64Array, { weight, plan }: { weight: number; plan: TilePlan }): void {
+export function addTile(
+  sum: Float64Array,
+  tile: Float64Array,
+  { weight, plan }: { weight: number; plan: TilePlan },
+): void {
   for (const [first, end] of plan.runs) {
     for (let k = first * TILE; k < end * TILE; k++) sum[k] = (sum[k] ?? 0) + weight * (tile[k] ?? 0);
   }

@@ -73,11 +73,7 @@ export interface CellPlace {
 }
 
 /** Prior law of the time a cell was built: logistic in how far the comb had grown past the cell's rank. */
-export function buildingPrior(
-  { edges }: Timeline,
-  curve: CombCurve,
-  { rank, spread, slip }: CellPlace,
-): BuildingPrior {
+export function buildingPrior({ edges }: Timeline, curve: CombCurve, { rank, spread, slip }: CellPlace): BuildingPrior {
   const hazard = edges.map((day) => softplus((curve(day) - rank + 0.5) / spread));
   const start = hazard[0] ?? 0;
   let most = start;

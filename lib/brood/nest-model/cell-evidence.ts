@@ -46,7 +46,7 @@ function doubled(confusion: Confusion): Confusion {
 
 /** P(instar recorded | true instar): .90 right, .05 for each neighbour, renormalised at the ends. */
 function instarChance(recorded: number, truth: number): number {
-  const weight = (i: number) => (i < 1 || i > 5 ? 0 : [0.9, 0.05][Math.abs(i - truth)] ?? 0);
+  const weight = (i: number) => (i < 1 || i > 5 ? 0 : ([0.9, 0.05][Math.abs(i - truth)] ?? 0));
   const total = [truth - 1, truth, truth + 1].reduce((sum, i) => sum + weight(i), 0);
   return weight(recorded) / total;
 }

@@ -47,7 +47,10 @@ function mean(items: readonly Weighted[], value: (answer: GroupAnswer) => number
   return items.reduce((sum, { weight, answer }) => sum + weight * value(answer), 0);
 }
 
-function meanVector(items: readonly Weighted[], value: (answer: GroupAnswer) => Float64Array | undefined): Float64Array {
+function meanVector(
+  items: readonly Weighted[],
+  value: (answer: GroupAnswer) => Float64Array | undefined,
+): Float64Array {
   const sum = new Float64Array(items[0] ? (value(items[0].answer)?.length ?? 0) : 0);
   for (const { weight, answer } of items) {
     value(answer)?.forEach((x, i) => {

@@ -7,6 +7,8 @@ import {
   type Setting,
   type SettingName,
 } from '@/lib/brood/settings';
+import { readJsonFile, readObject } from '@/lib/brood/file-fields';
+import { readLearnt } from '@/lib/brood/read-settings';
 import { isTrust } from '@/lib/brood/trust';
 import type { TeamScope } from './team-scope';
 
@@ -36,6 +38,12 @@ function storedValues(json: string): BroodSettings['values'] {
     if (setting && isSettingName(name)) values[name] = setting;
   }
   return values;
+}
+
+/** What the version has learnt from the team's own data; a member that cannot be read is left out. */
+function storedLearnt(json: string): Pick<BroodSettings, 'confusion' | 'durationFactors'> {
+  const learnt = readJsonFile(json, (value) => readLearnt(readObject(value, 'settings'), 'settings'));
+  return learnt.ok ? learnt.value : {};
 }
 
 function isSettingName(name: string): name is SettingName {
@@ -75,6 +83,7 @@ export async function teamBroodSettings(scope: TeamScope): Promise<TeamBroodSett
       version: String(row.version),
       values: storedValues(row.settings),
       durations: durations.length > 0 ? durations : DEFAULT_SETTINGS.durations,
+      ...storedLearnt(row.settings),
     },
   };
 }

@@ -108,15 +108,16 @@ describe('a nest whose adults have come out', () => {
     expect(nest.founded && nest.founded.median < '2026-05-05').toBe(true);
   });
 
-  it('M C31: capped, empty, egg is a second brood; its age restarts and the founding stays', () => {
-    const first = reading('2026-06-01T12:00:00Z', [cell('capped')]);
+  it('M C31: capped, empty, egg is a later brood; its age restarts and the founding stays', () => {
+    const first = reading('2026-06-01T12:00:00Z', cellsOf({ capped: 4, large: 4, egg: 8 }));
     const before = estimate([first]);
     const after = estimate([
       first,
       reading('2026-06-20T12:00:00Z', [cell('empty')]),
       reading('2026-06-26T12:00:00Z', [cell('egg')]),
     ]);
-    expect(after.cells[0]).toMatchObject({ state: 'egg', generation: 2 });
+    expect(after.cells[0]?.state).toBe('egg');
+    expect(after.cells[0]?.generation).toBeGreaterThanOrEqual(2);
     expect((after.cells[0]?.laid?.p95[0] ?? '') > '2026-06-01').toBe(true);
     const shift = Date.parse(after.nest.founded?.utc.median ?? '') - Date.parse(before.nest.founded?.utc.median ?? '');
     expect(Math.abs(shift)).toBeLessThan(3 * 86_400_000);
@@ -164,7 +165,7 @@ describe('several readings', () => {
 
 describe('an instar given by a reviewer', () => {
   const width = (marks: BroodMark[]) => {
-    const { p95 } = estimate([reading(AT, marks)]).cells[0]?.laid ?? { p95: ['', ''] };
+    const { p95 } = estimate([reading(AT, marks)]).cells[0]?.laid?.utc ?? { p95: ['', ''] };
     return Date.parse(p95[1]) - Date.parse(p95[0]);
   };
 

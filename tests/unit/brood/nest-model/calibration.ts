@@ -87,7 +87,11 @@ export function calibrateOnce(random: Random, { truth, believed }: Calibration):
   });
   const { nodes } = nestPosterior(model, { mean: 0, sd: SD }, { timeline, groups, futures });
   const future = futures.at(-1);
-  const times = { edges: timeline.edges, lastLook: LAST, future: future ?? futureOf({ from: LAST, clockEnd: 0, horizon: 9 }, calendar) };
+  const times = {
+    edges: timeline.edges,
+    lastLook: LAST,
+    future: future ?? futureOf({ from: LAST, clockEnd: 0, horizon: 9 }, calendar),
+  };
   const { present } = mixedGroup(model, { nodes, group: chosen }, times);
   return { laid: placeIn(present?.laid, brood.laid), capped: placeIn(present?.capped, brood.capped) };
 }
