@@ -67,7 +67,9 @@ function factorTexts({ row }: DurationChoice, { durationFactors = [] }: BroodSet
   const learnt = durationFactors.find(({ taxon }) => taxon.toLowerCase() === row.taxon.toLowerCase());
   if (!learnt) return [];
   const rate = days(Math.exp(learnt.logMean));
-  return [`Development of ${learnt.taxon} runs at ${rate} of these durations: ${learnt.source}. Trust: ${learnt.trust}.`];
+  return [
+    `Development of ${learnt.taxon} runs at ${rate} of these durations: ${learnt.source}. Trust: ${learnt.trust}.`,
+  ];
 }
 
 /** What the dates rest on, in plain words, most important first. */

@@ -9,7 +9,10 @@ export function datedGroups({ groups }: DatedNest): { group: DatedGroup; index: 
 }
 
 /** When the adult of a group comes out, at one value of the nest factor; ends below 1 by what is lost. */
-export function emergenceAt({ groups }: PosteriorNode, { group, index }: { group: DatedGroup; index: number }): TimeLaw {
+export function emergenceAt(
+  { groups }: PosteriorNode,
+  { group, index }: { group: DatedGroup; index: number },
+): TimeLaw {
   const times = group.future.times.map((time) => time + group.lastLook);
   return { times, cdf: groups[index]?.outlook?.out ?? new Float64Array(times.length) };
 }

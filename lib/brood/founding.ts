@@ -2,16 +2,22 @@ import type { DatedNest } from './nest-model/dated-nest';
 import { cumulated } from './nest-model/mixed-group';
 import { type TimeLaw, earliest } from './time-law';
 
-/** Less likely than this, no egg was ever laid in the nest. */
-const LIKELY = 0.5;
+const EMPTY: ReadonlySet<string> = new Set(['absent', 'empty']);
+
+/** Was there ever anything in a cell that begins with an egg? */
+function isBroodSeen({ groups }: DatedNest): boolean {
+  return groups.some(({ looks }) => looks.some((atVisit) => atVisit.some(({ state }) => !EMPTY.has(state))));
+}
 
 /**
  * When the first egg of the nest was laid: the earliest over all cells, which are independent of each other given the
  * nest factor; then averaged over it. Cells that were used again count with their first egg.
  *
- * @returns null when most likely no egg was laid yet.
+ * @returns null when no brood was ever seen.
  */
-export function firstLaying({ timeline, posterior, groups }: DatedNest): TimeLaw | null {
+export function firstLaying(nest: DatedNest): TimeLaw | null {
+  const { timeline, posterior, groups } = nest;
+  if (!isBroodSeen(nest)) return null;
   const times = timeline.edges;
   const cdf = new Float64Array(times.length);
   for (const { weight, groups: answers } of posterior.nodes) {
@@ -24,5 +30,5 @@ export function firstLaying({ timeline, posterior, groups }: DatedNest): TimeLaw
     });
   }
   const total = cdf.at(-1) ?? 0;
-  return total >= LIKELY ? { times, cdf: cdf.map((p) => p / total) } : null;
+  return total > 0 ? { times, cdf: cdf.map((p) => p / total) } : null;
 }

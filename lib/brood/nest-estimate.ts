@@ -29,9 +29,7 @@ const LIKELY = 0.5;
 
 /** Have adults come out? An opened cell or one marked as reused says so, and so may the record of a cell. */
 function isPastEmergence({ views, dated }: NestInput): boolean {
-  const isSeen = views.some(({ looked }) =>
-    looked.some(({ mark }) => mark.state === 'opened' || mark.reused === true),
-  );
+  const isSeen = views.some(({ looked }) => looked.some(({ mark }) => mark.state === 'opened' || mark.reused === true));
   return isSeen || (dated?.nest.groups.some(({ mixed }) => mixed.mostEmerged >= LIKELY) ?? false);
 }
 
@@ -60,7 +58,12 @@ function forecastOf({ dated, asOf, zone, settings }: NestInput): NestEstimate['e
     weight: node.weight,
     broods: broods.map((item) => ({ law: emergenceAt(node, item), cells: item.group.cells.length })),
   }));
-  return emergenceForecast(nodes, { origin: dated?.origin ?? asOf, asOf, zone, days: settings.values.forecastSpan.value });
+  return emergenceForecast(nodes, {
+    origin: dated?.origin ?? asOf,
+    asOf,
+    zone,
+    days: settings.values.forecastSpan.value,
+  });
 }
 
 /** The nest's own numbers: the earliest over its cells, averaged over the nest factor. */

@@ -66,7 +66,8 @@ function readConfusion(value: unknown, field: string): HeldConfusion {
   const rows: Record<string, Record<string, number>> = {};
   for (const [name, row] of Object.entries(readObject(given.rows, `${field}.rows`))) {
     const at = `${field}.rows.${name}`;
-    if (!Object.hasOwn(CELL_CLASSES, name)) throw new FieldError(at, `is not among ${Object.keys(CELL_CLASSES).join(', ')}`);
+    if (!Object.hasOwn(CELL_CLASSES, name))
+      throw new FieldError(at, `is not among ${Object.keys(CELL_CLASSES).join(', ')}`);
     const entries = Object.entries(readObject(row, at)).map(([seen, p]) => {
       if (!RECORDED_CLASSES.some((known) => known === seen))
         throw new FieldError(`${at}.${seen}`, `is not among ${RECORDED_CLASSES.join(', ')}`);
@@ -81,7 +82,11 @@ function readConfusion(value: unknown, field: string): HeldConfusion {
     if (error instanceof ConfusionError) throw new FieldError(`${field}.rows.${error.row}`, error.message);
     throw error;
   }
-  return { rows: whole, trust: readTrust(given.trust, `${field}.trust`), source: readSource(given.source, `${field}.source`) };
+  return {
+    rows: whole,
+    trust: readTrust(given.trust, `${field}.trust`),
+    source: readSource(given.source, `${field}.source`),
+  };
 }
 
 function readFactor(value: unknown, field: string): DurationFactor {

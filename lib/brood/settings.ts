@@ -38,6 +38,7 @@ export const SETTING_RULES = {
   orderSpread: { label: 'how strictly cells are built outwards, at the pedicel', unit: 'cells', min: 0.2, max: 500 },
   orderSpreadPerCell: { label: 'and more for every cell further out', unit: 'cells', min: 0, max: 10 },
   growthSpread: { label: 'how uncertain that growth is, for every cell built since', unit: 'cells', min: 0, max: 2 },
+  orderSlip: { label: 'cells of a comb that follow no order', unit: 'cells', min: 0, max: 1 },
   foundingLead: { label: 'from founding to the first egg', unit: 'days', min: 0, max: 30 },
   priorSpan: { label: 'how long before a reading an egg may have been laid', unit: 'days', min: 30, max: 365 },
   forecastSpan: { label: 'how far emergence is forecast', unit: 'days', min: 1, max: 60 },
@@ -108,6 +109,10 @@ export const DEFAULT_SETTINGS: BroodSettings = {
     orderSpread: assumed(1.5, ORDER_SOURCE),
     orderSpreadPerCell: assumed(0.1, ORDER_SOURCE),
     growthSpread: assumed(0.15, 'founding nests are read to grow by 0.39 to 1.2 cells a day, about 30 % either way'),
+    orderSlip: assumed(
+      0.02,
+      'combs are started anew, partly lost or recorded in part; place alone must not rule a date out',
+    ),
     foundingLead: assumed(1, 'an egg is laid as soon as a cell is begun (P. metricus); the stalk takes about a day'),
     priorSpan: assumed(120, 'longest time an egg is searched for before the first visit'),
     forecastSpan: assumed(60, GATE_SOURCE),

@@ -1,6 +1,16 @@
 import { poissonMean, poissonWeights } from '@/lib/brood/poisson';
 import type { PassRequest, PassResult } from './power-pass';
-import { TILE, type TilePair, type TilePlan, addTile, column, interleave, planTile, tickMassTile, tickValueTile } from './tile';
+import {
+  TILE,
+  type TilePair,
+  type TilePlan,
+  addTile,
+  column,
+  interleave,
+  planTile,
+  tickMassTile,
+  tickValueTile,
+} from './tile';
 import { BLOCK, type Blocks, type Uniformised, blocksOf, heldBlocks, reachFrom } from './uniformised';
 
 type TileTick = (chain: Uniformised, pair: TilePair, plan: TilePlan) => void;
@@ -54,8 +64,9 @@ function passTile(
   const ticks = first + weights.length;
   const sequences = Array.from({ length: watch.length * TILE }, () => new Float64Array(ticks));
   const end = new Float64Array(chain.states * TILE);
-  const pair = { current: interleave(vectors, chain.states), next: new Float64Array(chain.states * TILE) };
-  if (!isMoving) play.blocks.forEach((is, b) => is === 0 && pair.current.fill(0, b * BLOCK * TILE, (b + 1) * BLOCK * TILE));
+  const pair: TilePair = { current: interleave(vectors, chain.states), next: new Float64Array(chain.states * TILE) };
+  if (!isMoving)
+    play.blocks.forEach((is, b) => is === 0 && pair.current.fill(0, b * BLOCK * TILE, (b + 1) * BLOCK * TILE));
   for (let n = 0; n < ticks; n++) {
     if (n > 0) {
       tick(chain, pair, play.plan);
@@ -67,9 +78,10 @@ function passTile(
   }
   return vectors.map((_, c) => ({
     end: column(end, c),
-    watched: watch.map(({ at }, i) =>
-      at.map((time) => poissonMean(sequences[i * TILE + c] ?? end, weightsOf(chain.clock * time))),
-    ),
+    watched: watch.map(({ at }, i) => {
+      const sequence = sequences[i * TILE + c] ?? end;
+      return Float64Array.from(at, (time) => poissonMean(sequence, weightsOf(chain.clock * time)));
+    }),
     used: play.used,
   }));
 }
@@ -93,8 +105,13 @@ function standing(vectors: readonly Float64Array[], { watch = [] }: PassRequest,
   }));
 }
 
-function inTiles(vectors: readonly Float64Array[], pass: (tile: readonly Float64Array[]) => PassResult[]): PassResult[] {
-  const tiles = Array.from({ length: Math.ceil(vectors.length / TILE) }, (_, i) => vectors.slice(i * TILE, (i + 1) * TILE));
+function inTiles(
+  vectors: readonly Float64Array[],
+  pass: (tile: readonly Float64Array[]) => PassResult[],
+): PassResult[] {
+  const tiles = Array.from({ length: Math.ceil(vectors.length / TILE) }, (_, i) =>
+    vectors.slice(i * TILE, (i + 1) * TILE),
+  );
   return tiles.flatMap(pass);
 }
 
@@ -112,7 +129,11 @@ export function massPasses(chain: Uniformised, masses: readonly Float64Array[], 
 export function valuePasses(
   chain: Uniformised,
   values: readonly Float64Array[],
-  { blocks = blocksOf(chain, 1), isEndNeeded = true, ...request }: PassRequest & { blocks?: Blocks; isEndNeeded?: boolean },
+  {
+    blocks = blocksOf(chain, 1),
+    isEndNeeded = true,
+    ...request
+  }: PassRequest & { blocks?: Blocks; isEndNeeded?: boolean },
 ): PassResult[] {
   if (request.days === 0 || chain.clock === 0) return standing(values, request, blocks);
   const play = { blocks, used: blocks, plan: planTile(chain, blocks) };

@@ -67,7 +67,10 @@ export function tickMassTile({ stay, fromPrevious }: Uniformised, { current, nex
     for (let s = first; s < end; s++, k += 4) {
       const here = stay[s] ?? 0;
       const from = fromPrevious[s] ?? 0;
-      const [w, x, y, z] = [current[k] ?? 0, current[k + 1] ?? 0, current[k + 2] ?? 0, current[k + 3] ?? 0];
+      const w = current[k] ?? 0;
+      const x = current[k + 1] ?? 0;
+      const y = current[k + 2] ?? 0;
+      const z = current[k + 3] ?? 0;
       next[k] = w * here + a * from;
       next[k + 1] = x * here + b * from;
       next[k + 2] = y * here + c * from;
@@ -82,7 +85,10 @@ export function tickMassTile({ stay, fromPrevious }: Uniformised, { current, nex
 }
 
 function gather(current: Float64Array, next: Float64Array, { from, to, target, go }: TilePlan['fans'][number]): void {
-  let [a, b, c, d] = [0, 0, 0, 0];
+  let a = 0;
+  let b = 0;
+  let c = 0;
+  let d = 0;
   for (let k = from * TILE; k < to * TILE; k += 4) {
     a += current[k] ?? 0;
     b += current[k + 1] ?? 0;
@@ -112,7 +118,10 @@ export function tickValueTile(
     let d = isInside ? (current[k + 7] ?? 0) : 0;
     for (let s = end - 1; s >= first; s--, k -= 4) {
       const here = stay[s] ?? 0;
-      const [w, x, y, z] = [current[k] ?? 0, current[k + 1] ?? 0, current[k + 2] ?? 0, current[k + 3] ?? 0];
+      const w = current[k] ?? 0;
+      const x = current[k + 1] ?? 0;
+      const y = current[k + 2] ?? 0;
+      const z = current[k + 3] ?? 0;
       next[k] = w * here + a * share;
       next[k + 1] = x * here + b * share;
       next[k + 2] = y * here + c * share;
@@ -141,7 +150,11 @@ function spread(current: Float64Array, next: Float64Array, { from, to, target, g
 }
 
 /** `sum += weight · tile`, in the runs of a plan. */
-export function addTile(sum: Float64Array, tile: Float64Array, { weight, plan }: { weight: number; plan: TilePlan }): void {
+export function addTile(
+  sum: Float64Array,
+  tile: Float64Array,
+  { weight, plan }: { weight: number; plan: TilePlan },
+): void {
   for (const [first, end] of plan.runs) {
     for (let k = first * TILE; k < end * TILE; k++) sum[k] = (sum[k] ?? 0) + weight * (tile[k] ?? 0);
   }

@@ -85,11 +85,7 @@ export function blocksOf({ states }: Pick<Uniformised, 'states'>, value: 0 | 1):
 }
 
 /** One step of a vector: from `current` to `next`, which it overwrites in these blocks; elsewhere both are 0. */
-export type Tick = (
-  chain: Uniformised,
-  vectors: { current: Float64Array; next: Float64Array },
-  blocks: Blocks,
-) => void;
+export type Tick = (chain: Uniformised, vectors: { current: Float64Array; next: Float64Array }, blocks: Blocks) => void;
 
 /** One tick of a row of masses: `next = mass (I + Q / clock)`. */
 export const tickMass: Tick = ({ states, stay, fromPrevious, fans }, { current, next }, blocks) => {
@@ -185,7 +181,7 @@ export function reachFrom({ fans }: Uniformised, held: Blocks): Blocks {
   held.forEach((isHeld, b) => {
     if (isHeld === 1 && b + 1 < reach.length) reach[b + 1] = 1;
   });
-  for (let grown = true; grown; ) {
+  for (let grown = true; grown;) {
     grown = false;
     for (const { from, to, target } of fans) {
       const into = target >> BLOCK_BITS;

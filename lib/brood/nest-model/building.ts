@@ -62,21 +62,24 @@ function softplus(x: number): number {
   return x > 30 ? x : Math.log1p(Math.exp(x));
 }
 
-/**
- * Prior law of the time a cell was built: logistic in how far the comb had grown past the cell's rank.
- *
- * @param rank by distance from the pedicel cell, equal distances sharing the middle rank.
- * @param spread of the logistic law, in cells.
- */
-export function buildingPrior(
-  { edges }: Timeline,
-  curve: CombCurve,
-  { rank, spread }: { rank: number; spread: number },
-): BuildingPrior {
+/** What is known of a cell from its place. */
+export interface CellPlace {
+  /** By distance from the pedicel cell, equal distances sharing the middle rank. */
+  rank: number;
+  /** Scale of the logistic law, in cells. */
+  spread: number;
+  /** Share of cells that follow no order: built on any day alike. */
+  slip: number;
+}
+
+/** Prior law of the time a cell was built: logistic in how far the comb had grown past the cell's rank. */
+export function buildingPrior({ edges }: Timeline, curve: CombCurve, { rank, spread, slip }: CellPlace): BuildingPrior {
   const hazard = edges.map((day) => softplus((curve(day) - rank + 0.5) / spread));
   const start = hazard[0] ?? 0;
   let most = start;
-  const absent = hazard.map((value) => Math.exp(start - (most = Math.max(most, value))));
+  const ordered = hazard.map((value) => Math.exp(start - (most = Math.max(most, value))));
+  const [from, to] = [edges[0] ?? 0, edges.at(-1) ?? 0];
+  const absent = ordered.map((p, i) => (1 - slip) * p + slip * (1 - ((edges[i] ?? 0) - from) / (to - from)));
   const mass = Float64Array.from({ length: edges.length - 1 }, (_, i) => (absent[i] ?? 0) - (absent[i + 1] ?? 0));
   return { key: `${rank}`, mass, absent };
 }

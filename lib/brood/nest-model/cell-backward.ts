@@ -73,7 +73,15 @@ function pass(segments: readonly Segment[], records: readonly BackwardRecord[], 
       watch: kind.gates.map((gate) => ({ gate, at })),
       weightsOf: kind.kernel.weightsOf,
       isEndNeeded: i > 0,
-      ...(kind.isWhole ? { blocks: neededBlocks(open.map(({ record }) => record), i, chain) } : {}),
+      ...(kind.isWhole
+        ? {
+            blocks: neededBlocks(
+              open.map(({ record }) => record),
+              i,
+              chain,
+            ),
+          }
+        : {}),
     });
     open.forEach((walk, k) => {
       walk.value = results[k]?.end ?? walk.value;

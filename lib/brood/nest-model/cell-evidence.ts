@@ -46,7 +46,7 @@ function doubled(confusion: Confusion): Confusion {
 
 /** P(instar recorded | true instar): .90 right, .05 for each neighbour, renormalised at the ends. */
 function instarChance(recorded: number, truth: number): number {
-  const weight = (i: number) => (i < 1 || i > 5 ? 0 : [0.9, 0.05][Math.abs(i - truth)] ?? 0);
+  const weight = (i: number) => (i < 1 || i > 5 ? 0 : ([0.9, 0.05][Math.abs(i - truth)] ?? 0));
   const total = [truth - 1, truth, truth + 1].reduce((sum, i) => sum + weight(i), 0);
   return weight(recorded) / total;
 }
@@ -102,16 +102,24 @@ function lookLikelihood(
   });
 }
 
+/** Looks worked out already: a comb has few kinds of them. */
+const knownLooks = new WeakMap<BroodModel, Map<string, Float64Array>>();
+
 /**
  * P(what was recorded | state) for every visit, null where nobody looked in.
  *
  * @param floor share of a record that may be anything: a slip of the hand, a neighbouring cell.
  */
 export function likelihoods(model: BroodModel, looks: CellLooks, floor: number): (Float64Array | null)[] {
+  const known = knownLooks.get(model) ?? new Map<string, Float64Array>();
+  knownLooks.set(model, known);
   const unsure = doubled(model.confusion);
   return looks.map((atVisit, visit) =>
     atVisit.reduce<Float64Array | null>((product, look) => {
-      const chance = lookLikelihood(model, look, { before: lastAlive(looks, visit), floor, unsure });
+      const before = lastAlive(looks, visit);
+      const key = `${floor} ${before} ${looksText([[look]])}`;
+      const chance = known.get(key) ?? lookLikelihood(model, look, { before, floor, unsure });
+      known.set(key, chance);
       return product ? product.map((p, s) => p * (chance[s] ?? 0)) : chance;
     }, null),
   );

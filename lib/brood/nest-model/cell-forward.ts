@@ -119,7 +119,11 @@ interface Walk extends Omit<ForwardPass, 'logLik' | 'last'> {
 }
 
 /** Adds the cells built within the segment to those that were there. */
-function addNewcomers(moved: Moved, fresh: Newcomers, { unbuilt, isFlowNeeded }: { unbuilt: number; isFlowNeeded: boolean }) {
+function addNewcomers(
+  moved: Moved,
+  fresh: Newcomers,
+  { unbuilt, isFlowNeeded }: { unbuilt: number; isFlowNeeded: boolean },
+) {
   plus(moved.end, fresh.end, unbuilt);
   joinBlocks(moved.used, fresh.used);
   if (!isFlowNeeded) return;
@@ -147,7 +151,11 @@ function lookAt(walk: Walk, look: number, absent: number): void {
 export function forwardCells(
   kernel: NestKernel,
   timeline: Timeline,
-  { cells, newcomers, isFlowNeeded }: { cells: readonly ForwardCell[]; newcomers: SharedNewcomers; isFlowNeeded: boolean },
+  {
+    cells,
+    newcomers,
+    isFlowNeeded,
+  }: { cells: readonly ForwardCell[]; newcomers: SharedNewcomers; isFlowNeeded: boolean },
 ): ForwardPass[] {
   const walks = cells.map((cell): Walk => {
     const standing = { mass: new Float64Array(kernel.model.states.count), unbuilt: 1, log: 0 };

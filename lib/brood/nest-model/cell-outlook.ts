@@ -42,7 +42,11 @@ export function futureOf(
 ): Future {
   const finite =
     clockEnd > from
-      ? evenPieces({ from, to: clockEnd }, rateBetween).map((piece) => ({ ...piece, from: piece.from - from, to: piece.to - from }))
+      ? evenPieces({ from, to: clockEnd }, rateBetween).map((piece) => ({
+          ...piece,
+          from: piece.from - from,
+          to: piece.to - from,
+        }))
       : [];
   const start = Math.max(0, clockEnd - from);
   const fine = Array.from({ length: Math.ceil(FINE_DAYS / FINE_STEP) }, (_, k) => start + (k + 1) * FINE_STEP);
@@ -62,11 +66,17 @@ export function futureOf(
   };
   const starts = pieces.reduce<number[]>((all, { days }) => [...all, (all.at(-1) ?? 0) + days], [0]);
   const all = [...pieces, endless];
-  return { times: Float64Array.from([0, ...all.flatMap(({ times }, i) => [...times].map((t) => t + (starts[i] ?? 0)))]), pieces: all };
+  return {
+    times: Float64Array.from([0, ...all.flatMap(({ times }, i) => [...times].map((t) => t + (starts[i] ?? 0)))]),
+    pieces: all,
+  };
 }
 
 /** The present brood: generations added up, living brood only. */
-export function presentBrood({ states, eggState, broodSize, broodLiving }: BroodModel, mass: Float64Array): Float64Array {
+export function presentBrood(
+  { states, eggState, broodSize, broodLiving }: BroodModel,
+  mass: Float64Array,
+): Float64Array {
   return broodLiving.map((isLiving, s) => {
     let sum = 0;
     for (let g = 0; g < states.generations; g++) sum += mass[eggState + g * broodSize + s] ?? 0;

@@ -56,7 +56,8 @@ function priorsOf(history: NestHistory, timeline: Timeline, { values }: BroodSet
       const since = isGrowthSeen ? 0 : Math.max(0, firstCount - rank);
       const order = values.orderSpread.value + values.orderSpreadPerCell.value * rank;
       const spread = order + values.growthSpread.value * since;
-      const prior = known.get(rank) ?? buildingPrior(timeline, curve, { rank, spread });
+      const prior =
+        known.get(rank) ?? buildingPrior(timeline, curve, { rank, spread, slip: values.orderSlip.value / keys.length });
       known.set(rank, prior);
       return [key, prior];
     }),
@@ -111,7 +112,8 @@ export function datedNest(
   const posterior = nestPosterior(model, factor, { timeline, groups, futures });
   const dated = cells.map(({ cells: keys, looks, prior }, group): DatedGroup => {
     const lastLook = history.days[looks.length - 1] ?? 0;
-    const future = futures[looks.length - 1] ?? futureOf({ from: lastLook, clockEnd: clock.end, horizon }, clock.between);
+    const future =
+      futures[looks.length - 1] ?? futureOf({ from: lastLook, clockEnd: clock.end, horizon }, clock.between);
     const mixed = mixedGroup(model, { nodes: posterior.nodes, group }, { edges: timeline.edges, lastLook, future });
     const isSlip = isContradictory(posterior.best, timeline, { looks, prior });
     return { cells: keys, looks, prior, lastLook, future, mixed, isContradictory: isSlip };

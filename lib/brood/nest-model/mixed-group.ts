@@ -1,4 +1,4 @@
-import type { LossByStage } from '@/lib/brood/losses';
+import { type LossByStage, lossTotal } from '@/lib/brood/losses';
 import type { TimeLaw } from '@/lib/brood/time-law';
 import type { BroodModel } from './brood-model';
 import type { Future } from './cell-outlook';
@@ -47,7 +47,10 @@ function mean(items: readonly Weighted[], value: (answer: GroupAnswer) => number
   return items.reduce((sum, { weight, answer }) => sum + weight * value(answer), 0);
 }
 
-function meanVector(items: readonly Weighted[], value: (answer: GroupAnswer) => Float64Array | undefined): Float64Array {
+function meanVector(
+  items: readonly Weighted[],
+  value: (answer: GroupAnswer) => Float64Array | undefined,
+): Float64Array {
   const sum = new Float64Array(items[0] ? (value(items[0].answer)?.length ?? 0) : 0);
   for (const { weight, answer } of items) {
     value(answer)?.forEach((x, i) => {
@@ -80,6 +83,7 @@ function presentOf(living: readonly Weighted[], { edges, lastLook, future }: Gro
   const before = edges.findIndex((edge) => edge >= lastLook - 1e-9) + 1;
   const after = future.times.map((time) => time + lastLook);
   const loss = (stage: keyof LossByStage) => mean(living, ({ outlook }) => outlook?.losses[stage] ?? 0);
+  const losses = { egg: loss('egg'), larva: loss('larva'), capped: loss('capped') };
   return {
     laid: { times: edges, cdf: complete(laid) },
     capped: {
@@ -87,8 +91,8 @@ function presentOf(living: readonly Weighted[], { edges, lastLook, future }: Gro
       cdf: complete(Float64Array.from([...past.subarray(0, before), ...later.subarray(1)])),
     },
     out: { times: after, cdf: complete(out) },
-    chance: out.at(-1) ?? 0,
-    losses: { egg: loss('egg'), larva: loss('larva'), capped: loss('capped') },
+    chance: 1 - lossTotal(losses),
+    losses,
   };
 }
 

@@ -14,8 +14,8 @@ import type { BroodModel } from './brood-model';
 import type { Segment } from './timeline';
 
 /** Masses below this share of a whole cell are dropped, and so are Poisson tails. */
-export const LEAST = 1e-15;
-const TAIL = 1e-11;
+export const LEAST = 1e-14;
+const TAIL = 1e-10;
 
 /** A brood just laid, followed tick by tick: what every egg has in common. */
 export interface EggRows {
@@ -51,7 +51,11 @@ function kept<V>(make: (key: number) => V): (key: number) => V {
 }
 
 /** Adds rows until there are `ticks`. */
-function extend({ chain, rows, blocks, relaid, capping }: EggRows, gates: { laying: Gate; capping: Gate }, ticks: number) {
+function extend(
+  { chain, rows, blocks, relaid, capping }: EggRows,
+  gates: { laying: Gate; capping: Gate },
+  ticks: number,
+) {
   while (rows.length < ticks) {
     const last = rows.at(-1) ?? new Float64Array(chain.states);
     const next = new Float64Array(chain.states);
@@ -74,7 +78,9 @@ function extend({ chain, rows, blocks, relaid, capping }: EggRows, gates: { layi
 export function nestKernel(model: BroodModel, rho: number): NestKernel {
   const full = kept((rate) => uniformise(model.moves, [rho * rate, 1, 0]));
   const brood = kept((rate) => uniformise(model.broodMoves, [rho * rate, 1, 0]));
-  const cappingGate = kept((rate) => model.cappingStates.map(({ state, perDay }) => [state, perDay * rho * rate] as const));
+  const cappingGate = kept((rate) =>
+    model.cappingStates.map(({ state, perDay }) => [state, perDay * rho * rate] as const),
+  );
   const weightsOf = kept((mean) => poissonWeights(mean, TAIL));
   const rowsAt = kept((rate): EggRows => {
     const chain = full(rate);
@@ -98,9 +104,7 @@ export function nestKernel(model: BroodModel, rho: number): NestKernel {
     const { relaid, capping } = eggRows(rate, first + weights.length);
     const read = (sequence: readonly number[]) => {
       const values = Float64Array.from(sequence);
-      return Float64Array.from({ length: steps }, (_, k) =>
-        poissonMean(values, weightsOf((clock * days * k) / steps)),
-      );
+      return Float64Array.from({ length: steps }, (_, k) => poissonMean(values, weightsOf((clock * days * k) / steps)));
     };
     const made = { relaid: read(relaid), capping: read(capping) };
     flows.set(key, made);

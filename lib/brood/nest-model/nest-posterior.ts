@@ -71,7 +71,8 @@ function findPeak(f: (z: number) => number): Peak {
     const three = aroundBest(points);
     const found = parabola(three);
     const [low, , high] = three;
-    if (found) top = { at: Math.min(high.z + 1, Math.max(low.z - 1, found.at)), sd: Math.min(1, Math.max(0.01, found.sd)) };
+    if (found)
+      top = { at: Math.min(high.z + 1, Math.max(low.z - 1, found.at)), sd: Math.min(1, Math.max(0.01, found.sd)) };
     else top = { at: high.f > low.f ? high.z + 1 : low.z - 1, sd: 1 };
     const near = points.filter(({ z }) => Math.abs(z - top.at) < CLOSE_ENOUGH * top.sd);
     const isNarrow = high.z - low.z < 4.5 * top.sd;

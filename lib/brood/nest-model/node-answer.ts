@@ -106,7 +106,10 @@ export function nodeAnswer(kernel: NestKernel, frame: NestFrame): { logLik: numb
       outlook,
     };
   });
-  return { logLik: answers.reduce((sum, { forward }, i) => sum + forward.logLik * (groups[i]?.cells ?? 0), 0), groups: answers };
+  return {
+    logLik: answers.reduce((sum, { forward }, i) => sum + forward.logLik * (groups[i]?.cells ?? 0), 0),
+    groups: answers,
+  };
 }
 
 /** P(no egg yet) at the last look. */

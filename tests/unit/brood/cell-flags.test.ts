@@ -99,7 +99,7 @@ describe('surprising histories are explained, never refused', () => {
         [0, 'egg'],
         [2, 'large'],
       ]),
-    ).toEqual(['too-fast']);
+    ).toEqual(['too-fast', 'contradictory']);
     expect(
       codes([
         [0, 'small'],

@@ -1,5 +1,15 @@
 import { describe, expect, it } from 'vitest';
+import { CELL_CLASSES } from '@/lib/brood/nest-model/confusion';
 import { NO_SPREAD, cellsOf, estimate, reading, settingsWith } from './support';
+
+/** Every class recorded as what it is. */
+const NO_SLIPS = {
+  confusion: {
+    rows: Object.fromEntries(Object.entries(CELL_CLASSES).map(([name, { recorded }]) => [name, { [recorded]: 1 }])),
+    trust: 'assumption' as const,
+    source: 'test',
+  },
+};
 
 const AT = '2026-06-10T14:00:00Z';
 
@@ -22,6 +32,7 @@ describe('adults to expect per day', () => {
   it('spreads capped cells evenly over 14 days when nothing varies (renewal theory)', () => {
     const settings = {
       ...NO_SPREAD,
+      ...NO_SLIPS,
       values: { ...NO_SPREAD.values, lossCapped: settingsWith({ lossCapped: 0 }).values.lossCapped },
     };
     const { emergencePerDay } = estimate([reading(AT, cellsOf({ capped: 28 }))], { settings, zone: 'UTC' }).nest;
@@ -31,6 +42,7 @@ describe('adults to expect per day', () => {
   it('bands a binomial count exactly when nothing is shared: 28 cells, 1/14 a day', () => {
     const settings = {
       ...NO_SPREAD,
+      ...NO_SLIPS,
       values: { ...NO_SPREAD.values, lossCapped: settingsWith({ lossCapped: 0 }).values.lossCapped },
     };
     const [, day] = estimate([reading(AT, cellsOf({ capped: 28 }))], { settings, zone: 'UTC' }).nest.emergencePerDay;

@@ -64,9 +64,12 @@ describe('cells without a datable brood', () => {
     },
   );
 
-  it('counts dead and parasitised brood as lost, an empty or opened cell as not', () => {
+  it('counts dead and parasitised brood as lost, an opened cell as not', () => {
     const lost = (state: BroodMark['state']) => estimate([reading(AT, [cell(state)])]).cells[0]?.lost.probability;
-    expect([lost('dead'), lost('parasitised'), lost('empty'), lost('opened')]).toEqual([1, 1, 0, 0]);
+    const chances = (['dead', 'parasitised', 'empty', 'opened'] as const).map(lost);
+    expect(chances[0]).toBeGreaterThan(0.999);
+    expect(chances[1]).toBeGreaterThan(0.999);
+    expect(chances[3]).toBeLessThan(0.01);
   });
 
   it('turns grey and says so when nothing can be dated', () => {
@@ -99,23 +102,25 @@ describe('a nest whose adults have come out', () => {
     expect(nest.firstEmergence).toBeNull();
   });
 
-  it('founds the nest at least a whole development before an opened cell, and says that this is a bound', () => {
-    const { nest, assumptions } = estimate([reading(AT, [cell('opened')])]);
-    expect(nest.founded?.median.slice(0, 7)).toBe('2026-04');
-    expect(assumptions.join(' ')).toContain('or earlier');
+  it('founds the nest about a whole development before an opened cell, or earlier', () => {
+    const { nest } = estimate([reading(AT, [cell('opened')])]);
+    expect(nest.founded && nest.founded.p95[0] < '2026-04-27').toBe(true);
+    expect(nest.founded && nest.founded.median < '2026-05-05').toBe(true);
   });
 
-  it('M C31: capped, empty, egg is a second brood; its age restarts and the founding stays', () => {
-    const first = reading('2026-06-01T12:00:00Z', [cell('capped')]);
+  it('M C31: capped, empty, egg is a later brood; its age restarts and the founding stays', () => {
+    const first = reading('2026-06-01T12:00:00Z', cellsOf({ capped: 4, large: 4, egg: 8 }));
     const before = estimate([first]);
     const after = estimate([
       first,
       reading('2026-06-20T12:00:00Z', [cell('empty')]),
       reading('2026-06-26T12:00:00Z', [cell('egg')]),
     ]);
-    expect(after.cells[0]).toMatchObject({ state: 'egg', generation: 2 });
+    expect(after.cells[0]?.state).toBe('egg');
+    expect(after.cells[0]?.generation).toBeGreaterThanOrEqual(2);
     expect((after.cells[0]?.laid?.p95[0] ?? '') > '2026-06-01').toBe(true);
-    expect(after.nest.founded).toEqual(before.nest.founded);
+    const shift = Date.parse(after.nest.founded?.utc.median ?? '') - Date.parse(before.nest.founded?.utc.median ?? '');
+    expect(Math.abs(shift)).toBeLessThan(3 * 86_400_000);
   });
 });
 
@@ -123,11 +128,13 @@ describe('several readings', () => {
   const early = reading('2026-05-20T12:00:00Z', [cell('egg'), { q: 1, r: 0, state: 'egg' }]);
   const late = reading('2026-06-10T12:00:00Z', [cell('large')]);
 
-  it('dates each cell by the last reading that holds it', () => {
-    const both = estimate([late, early]);
-    expect(both.cells.find(({ q }) => q === 0)?.laid).toEqual(estimate([late]).cells[0]?.laid);
-    expect(both.cells.find(({ q }) => q === 1)?.laid).toEqual(estimate([early]).cells[1]?.laid);
-    expect(both.readings).toEqual([early.id, late.id]);
+  it('takes all readings of a cell together: an egg and a large larva three weeks later narrow each other', () => {
+    const width = (readings: Parameters<typeof estimate>[0]) => {
+      const { p95 } = estimate(readings).cells[0]?.laid?.utc ?? { p95: ['', ''] };
+      return Date.parse(p95[1]) - Date.parse(p95[0]);
+    };
+    expect(width([late, early])).toBeLessThan(0.8 * width([late]));
+    expect(estimate([late, early]).readings).toEqual([early.id, late.id]);
   });
 
   it('does not look at readings after the day that is asked for', () => {
@@ -151,13 +158,14 @@ describe('several readings', () => {
 
   it('counts an egg that is gone as lost', () => {
     const { cells } = estimate([early, reading('2026-05-25T12:00:00Z', [cell('empty')])]);
-    expect(cells[0]).toMatchObject({ state: 'empty', generation: 1, laid: null, lost: { probability: 1 } });
+    expect(cells[0]).toMatchObject({ state: 'empty', generation: 1, laid: null });
+    expect(cells[0]?.lost.probability).toBeGreaterThan(0.99);
   });
 });
 
 describe('an instar given by a reviewer', () => {
   const width = (marks: BroodMark[]) => {
-    const { p95 } = estimate([reading(AT, marks)]).cells[0]?.laid ?? { p95: ['', ''] };
+    const { p95 } = estimate([reading(AT, marks)]).cells[0]?.laid?.utc ?? { p95: ['', ''] };
     return Date.parse(p95[1]) - Date.parse(p95[0]);
   };
 
@@ -189,7 +197,7 @@ describe('probabilities', () => {
 
   it('loses nothing without loss rates', () => {
     const settings = settingsWith({ lossEgg: 0, lossLarva: 0, lossCapped: 0 });
-    expect(estimate([reading(AT, [cell('egg')])], { settings }).cells[0]?.emerges?.probability).toBe(1);
+    expect(estimate([reading(AT, [cell('egg')])], { settings }).cells[0]?.emerges?.probability).toBeCloseTo(1, 8);
   });
 });
 
@@ -214,10 +222,10 @@ describe('time of day and year', () => {
 });
 
 describe('inputs that change an answer', () => {
-  it('names unsure cells, an unused temperature record and a foreign genus', () => {
-    const rest = { taxon: 'Dolichovespula arenaria', hasTemperature: true };
+  it('names unsure cells and a foreign genus', () => {
+    const rest = { taxon: 'Dolichovespula arenaria' };
     const { flags, assumptions } = estimate([reading(AT, [cell('egg', { unsure: true })])], rest);
-    expect(flags.map(({ code }) => code)).toEqual(['other-genus', 'temperature-unused']);
+    expect(flags.map(({ code }) => code)).toEqual(['other-genus']);
     expect(assumptions.join(' ')).toContain('unsure: 1 cell');
   });
 
@@ -229,6 +237,8 @@ describe('inputs that change an answer', () => {
 
   it('takes every state there is in one comb of 500 cells', () => {
     const marks = spiral(500).map((at, i) => ({ ...at, state: CELL_STATES[i % CELL_STATES.length] ?? 'unread' }));
-    expect(estimate([reading(AT, marks)]).cells).toHaveLength(500);
-  });
+    const { cells, nest } = estimate([reading(AT, marks)]);
+    expect(cells).toHaveLength(500);
+    expect(nest.emergencePerDay).toHaveLength(60);
+  }, 120_000);
 });

@@ -51,12 +51,17 @@ describe('a nest file', () => {
     const days = ['2026-06-02', '2026-06-01'].map((date) => ({ date, min: 12, max: 26 }));
     const daily = parse({ readings: [READING], temperature: { kind: 'daily', days }, place: { lat: 40, lon: -75 } });
     expect(daily).toMatchObject({
-      value: { temperature: { kind: 'daily', days: [{ date: '2026-06-01' }, { date: '2026-06-02' }] }, place: { lat: 40 } },
+      value: {
+        temperature: { kind: 'daily', days: [{ date: '2026-06-01' }, { date: '2026-06-02' }] },
+        place: { lat: 40 },
+      },
     });
     const readings = ['2026-06-02T01:00:00Z', '2026-06-02T00:00:00Z'].map((at) => ({ at, celsius: 21.5 }));
     const logger = parse({ readings: [READING], temperature: { readings } });
     expect(logger).toMatchObject({
-      value: { temperature: { kind: 'logger', readings: [{ at: Date.parse('2026-06-02T00:00:00Z') }, { celsius: 21.5 }] } },
+      value: {
+        temperature: { kind: 'logger', readings: [{ at: Date.parse('2026-06-02T00:00:00Z') }, { celsius: 21.5 }] },
+      },
     });
   });
 
@@ -65,7 +70,12 @@ describe('a nest file', () => {
     const durationFactors = [{ taxon: 'Polistes fuscatus', logMean: 0.1, logSd: 0.05, source: 'nine nests' }];
     const result = parse({ readings: [READING], settings: { confusion, durationFactors } });
     expect(result).toMatchObject({
-      value: { settings: { confusion: { rows: { egg: { empty: 0.1 }, L2: { small: 1 } }, trust: 'assumption' }, durationFactors } },
+      value: {
+        settings: {
+          confusion: { rows: { egg: { empty: 0.1 }, L2: { small: 1 } }, trust: 'assumption' },
+          durationFactors,
+        },
+      },
     });
   });
 });

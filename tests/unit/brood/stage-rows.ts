@@ -34,7 +34,9 @@ export function sighted(shapes: readonly Shape[], from: number, to: number): Flo
 
 /** P(phase `to` is reached within x days of a sighting in phases `from` … `to − 1`). */
 export function reachedBy(shapes: readonly Shape[], [from, to]: readonly [number, number], x: number): number {
-  return massesAt(shapes, x, sighted(shapes, from, to)).subarray(to).reduce((sum, p) => sum + p, 0);
+  return massesAt(shapes, x, sighted(shapes, from, to))
+    .subarray(to)
+    .reduce((sum, p) => sum + p, 0);
 }
 
 /** P(the row was entered at most x days before a sighting in phases `from` … `to − 1`): the row read backwards. */

@@ -45,7 +45,9 @@ describe('the general model in a simple case', () => {
   it('gives one sighting the equilibrium law when the egg may have been laid on any day (renewal theory)', () => {
     const answer = historyAnswer(model(1e-9, 'B', -200), { times: [0], observations: ['larva'] }, ONE_DAY);
     answer.laying?.times.forEach((time, i) => {
-      expect(Math.abs((answer.laying?.first[i] ?? NaN) - (1 - enteredWithin(SHAPES, [9, 17], -time)))).toBeLessThan(1e-6);
+      expect(Math.abs((answer.laying?.first[i] ?? NaN) - (1 - enteredWithin(SHAPES, [9, 17], -time)))).toBeLessThan(
+        1e-6,
+      );
     });
     ONE_DAY.daysAfter.forEach((days, i) => {
       const capped = reachedBy(SHAPES, [9, 17], days);

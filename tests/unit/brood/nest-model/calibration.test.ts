@@ -51,25 +51,29 @@ function faults(places: readonly number[]): string[] {
   ];
 }
 
-describe(`calibration by simulated nests (Talts et al. 2018), ${NESTS} nests, seed 2026`, { timeout: 60 * MINUTES }, () => {
-  let places: { laid: number[]; capped: number[] };
+describe(
+  `calibration by simulated nests (Talts et al. 2018), ${NESTS} nests, seed 2026`,
+  { timeout: 60 * MINUTES },
+  () => {
+    let places: { laid: number[]; capped: number[] };
 
-  beforeAll(() => {
-    places = calibrate({ truth: DEFAULT_CONFUSION, believed: DEFAULT_CONFUSION, seed: 2026 }, NESTS);
-  }, 60 * MINUTES);
+    beforeAll(() => {
+      places = calibrate({ truth: DEFAULT_CONFUSION, believed: DEFAULT_CONFUSION, seed: 2026 }, NESTS);
+    }, 60 * MINUTES);
 
-  it('puts the true laying time evenly into the estimated law', () => {
-    expect(places.laid).toHaveLength(NESTS);
-    expect(faults(places.laid)).toEqual([]);
-  });
+    it('puts the true laying time evenly into the estimated law', () => {
+      expect(places.laid).toHaveLength(NESTS);
+      expect(faults(places.laid)).toEqual([]);
+    });
 
-  it('puts the true capping time evenly into the estimated law', () => {
-    expect(places.capped).toHaveLength(NESTS);
-    expect(faults(places.capped)).toEqual([]);
-  });
+    it('puts the true capping time evenly into the estimated law', () => {
+      expect(places.capped).toHaveLength(NESTS);
+      expect(faults(places.capped)).toEqual([]);
+    });
 
-  it(`fails where it must: three times the slips, analysed as if nobody ever slipped (${CONTROL_NESTS} nests, seed 7)`, () => {
-    const control = calibrate({ truth: tripled(DEFAULT_CONFUSION), believed: IDENTITY, seed: 7 }, CONTROL_NESTS);
-    expect([...faults(control.laid), ...faults(control.capped)]).not.toEqual([]);
-  });
-});
+    it(`fails where it must: three times the slips, analysed as if nobody ever slipped (${CONTROL_NESTS} nests, seed 7)`, () => {
+      const control = calibrate({ truth: tripled(DEFAULT_CONFUSION), believed: IDENTITY, seed: 7 }, CONTROL_NESTS);
+      expect([...faults(control.laid), ...faults(control.capped)]).not.toEqual([]);
+    });
+  },
+);

@@ -17,8 +17,8 @@ const LAST = 21.1;
 const FIRST_COUNT = 14;
 /** Rank and spread of the cells of a nest. */
 const CELLS = [
-  { rank: 1, spread: 1.6 },
-  { rank: 8, spread: 2.3 },
+  { rank: 1, spread: 1.6, slip: 0 },
+  { rank: 8, spread: 2.3, slip: 0 },
 ];
 const PRIOR_DAYS = 45;
 const SD = Math.sqrt(Math.log1p(0.2 ** 2));
@@ -87,7 +87,11 @@ export function calibrateOnce(random: Random, { truth, believed }: Calibration):
   });
   const { nodes } = nestPosterior(model, { mean: 0, sd: SD }, { timeline, groups, futures });
   const future = futures.at(-1);
-  const times = { edges: timeline.edges, lastLook: LAST, future: future ?? futureOf({ from: LAST, clockEnd: 0, horizon: 9 }, calendar) };
+  const times = {
+    edges: timeline.edges,
+    lastLook: LAST,
+    future: future ?? futureOf({ from: LAST, clockEnd: 0, horizon: 9 }, calendar),
+  };
   const { present } = mixedGroup(model, { nodes, group: chosen }, times);
   return { laid: placeIn(present?.laid, brood.laid), capped: placeIn(present?.capped, brood.capped) };
 }
