@@ -50,8 +50,16 @@ const SETTLEMENT_COLUMNS = [
   id('reading_id', 'reading'),
   'version, position, q, r, state, reason',
   id('mark_op_id', 'markOpId'),
+  'pick',
   id('actor_id', 'actor'),
   time('created_at', 'createdAt'),
+].join(', ');
+
+const LOCK_COLUMNS = [
+  id('reading_id', 'reading'),
+  'version, LOWER(HEX(cells_hash)) AS cellsHash, settings_version AS settingsVersion, names',
+  id('actor_id', 'actor'),
+  time('locked_at', 'lockedAt'),
 ].join(', ');
 
 const MARK_COLUMNS = [
@@ -104,10 +112,16 @@ async function sealOf(work: Work, team: Buffer, row: Row) {
       `SELECT ${columns} FROM ${table} WHERE team_id = ? AND reading_id = ? AND seq <= ? ORDER BY seq`,
       behind,
     );
+  const own = [team, binary(String(final.id))];
   const settlements = await select<Row>(
     work,
     `SELECT ${SETTLEMENT_COLUMNS} FROM settlements WHERE team_id = ? AND reading_id = ? ORDER BY position`,
-    [team, binary(String(final.id))],
+    own,
+  );
+  const locks = await select<Row>(
+    work,
+    `SELECT ${LOCK_COLUMNS} FROM reading_locks WHERE team_id = ? AND reading_id = ? ORDER BY version`,
+    own,
   );
   const marks = (await of(MARK_COLUMNS, 'marks')).map(yesNo);
   const retractions = (await of(RETRACTION_COLUMNS, 'retractions')).map((taken) => ({
@@ -119,6 +133,8 @@ async function sealOf(work: Work, team: Buffer, row: Row) {
     marks: await digest({ marks, retractions }),
     settled: await digest(settlements),
     settlements: settlements.length,
+    locks: locks.length,
+    locked: await digest(locks),
   };
 }
 

@@ -6,7 +6,7 @@ import type { TeamScope } from '@/lib/server/queries/team-scope';
 import type { AuditEntry } from '@/models/audit-entry';
 import { sealedReadings } from './load-sealed';
 import { marksDigest } from './seal';
-import { type SealedFinal, type SealedSettlement, sealedSettlement } from './sealed-rows';
+import { type SealedFinal, type SealedLock, type SealedSettlement, sealedLock, sealedSettlement } from './sealed-rows';
 
 /** One entry of the chain as stored; hashes are hex, the time ISO 8601. */
 export interface StoredLink extends Omit<AuditLink, 'at'> {
@@ -23,6 +23,7 @@ export interface AuditSnapshot {
   head: { seq: number; hash: string };
   finals: SealedFinal[];
   settlements: SealedSettlement[];
+  locks: SealedLock[];
   /** By id of the final reading: the hash of the marks it stands on. */
   marks: Record<string, string>;
 }
@@ -50,6 +51,7 @@ export async function auditSnapshot(scope: TeamScope): Promise<AuditSnapshot> {
   const entries = await db.models.AuditEntry.findAll({ ...of, order: [['seq', 'ASC']], raw: true });
   // All of them, not only those of final readings: a row that hangs on nothing was put there by hand.
   const settlements = await db.models.Settlement.findAll({ ...of, raw: true });
+  const locks = await db.models.ReadingLock.findAll({ ...of, raw: true });
   const finals: SealedFinal[] = [];
   const marks: Record<string, string> = {};
   for await (const page of sealedReadings(scope)) {
@@ -63,6 +65,7 @@ export async function auditSnapshot(scope: TeamScope): Promise<AuditSnapshot> {
     head: { seq: Number(counter.audit_seq), hash: counter.audit_hash.toString('hex') },
     finals,
     settlements: settlements.map(sealedSettlement),
+    locks: locks.map(sealedLock),
     marks,
   };
 }

@@ -5,7 +5,7 @@ import { settlementsOf } from '@/lib/server/queries/reading-cells';
 import type { ReadingRow } from '@/lib/server/queries/reading-rows';
 import type { TeamScope } from '@/lib/server/queries/team-scope';
 import type { SealedReading } from './seal';
-import { sealedFinal, sealedMark, sealedRetraction, sealedSettlement } from './sealed-rows';
+import { sealedFinal, sealedLock, sealedMark, sealedRetraction, sealedSettlement } from './sealed-rows';
 
 /** Marks and retractions of the readings some final ones are based on. */
 async function behind(scope: TeamScope, sources: readonly Buffer[]) {
@@ -24,6 +24,12 @@ async function withParts(scope: TeamScope, finals: readonly ReadingRow[]): Promi
     finals.map(({ id }) => id),
   );
   const settlements = groupBy(rows.map(sealedSettlement), ({ reading }) => reading);
+  const locks = await scope.db.models.ReadingLock.findAll({
+    where: { team_id: scope.team, reading_id: finals.map(({ id }) => id) },
+    raw: true,
+    transaction: scope.transaction,
+  });
+  const locked = groupBy(locks.map(sealedLock), ({ reading }) => reading);
   const parts = await behind(
     scope,
     finals.flatMap(({ based_on }) => based_on ?? []),
@@ -31,6 +37,7 @@ async function withParts(scope: TeamScope, finals: readonly ReadingRow[]): Promi
   return finals.map(sealedFinal).map((final) => ({
     final,
     settlements: settlements.get(final.id) ?? [],
+    locks: locked.get(final.id) ?? [],
     marks: parts.marks.get(final.basedOn ?? '') ?? [],
     retractions: parts.retractions.get(final.basedOn ?? '') ?? [],
   }));

@@ -4,6 +4,7 @@ import { fromBinary, fromBinaryOrNull } from '@/lib/server/db/uuid-binary';
 import type { SettlementRow } from '@/lib/server/queries/reading-cells';
 import type { ReadingRow } from '@/lib/server/queries/reading-rows';
 import type { Mark } from '@/models/mark';
+import type { ReadingLock } from '@/models/reading-lock';
 import type { Retraction } from '@/models/retraction';
 
 /**
@@ -48,8 +49,25 @@ export function sealedSettlement(row: SettlementRow) {
     state: row.state,
     reason: row.reason,
     markOpId: fromBinaryOrNull(row.mark_op_id),
+    pick: row.pick,
     actor: fromBinary(row.actor_id),
     createdAt: row.created_at.toISOString(),
+  };
+}
+
+/** A locked version as sealed. */
+export type SealedLock = ReturnType<typeof sealedLock>;
+
+/** A locked version as sealed. */
+export function sealedLock(row: InferAttributes<ReadingLock>) {
+  return {
+    reading: fromBinary(row.reading_id),
+    version: row.version,
+    cellsHash: row.cells_hash.toString('hex'),
+    settingsVersion: row.settings_version,
+    names: row.names,
+    actor: fromBinary(row.actor_id),
+    lockedAt: row.locked_at.toISOString(),
   };
 }
 

@@ -2,8 +2,8 @@ import 'server-only';
 import { groupBy } from '@/lib/kit/group-by';
 import { auditHash } from '@/lib/server/commands/push/write-audit';
 import type { AuditSnapshot, StoredLink } from './audit-snapshot';
-import { finalDigest, readSeal, type Seal, settledDigest } from './seal';
-import type { SealedSettlement } from './sealed-rows';
+import { finalDigest, lockedDigest, readSeal, type Seal, settledDigest } from './seal';
+import type { SealedLock, SealedSettlement } from './sealed-rows';
 
 /** Something that is not as the chain says. */
 export interface AuditFault {
@@ -53,11 +53,16 @@ function sealingsBySubject(entries: readonly StoredLink[]): Map<string, Sealing[
   return groupBy(sealings, ({ subjectId }) => subjectId);
 }
 
+/** One final reading as the entries and the rows speak of it. */
+interface Sealed {
+  id: string;
+  sealings: readonly Sealing[];
+  settlements: readonly SealedSettlement[];
+  locks: readonly SealedLock[];
+}
+
 /** Do the rows of one final reading match every entry that sealed it? */
-function* sealFaults(
-  snapshot: AuditSnapshot,
-  { id, sealings, settlements }: { id: string; sealings: readonly Sealing[]; settlements: readonly SealedSettlement[] },
-): Generator<AuditFault> {
+function* sealFaults(snapshot: AuditSnapshot, { id, sealings, settlements, locks }: Sealed): Generator<AuditFault> {
   const final = snapshot.finals.find((row) => row.id === id);
   const last = sealings.at(-1);
   if (!last) return;
@@ -69,10 +74,16 @@ function* sealFaults(
     if (seal.settled !== settledDigest(settlements, seal.settlements)) {
       yield { seq, found: `the decisions about final reading ${id} are not those it sealed` };
     }
+    if (seal.locked !== lockedDigest(locks, seal.locks)) {
+      yield { seq, found: `the locks of final reading ${id} are not those it sealed` };
+    }
     if (seal.marks !== snapshot.marks[id]) yield { seq, found: `the marks behind final reading ${id} have changed` };
   }
   if (settlements.length > last.seal.settlements) {
     yield { seq: last.seq, found: `final reading ${id} has decisions that no entry speaks of` };
+  }
+  if (locks.length > last.seal.locks) {
+    yield { seq: last.seq, found: `final reading ${id} has locks that no entry speaks of` };
   }
   if (last.seal.final !== finalDigest(final)) {
     yield { seq: last.seq, found: `final reading ${id} is not as it was sealed` };
@@ -84,6 +95,9 @@ function* strangers(snapshot: AuditSnapshot, known: ReadonlyMap<string, unknown>
   for (const { id } of snapshot.finals) {
     if (!known.has(id)) yield { seq: null, found: `final reading ${id} is in no entry` };
   }
+  for (const { version, reading } of snapshot.locks) {
+    if (!known.has(reading)) yield { seq: null, found: `lock ${version} belongs to no reading the chain knows` };
+  }
   for (const { id, reading } of snapshot.settlements) {
     if (!known.has(reading)) yield { seq: null, found: `decision ${id} belongs to no reading the chain knows` };
   }
@@ -94,8 +108,8 @@ function byPlace(a: AuditFault, b: AuditFault): number {
 }
 
 /**
- * Checks a team's audit chain, link by link, and that the final readings, the decisions about their cells and the
- * marks behind them are what the chain says.
+ * Checks a team's audit chain, link by link, and that the final readings, the decisions about their cells, their
+ * locks and the marks behind them are what the chain says.
  *
  * An attacker who rewrites the chain from some entry on, together with the head in the counter, is found only by
  * comparing with a head that was noted elsewhere; see `knowsHead`.
@@ -105,9 +119,11 @@ function byPlace(a: AuditFault, b: AuditFault): number {
 export function verifyAudit(snapshot: AuditSnapshot): AuditFault[] {
   const sealings = sealingsBySubject(snapshot.entries);
   const settlements = groupBy(snapshot.settlements, ({ reading }) => reading);
+  const locks = groupBy(snapshot.locks, ({ reading }) => reading);
   const faults = [...chainFaults(snapshot)];
   for (const [id, own] of sealings) {
-    faults.push(...sealFaults(snapshot, { id, sealings: own, settlements: settlements.get(id) ?? [] }));
+    const rows = { settlements: settlements.get(id) ?? [], locks: locks.get(id) ?? [] };
+    faults.push(...sealFaults(snapshot, { id, sealings: own, ...rows }));
   }
   faults.push(...strangers(snapshot, sealings));
   return faults.sort(byPlace);

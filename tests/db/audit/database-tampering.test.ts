@@ -12,7 +12,7 @@ let team: string;
 beforeAll(async () => {
   team = (await makeDecidedTeam()).teamId;
   await asMigrator(process.env.DB_NAME ?? '', async (sequelize) => {
-    for (const table of ['settlements', 'audit_entries', 'marks', 'retractions']) {
+    for (const table of ['settlements', 'audit_entries', 'marks', 'retractions', 'reading_locks']) {
       for (const verb of ['update', 'delete']) await sequelize.query(`DROP TRIGGER ${table}_no_${verb}`);
     }
   });
@@ -50,8 +50,12 @@ describe('a change of the stored rows', () => {
     [
       'a decision put in',
       `INSERT INTO settlements SELECT team_id, UNHEX(REPEAT('ab', 16)), reading_id, version, 99, q, r, 'dead', reason,
-         mark_op_id, actor_id, created_at FROM settlements LIMIT 1`,
+         mark_op_id, actor_id, created_at, pick FROM settlements LIMIT 1`,
     ],
+    ['whose state was taken', `UPDATE settlements SET pick = 'field' WHERE id = ${ONE('settlements')}`],
+    ['the seal of a lock', "UPDATE reading_locks SET cells_hash = UNHEX(REPEAT('0', 64)) LIMIT 1"],
+    ['the names on a lock', "UPDATE reading_locks SET names = REPLACE(names, 'e', 'a') LIMIT 1"],
+    ['a sealed lock taken away', 'DELETE FROM reading_locks LIMIT 1'],
     ['a lock taken away', `UPDATE readings SET locked_version = NULL WHERE id = ${FINAL}`],
     ['another name on a lock', `UPDATE readings SET opened_by = UNHEX(REPEAT('0', 32)) WHERE id = ${FINAL}`],
     ['a final reading taken away', `DELETE FROM readings WHERE id = ${FINAL}`],

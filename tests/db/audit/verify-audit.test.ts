@@ -75,6 +75,8 @@ type Tampering = (snapshot: AuditSnapshot, random: Random) => void;
 
 const TAMPERING: Readonly<Record<string, Tampering>> = {
   'edit a decision': ({ settlements }, random) => edit(pick(settlements, random), random),
+  'edit a lock': ({ locks }, random) => edit(pick(locks, random), random),
+  'drop a lock': ({ locks }, random) => remove(locks, random),
   'edit a final reading': ({ finals }, random) => edit(pick(finals, random), random),
   'edit an entry': ({ entries }, random) => edit(pick(entries, random), random),
   'change the marks behind': ({ marks, finals }, random) => void (marks[pick(finals, random).id] = 'ff'.repeat(32)),
@@ -106,7 +108,7 @@ describe('the check of the audit chain', () => {
     expect([honest.entries.length, honest.finals.length, honest.settlements.length]).toEqual([13, 4, 16]);
   });
 
-  it(`finds all of ${TAMPERINGS} random tamperings of sixteen kinds (seed ${SEED})`, () => {
+  it(`finds all of ${TAMPERINGS} random tamperings of eighteen kinds (seed ${SEED})`, () => {
     const random = seededRandom(SEED);
     const kinds = Object.keys(TAMPERING);
     const unseen: string[] = [];
