@@ -1,6 +1,6 @@
 import type { ReactElement } from 'react';
 import { Button } from '@/components/ui/button';
-import { countWords, dateWords } from '@/components/ui/date-words';
+import { countWords } from '@/components/ui/date-words';
 import { Notice } from '@/components/ui/notice';
 import { Section } from '@/components/ui/section';
 import { BodyCell, HeadCell, Table } from '@/components/ui/table';
@@ -8,7 +8,7 @@ import type { DateShift } from '@/lib/brood/team-settings/date-shift';
 import type { NestShiftView } from './settings-shapes';
 import { type Impact, useImpact } from './use-impact';
 
-/** `3 days later`, `1 day earlier`, `stays`. */
+/** How far the likeliest day moves; the day itself is never shown without its range. `3 days later`, `1 day earlier`, `stays`. */
 export function shiftWords({ before, after, days }: DateShift): string {
   if (before === null && after === null) return 'no date';
   if (days === null) return after === null ? 'loses its date' : 'gets a date';
@@ -17,17 +17,7 @@ export function shiftWords({ before, after, days }: DateShift): string {
 }
 
 function ShiftCell({ shift }: { shift: DateShift }): ReactElement {
-  const { before, after } = shift;
-  return (
-    <BodyCell>
-      <span className={shift.days ? 'font-bold' : ''}>{shiftWords(shift)}</span>
-      {before && after && before !== after && (
-        <span className="block text-sm text-quiet">
-          likeliest day {dateWords(before)} → {dateWords(after)}
-        </span>
-      )}
-    </BodyCell>
-  );
+  return <BodyCell className={shift.days ? 'font-bold' : ''}>{shiftWords(shift)}</BodyCell>;
 }
 
 /** Nests that move first, the furthest first. */

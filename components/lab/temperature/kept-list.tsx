@@ -2,7 +2,7 @@
 
 import { type ReactElement, useState } from 'react';
 import { Button } from '@/components/ui/button';
-import { countWords, dayWords, momentWords, spanWords } from '@/components/ui/date-words';
+import { countWords, dateWords, dayWords, momentWords } from '@/components/ui/date-words';
 import { Dialog } from '@/components/ui/dialog';
 import { Field } from '@/components/ui/field';
 import { TextArea } from '@/components/ui/input';
@@ -53,8 +53,8 @@ function TakeOut({ nest, record }: { nest: string; record: KeptView }): ReactEle
 
 /** The days a record speaks for. */
 function spanOf({ from, to }: KeptView, zone: string, inYear: string): string {
-  const dates = [localDate(Date.parse(from), zone), localDate(Date.parse(to) - 1, zone)] as const;
-  return spanWords([dates[0], dates[1] < dates[0] ? dates[0] : dates[1]], inYear);
+  const [first, last] = [localDate(Date.parse(from), zone), localDate(Date.parse(to) - 1, zone)];
+  return last <= first ? dateWords(first, inYear) : `${dateWords(first, inYear)} to ${dateWords(last, inYear)}`;
 }
 
 /** Every record kept for a nest, those taken out at the end. */

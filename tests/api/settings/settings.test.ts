@@ -90,7 +90,7 @@ describe('the settings of a team', () => {
     const answer = await lead<SettingsAnswer>(settingsRoute, {}, own);
     expect(answer).toMatchObject({ version: 1, signedBy: 'The biologist', reason: 'By the trial.', draft: null });
     const rows = await database().models.Estimate.findAll({ where: { team_id: toBinary(own.teamId) }, raw: true });
-    expect(rows.map((kept) => kept.settings_version).sort()).toEqual([0, 1]);
+    expect(rows.map((kept) => kept.settings_version).sort((a, b) => a - b)).toEqual([0, 1]);
     const chain = await database().models.AuditEntry.findAll({ where: { team_id: toBinary(own.teamId) }, raw: true });
     expect(chain.map(({ action }) => action)).toEqual(['settings.sign']);
     const first = await callApi(versionRoute, 'GET', { as: own.members.researcher, params: { version: '0' } });
@@ -142,7 +142,7 @@ describe('the settings of a team', () => {
     const own = await makeTeam();
     await draft({ values: { lossEgg: { value: 0.05, ...TRIAL } } }, own);
     const answers = await Promise.all([sign(0, own), sign(0, own)]);
-    expect(answers.map(({ status }) => status).sort()).toEqual([200, 409]);
+    expect(answers.map(({ status }) => status).sort((a, b) => a - b)).toEqual([200, 409]);
     expect((await lead<SettingsAnswer>(settingsRoute, {}, own)).versions).toHaveLength(1);
   });
 });
