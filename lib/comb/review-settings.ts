@@ -5,6 +5,8 @@ interface ReviewSettingRule {
   unit: string;
   min: number;
   max: number;
+  /** Only whole numbers make sense. */
+  isWhole?: boolean;
 }
 
 /** Every number that the lab's review goes by, by name. */
@@ -22,6 +24,7 @@ export const REVIEW_SETTING_RULES = {
     unit: 'cells',
     min: 0,
     max: 100,
+    isWhole: true,
   },
   reviewOverdue: {
     group: 'review',
@@ -29,6 +32,7 @@ export const REVIEW_SETTING_RULES = {
     unit: 'days',
     min: 1,
     max: 365,
+    isWhole: true,
   },
 } as const satisfies Record<string, ReviewSettingRule>;
 

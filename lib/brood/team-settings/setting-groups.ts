@@ -1,5 +1,6 @@
 import { DEFAULT_LEARNING, LEARNING_RULES } from '@/lib/brood/learning/learning-settings';
 import { DEFAULT_SETTINGS, SETTING_RULES, type Setting } from '@/lib/brood/settings';
+import { DEFAULT_REVIEW_SETTINGS, REVIEW_SETTING_RULES } from '@/lib/comb/review-settings';
 import { TEMPERATURE_RULES } from '@/lib/brood/temperature/temperature-settings';
 import { SETTING_WORDS } from './setting-words';
 
@@ -46,7 +47,16 @@ const PARTS: readonly { id: string; title: string; names: readonly string[] }[] 
   {
     id: 'laying',
     title: 'Laying and growth of the comb',
-    names: ['layFirst', 'layNext', 'generations', 'cellsPerDay', 'orderSpread', 'orderSpreadPerCell'],
+    names: [
+      'layFirst',
+      'layNext',
+      'generations',
+      'cellsPerDay',
+      'growthSpread',
+      'orderSpread',
+      'orderSpreadPerCell',
+      'orderSlip',
+    ],
   },
   {
     id: 'variation',
@@ -57,6 +67,16 @@ const PARTS: readonly { id: string; title: string; names: readonly string[] }[] 
   { id: 'temperature', title: 'Temperature', names: Object.keys(TEMPERATURE_RULES) },
   { id: 'season', title: 'Season gate', names: ['amberWindow', 'redWindow', 'guardWindow'] },
 ];
+
+const REVIEW_SOURCE = 'programme default; owned by the lead biologist';
+
+/** The lab's thresholds, each with how far it is to be trusted. */
+const REVIEW_DEFAULTS: Readonly<Record<string, Setting>> = Object.fromEntries(
+  Object.entries(DEFAULT_REVIEW_SETTINGS).map(([name, value]) => [
+    name,
+    { value, trust: 'assumption', source: REVIEW_SOURCE },
+  ]),
+);
 
 /** Rules of the model by name, those of some names only. */
 function rulesOf(isIn: (name: string) => boolean): Record<string, NumberRule> {
@@ -82,6 +102,7 @@ export const SETTING_GROUPS: readonly SettingGroup[] = [
     rulesOf((name) => !PLACED.has(name)),
     DEFAULT_SETTINGS.values,
   ),
+  settingGroup({ id: 'review', title: 'Review in the lab' }, REVIEW_SETTING_RULES, REVIEW_DEFAULTS),
   settingGroup({ id: 'learning', title: 'Learning from the team’s own readings' }, LEARNING_RULES, DEFAULT_LEARNING),
 ].filter(({ items }) => items.length > 0);
 
