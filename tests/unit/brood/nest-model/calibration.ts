@@ -65,7 +65,7 @@ function placeIn(law: TimeLaw | undefined, time: number | null | undefined): num
 function looksAt(random: Random, cell: TrueCell, truth: Confusion): Look[][] {
   const floor = DEFAULT_SETTINGS.values.slipFloor.value;
   return LOOKS.map((day) => {
-    const state = recorded(random, truth, classAt(cell, day), floor) as Look['state'];
+    const state = recorded(random, { confusion: truth, floor }, classAt(cell, day)) as Look['state'];
     return [{ state, instar: null, unsure: false, reused: false }];
   });
 }
