@@ -71,7 +71,7 @@ function looksAt(random: Random, cell: TrueCell, truth: Confusion): Look[][] {
 }
 
 /** Draws a nest out of the priors, analyses its records, and compares with the truth. */
-export function calibrateOnce(random: Random, { truth, believed }: Calibration): Places {
+function calibrateOnce(random: Random, { truth, believed }: Calibration): Places {
   const rho = Math.exp(SD * normal(random));
   const life = { row: GENUS_ROW, settings: DEFAULT_SETTINGS, rho };
   const cells = CELLS.map((cell) => simulateCell(random, life, builtDay(random, cell)));
