@@ -136,11 +136,7 @@ export function massPasses(chain: Uniformised, masses: readonly Float64Array[], 
 export function valuePasses(
   chain: Uniformised,
   values: readonly Float64Array[],
-  {
-    blocks = blocksOf(chain, 1),
-    isEndNeeded = true,
-    ...request
-  }: PassRequest & { blocks?: Blocks; isEndNeeded?: boolean },
+  { blocks = blocksOf(chain, 1), ...request }: PassRequest & { blocks?: Blocks },
 ): PassResult[] {
   if (request.days === 0 || chain.clock === 0) return standing(values, request, blocks);
   const play = { blocks, used: blocks, plan: planTile(chain, blocks) };
