@@ -25,11 +25,8 @@ export interface BroodSighting {
 export interface CellView extends Axial {
   /** The state last recorded, leaving out `unread` where there is another. */
   state: CellState;
-  generation: number;
   /** The living brood now in the cell, or null. */
   brood: BroodSighting | null;
-  /** The brood last seen alive that is no longer there, or null. */
-  gone: BroodSighting | null;
   /** The sightings in which the cell was really looked into, oldest first. */
   looked: readonly Sighting[];
 }
@@ -61,33 +58,7 @@ export function isRestart(before: StageGroup, after: StageGroup): boolean {
   return isEggAgain || (before.key === 'capped' && after.key !== 'capped');
 }
 
-/** The last living brood of a run of sightings. */
-function lastBrood(looked: readonly Sighting[]): BroodSighting | null {
-  for (const { at, mark } of [...looked].reverse()) {
-    const group = stageGroup(mark);
-    if (group) return { at, group };
-  }
-  return null;
-}
-
-/**
- * Which brood of the cell each sighting shows, counting from 1: a new one after a gap, after a restart, and where a
- * mark says reused. 0 as long as the cell was only ever empty.
- */
-export function generations(looked: readonly Sighting[]): number[] {
-  let generation = 0;
-  let present: StageGroup | null = null;
-  return looked.map(({ mark }) => {
-    const group = stageGroup(mark);
-    if (group && (!present || isRestart(present, group))) generation += 1;
-    if (!group && mark.state !== 'empty') generation = Math.max(generation, 1);
-    if (group && mark.reused) generation = Math.max(generation, 2);
-    present = group;
-    return generation;
-  });
-}
-
-/** Reads a cell's history: what it holds now, which brood that is, and what was seen of it last. */
+/** Reads a cell's history: what it was last recorded as, and the living brood in it. */
 export function viewCell({ q, r, sightings }: CellHistory): CellView {
   const looked = sightings.filter(({ mark }) => !NOT_LOOKED_AT.has(mark.state));
   const recorded = sightings.filter(({ mark }) => mark.state !== 'unread').at(-1);
@@ -97,9 +68,7 @@ export function viewCell({ q, r, sightings }: CellHistory): CellView {
     q,
     r,
     state: recorded?.mark.state ?? 'unread',
-    generation: generations(looked).at(-1) ?? 0,
     brood: last && group ? { at: last.at, group } : null,
-    gone: group ? null : lastBrood(looked),
     looked,
   };
 }

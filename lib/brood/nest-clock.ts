@@ -2,7 +2,7 @@ import { DAY_MS } from './date-range';
 import type { NestClock } from './nest-model/dated-nest';
 
 /** Days count as days. */
-export const CALENDAR: NestClock = { between: () => 1, end: -Infinity };
+const CALENDAR: NestClock = { between: () => 1, end: -Infinity };
 
 /**
  * The development clock of a nest in days since an instant.

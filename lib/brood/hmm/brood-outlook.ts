@@ -13,7 +13,7 @@ export interface BroodOutlook {
 }
 
 /** Adds the generations of a state vector up into the states of one brood; only living brood counts. */
-export function presentBrood({ states, broodOffset, broodLiving }: CellModel, mass: Float64Array): Float64Array {
+function presentBrood({ states, broodOffset, broodLiving }: CellModel, mass: Float64Array): Float64Array {
   const size = broodLiving.length;
   return broodLiving.map((isLiving, s) => {
     let sum = 0;

@@ -72,14 +72,6 @@ export function broodStates(stages: readonly PhaseStage[], generations: number):
   };
 }
 
-/** Marks the states that `holds` accepts with 1, all others with 0. */
-export function stateSet(
-  { count, keys, generationOf }: BroodStates,
-  holds: (key: string, generation: number) => boolean,
-): Float64Array {
-  return Float64Array.from({ length: count }, (_, s) => (holds(keys[s] ?? '', generationOf[s] ?? 0) ? 1 : 0));
-}
-
 /** Is this a state with living brood in the cell? */
 export function isOccupied(key: string): boolean {
   return key !== 'N' && key !== 'B' && !END_KEYS.some((end) => key.startsWith(`${end}#`));

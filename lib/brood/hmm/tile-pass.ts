@@ -57,24 +57,32 @@ function noteWatched(
 function passTile(
   chain: Uniformised,
   vectors: readonly Float64Array[],
-  { tick, play, isMoving, isEndNeeded, request }: TilePass,
+  { tick, play, isMoving, request }: TilePass,
 ): PassResult[] {
   const { days, watch = [], weightsOf = poissonWeights, least = 0 } = request;
   const { first, weights } = weightsOf(chain.clock * days);
   const ticks = first + weights.length;
   const sequences = Array.from({ length: watch.length * TILE }, () => new Float64Array(ticks));
-  const end = new Float64Array(chain.states * TILE);
-  const pair: TilePair = { current: interleave(vectors, chain.states), next: new Float64Array(chain.states * TILE) };
+  const size = chain.states * TILE;
+  const end = new Float64Array(size);
+  const pair: TilePair = {
+    current: interleave(vectors, chain.states),
+    next: new Float64Array(size),
+    sum: end,
+    weight: 0,
+  };
   if (!isMoving)
     play.blocks.forEach((is, b) => is === 0 && pair.current.fill(0, b * BLOCK * TILE, (b + 1) * BLOCK * TILE));
   for (let n = 0; n < ticks; n++) {
-    if (n > 0) {
-      tick(chain, pair, play.plan);
-      [pair.current, pair.next] = [pair.next, pair.current];
-    }
     if (isMoving && n % (BLOCK / 2) === 0) follow(chain, play, { pair, least });
     noteWatched(sequences, watch, { n, tile: pair.current });
-    if (isEndNeeded && n >= first) addTile(end, pair.current, { weight: weights[n - first] ?? 0, plan: play.plan });
+    pair.weight = n < first ? 0 : (weights[n - first] ?? 0);
+    if (n + 1 === ticks) {
+      addTile(pair, play.plan);
+      continue;
+    }
+    tick(chain, pair, play.plan);
+    [pair.current, pair.next] = [pair.next, pair.current];
   }
   return vectors.map((_, c) => ({
     end: column(end, c),
@@ -90,7 +98,6 @@ interface TilePass {
   tick: TileTick;
   play: Play;
   isMoving: boolean;
-  isEndNeeded: boolean;
   request: PassRequest;
 }
 
@@ -121,7 +128,7 @@ export function massPasses(chain: Uniformised, masses: readonly Float64Array[], 
   return inTiles(masses, (tile) => {
     const blocks = blocksOf(chain, 1);
     const play = { blocks, used: blocksOf(chain, 0), plan: planTile(chain, blocks) };
-    return passTile(chain, tile, { tick: tickMassTile, play, isMoving: true, isEndNeeded: true, request });
+    return passTile(chain, tile, { tick: tickMassTile, play, isMoving: true, request });
   });
 }
 
@@ -129,15 +136,9 @@ export function massPasses(chain: Uniformised, masses: readonly Float64Array[], 
 export function valuePasses(
   chain: Uniformised,
   values: readonly Float64Array[],
-  {
-    blocks = blocksOf(chain, 1),
-    isEndNeeded = true,
-    ...request
-  }: PassRequest & { blocks?: Blocks; isEndNeeded?: boolean },
+  { blocks = blocksOf(chain, 1), ...request }: PassRequest & { blocks?: Blocks },
 ): PassResult[] {
   if (request.days === 0 || chain.clock === 0) return standing(values, request, blocks);
   const play = { blocks, used: blocks, plan: planTile(chain, blocks) };
-  return inTiles(values, (tile) =>
-    passTile(chain, tile, { tick: tickValueTile, play, isMoving: false, isEndNeeded, request }),
-  );
+  return inTiles(values, (tile) => passTile(chain, tile, { tick: tickValueTile, play, isMoving: false, request }));
 }

@@ -50,14 +50,17 @@ export function planTile({ states, fans }: Uniformised, blocks: Blocks): TilePla
   return { runs: list, fans: parts };
 }
 
-/** A tile before and after a tick. */
+/** A tile before and after a tick, and the sum that the tile before it goes into, so often as `weight` says. */
 export interface TilePair {
   current: Float64Array;
   next: Float64Array;
+  sum: Float64Array;
+  weight: number;
 }
 
 /** One tick of four rows of masses. */
-export function tickMassTile({ stay, fromPrevious }: Uniformised, { current, next }: TilePair, plan: TilePlan): void {
+export function tickMassTile({ stay, fromPrevious }: Uniformised, pair: TilePair, plan: TilePlan): void {
+  const { current, next, sum, weight } = pair;
   for (const [first, end] of plan.runs) {
     let k = first * TILE;
     let a = first > 0 ? (current[k - 4] ?? 0) : 0;
@@ -75,6 +78,10 @@ export function tickMassTile({ stay, fromPrevious }: Uniformised, { current, nex
       next[k + 1] = x * here + b * from;
       next[k + 2] = y * here + c * from;
       next[k + 3] = z * here + d * from;
+      sum[k] = (sum[k] ?? 0) + weight * w;
+      sum[k + 1] = (sum[k + 1] ?? 0) + weight * x;
+      sum[k + 2] = (sum[k + 2] ?? 0) + weight * y;
+      sum[k + 3] = (sum[k + 3] ?? 0) + weight * z;
       a = w;
       b = x;
       c = y;
@@ -103,11 +110,8 @@ function gather(current: Float64Array, next: Float64Array, { from, to, target, g
 }
 
 /** One tick of four columns of values. */
-export function tickValueTile(
-  { states, stay, fromPrevious }: Uniformised,
-  { current, next }: TilePair,
-  plan: TilePlan,
-): void {
+export function tickValueTile({ states, stay, fromPrevious }: Uniformised, pair: TilePair, plan: TilePlan): void {
+  const { current, next, sum, weight } = pair;
   for (const [first, end] of plan.runs) {
     let k = (end - 1) * TILE;
     const isInside = end < states;
@@ -126,6 +130,10 @@ export function tickValueTile(
       next[k + 1] = x * here + b * share;
       next[k + 2] = y * here + c * share;
       next[k + 3] = z * here + d * share;
+      sum[k] = (sum[k] ?? 0) + weight * w;
+      sum[k + 1] = (sum[k + 1] ?? 0) + weight * x;
+      sum[k + 2] = (sum[k + 2] ?? 0) + weight * y;
+      sum[k + 3] = (sum[k + 3] ?? 0) + weight * z;
       a = w;
       b = x;
       c = y;
@@ -149,13 +157,9 @@ function spread(current: Float64Array, next: Float64Array, { from, to, target, g
   }
 }
 
-/** `sum += weight · tile`, in the runs of a plan. */
-export function addTile(
-  sum: Float64Array,
-  tile: Float64Array,
-  { weight, plan }: { weight: number; plan: TilePlan },
-): void {
+/** `sum += weight · current`, in the runs of a plan: the last tile of a pass. */
+export function addTile({ sum, weight, current }: TilePair, plan: TilePlan): void {
   for (const [first, end] of plan.runs) {
-    for (let k = first * TILE; k < end * TILE; k++) sum[k] = (sum[k] ?? 0) + weight * (tile[k] ?? 0);
+    for (let k = first * TILE; k < end * TILE; k++) sum[k] = (sum[k] ?? 0) + weight * (current[k] ?? 0);
   }
 }

@@ -72,7 +72,6 @@ function pass(segments: readonly Segment[], records: readonly BackwardRecord[], 
       days,
       watch: kind.gates.map((gate) => ({ gate, at })),
       weightsOf: kind.kernel.weightsOf,
-      isEndNeeded: i > 0,
       ...(kind.isWhole
         ? {
             blocks: neededBlocks(

@@ -73,10 +73,7 @@ export function futureOf(
 }
 
 /** The present brood: generations added up, living brood only. */
-export function presentBrood(
-  { states, eggState, broodSize, broodLiving }: BroodModel,
-  mass: Float64Array,
-): Float64Array {
+function presentBrood({ states, eggState, broodSize, broodLiving }: BroodModel, mass: Float64Array): Float64Array {
   return broodLiving.map((isLiving, s) => {
     let sum = 0;
     for (let g = 0; g < states.generations; g++) sum += mass[eggState + g * broodSize + s] ?? 0;

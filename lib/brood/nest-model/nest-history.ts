@@ -1,4 +1,5 @@
-import { cellKey } from '@/lib/comb/axial';
+import { cellKey, parseCellKey } from '@/lib/comb/axial';
+import { byWalkOrder } from '@/lib/comb/walk';
 import type { BroodReading } from '@/lib/brood/input';
 import { DAY_MS } from '@/lib/brood/date-range';
 import { type CellLooks, type Look, lookOf } from './cell-evidence';
@@ -62,7 +63,9 @@ export function nestHistory(readings: readonly BroodReading[]): NestHistory | nu
   const origin = visits[0]?.[0]?.at;
   if (origin === undefined) return null;
   const byCell = marksByCell(visits);
-  const looked = [...byCell].filter(([, { looks }]) => looks.some((atVisit) => atVisit.length > 0));
+  const looked = [...byCell]
+    .filter(([, { looks }]) => looks.some((atVisit) => atVisit.length > 0))
+    .sort(([a], [b]) => byWalkOrder(parseCellKey(a), parseCellKey(b)));
   const days = visits.map(([reading]) => ((reading?.at ?? origin) - origin) / DAY_MS);
   const counts = days.map((day, visit) => ({
     day,

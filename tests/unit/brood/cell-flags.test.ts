@@ -105,7 +105,7 @@ describe('surprising histories are explained, never refused', () => {
         [0, 'small'],
         [3, 'opened'],
       ]),
-    ).toEqual(['too-fast']);
+    ).toEqual(['too-fast', 'contradictory']);
     expect(
       codes([
         [0, 'egg'],

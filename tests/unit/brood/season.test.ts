@@ -23,7 +23,7 @@ describe('the season gate (programme default: amber in the last 7 days, red from
   });
 
   it('asks for the lead biologist when a capped nest is within three days', () => {
-    const seen = reading('2026-06-10T16:00:00Z', cellsOf({ capped: 2 }));
+    const seen = reading('2026-06-10T16:00:00Z', cellsOf({ capped: 1 }));
     const due = Date.parse(estimate([seen]).nest.firstEmergence?.utc.median ?? '');
     const codes = (days: number) => estimate([seen], { asOf: due - days * DAY_MS }).flags.map(({ code }) => code);
     expect(codes(3)).toEqual(['guard']);

@@ -9,7 +9,7 @@ export interface Shape {
 }
 
 /** Stages one after another as one chain of the core; the state after the last phase is "out". */
-export function stageRow(shapes: readonly Shape[]) {
+function stageRow(shapes: readonly Shape[]) {
   const rates = shapes.flatMap(({ phases, meanDays }) => Array<number>(phases).fill(phases / meanDays));
   const moves = rates.map((rate, i) => ({ source: i, target: i + 1, clock: 0, rate }));
   const chain = chainOf(transitions(rates.length + 1, 1, moves), [{ from: 0, speeds: [1] }]);
@@ -25,7 +25,7 @@ export function massesAt(shapes: readonly Shape[], days: number, start?: Float64
 }
 
 /** Phases `from` … `to − 1` as a sighting finds them when the egg may have been laid at any time: by time spent. */
-export function sighted(shapes: readonly Shape[], from: number, to: number): Float64Array {
+function sighted(shapes: readonly Shape[], from: number, to: number): Float64Array {
   const { rates } = stageRow(shapes);
   const days = rates.map((rate, i) => (i >= from && i < to ? 1 / rate : 0));
   const total = days.reduce((sum, x) => sum + x, 0);

@@ -10,6 +10,7 @@ import { futureOf } from '@/lib/brood/nest-model/cell-outlook';
 import { mixedGroup } from '@/lib/brood/nest-model/mixed-group';
 import { nestPosterior } from '@/lib/brood/nest-model/nest-posterior';
 import { timelineOf } from '@/lib/brood/nest-model/timeline';
+import { settingsWith } from '@/tests/unit/brood/support';
 import { type TrueCell, broodAt, classAt, recorded, simulateCell } from './simulate-cell';
 
 const LOOKS = [0, 7.3, 13.8, 21.1];
@@ -23,6 +24,10 @@ const CELLS = [
 const PRIOR_DAYS = 45;
 const SD = Math.sqrt(Math.log1p(0.2 ** 2));
 const calendar = () => 1;
+
+/** The long run takes the settings of the product; the short one fewer phases, which is the same code on fewer states. */
+const SETTINGS =
+  process.env.LONG === '1' ? DEFAULT_SETTINGS : settingsWith({ cvEgg: 0.25, cvInstar: 0.6, cvCapped: 0.25 });
 
 /** How a calibration is made: by which errors the records come about, and which ones the analysis believes in. */
 export interface Calibration {
@@ -63,23 +68,23 @@ function placeIn(law: TimeLaw | undefined, time: number | null | undefined): num
 }
 
 function looksAt(random: Random, cell: TrueCell, truth: Confusion): Look[][] {
-  const floor = DEFAULT_SETTINGS.values.slipFloor.value;
+  const floor = SETTINGS.values.slipFloor.value;
   return LOOKS.map((day) => {
-    const state = recorded(random, truth, classAt(cell, day), floor) as Look['state'];
+    const state = recorded(random, { confusion: truth, floor }, classAt(cell, day)) as Look['state'];
     return [{ state, instar: null, unsure: false, reused: false }];
   });
 }
 
 /** Draws a nest out of the priors, analyses its records, and compares with the truth. */
-export function calibrateOnce(random: Random, { truth, believed }: Calibration): Places {
+function calibrateOnce(random: Random, { truth, believed }: Calibration): Places {
   const rho = Math.exp(SD * normal(random));
-  const life = { row: GENUS_ROW, settings: DEFAULT_SETTINGS, rho };
+  const life = { row: GENUS_ROW, settings: SETTINGS, rho };
   const cells = CELLS.map((cell) => simulateCell(random, life, builtDay(random, cell)));
   const chosen = Math.floor(random() * cells.length);
   const brood = cells[chosen] ? broodAt(cells[chosen], LAST) : null;
   if (!brood) return { laid: null, capped: null };
-  const model = broodModel(GENUS_ROW, DEFAULT_SETTINGS, believed);
-  const floor = DEFAULT_SETTINGS.values.slipFloor.value;
+  const model = broodModel(GENUS_ROW, SETTINGS, believed);
+  const floor = SETTINGS.values.slipFloor.value;
   const groups = cells.flatMap((cell, i) => {
     const looks = looksAt(random, cell, truth);
     const prior = priors[i];

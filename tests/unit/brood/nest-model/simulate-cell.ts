@@ -97,7 +97,11 @@ export function broodAt({ broods }: TrueCell, time: number): TrueBrood | null {
 }
 
 /** Draws what a reader records of a true class. */
-export function recorded(random: Random, confusion: Confusion, className: string, floor: number): string {
+export function recorded(
+  random: Random,
+  { confusion, floor }: { confusion: Confusion; floor: number },
+  className: string,
+): string {
   if (random() < floor) return RECORDED_CLASSES[Math.floor(random() * RECORDED_CLASSES.length)] ?? 'empty';
   let left = random();
   for (const [seen, p] of Object.entries(confusion[className] ?? {})) {
