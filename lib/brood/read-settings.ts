@@ -105,7 +105,7 @@ function readFactor(value: unknown, field: string): DurationFactor {
  *
  * @throws FieldError naming the member.
  */
-export function readLearnt(given: Fields, field: string): Pick<BroodSettings, 'confusion' | 'durationFactors'> {
+function readLearnt(given: Fields, field: string): Pick<BroodSettings, 'confusion' | 'durationFactors'> {
   return {
     ...(given.confusion == null ? {} : { confusion: readConfusion(given.confusion, `${field}.confusion`) }),
     ...(given.durationFactors == null

@@ -25,6 +25,36 @@ function Standing({ invitation, zone, today }: { invitation: InvitationView } & 
   return expired ? <span className="text-warn">Ran out on {until}</span> : <span>Open until {until}</span>;
 }
 
+interface ActsProps {
+  invitation: InvitationView;
+  disabled: boolean;
+  onAgain: (invitation: InvitationView) => Promise<void>;
+}
+
+/** What can be done about an invitation. */
+function Acts({ invitation, disabled, onAgain }: ActsProps): ReactElement {
+  return (
+    <div className="flex flex-wrap justify-end gap-2">
+      <Button
+        aria-label={`Send again to ${invitation.email}`}
+        disabled={disabled}
+        onClick={() => void onAgain(invitation)}
+      >
+        Send again
+      </Button>
+      <ConfirmAct
+        words="Take back"
+        label={`Take back the invitation of ${invitation.email}`}
+        title="Take this invitation back?"
+        act="Take it back"
+        path={`/api/invitations/${invitation.id}/withdraw`}
+      >
+        <p>The link in the letter to {invitation.email} stops working at once.</p>
+      </ConfirmAct>
+    </div>
+  );
+}
+
 /** Who is asked to join and has not answered; each can be asked again or no longer. */
 export function InvitationsTable({ invitations, ...time }: InvitationsTableProps): ReactElement {
   const [news, setNews] = useState<string | null>(null);
@@ -62,24 +92,7 @@ export function InvitationsTable({ invitations, ...time }: InvitationsTableProps
                 <Standing invitation={invitation} {...time} />
               </BodyCell>
               <BodyCell>
-                <div className="flex flex-wrap justify-end gap-2">
-                  <Button
-                    aria-label={`Send again to ${invitation.email}`}
-                    disabled={isSending}
-                    onClick={() => void again(invitation)}
-                  >
-                    Send again
-                  </Button>
-                  <ConfirmAct
-                    words="Take back"
-                    label={`Take back the invitation of ${invitation.email}`}
-                    title="Take this invitation back?"
-                    act="Take it back"
-                    path={`/api/invitations/${invitation.id}/withdraw`}
-                  >
-                    <p>The link in the letter to {invitation.email} stops working at once.</p>
-                  </ConfirmAct>
-                </div>
+                <Acts invitation={invitation} disabled={isSending} onAgain={again} />
               </BodyCell>
             </tr>
           ))}

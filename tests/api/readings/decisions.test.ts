@@ -256,7 +256,7 @@ describe('lock and amend', () => {
       settle(team.members.biologist, id, cells('medium')),
       settle(team.members.reviewer2, id, cells('large')),
     ]);
-    expect(answers.map(({ status }) => status).sort()).toEqual([200, 409, 409]);
+    expect(answers.map(({ status }) => status).sort((a, b) => a - b)).toEqual([200, 409, 409]);
     const refused = await Promise.all(answers.filter(({ status }) => status === 409).map(problemOf));
     expect(refused).toEqual([
       [409, 'settled-meanwhile'],
