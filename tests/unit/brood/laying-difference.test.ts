@@ -22,9 +22,10 @@ describe('two readings compared in time', () => {
     const { cells, byCell, medianDays, largestDays } = layingDifference(first, second);
     expect(cells).toBe(2);
     expect(byCell['0,0']).toBeLessThan(-10);
-    expect(byCell['1,0']).toBe(0);
+    // Read alike, but the neighbour tells a little about how fast the whole nest is.
+    expect(Math.abs(byCell['1,0'] ?? 9)).toBeLessThan(0.1);
     expect(largestDays).toBe(Math.abs(byCell['0,0'] ?? 0));
-    expect(medianDays).toBe((largestDays ?? 0) / 2);
+    expect(medianDays).toBeCloseTo((largestDays ?? 0) / 2, 1);
   });
 
   it('have no difference where nothing is dated by both', () => {

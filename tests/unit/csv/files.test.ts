@@ -1,9 +1,11 @@
 import { describe, expect, it } from 'vitest';
 import { CELL_STATES } from '@/lib/comb/states';
 import { emptyTally } from '@/lib/comb/tally';
+import { AGREEMENT_FILE } from '@/lib/csv/agreement-file';
 import { CELLS_FILE, type CellRow } from '@/lib/csv/cells-file';
 import { DICTIONARY_FILE, dictionaryRows } from '@/lib/csv/dictionary-file';
 import { NESTS_FILE } from '@/lib/csv/nests-file';
+import { SETTLEMENTS_FILE } from '@/lib/csv/settlements-file';
 import { TALLIES_FILE, type TallyRow } from '@/lib/csv/tallies-file';
 import { VISITS_FILE } from '@/lib/csv/visits-file';
 import { writeHeader, writeRow } from '@/lib/csv/write-row';
@@ -33,7 +35,7 @@ const CELL: CellRow = {
   settledFrom: null,
 };
 
-const FILES = [NESTS_FILE, VISITS_FILE, TALLIES_FILE, CELLS_FILE, DICTIONARY_FILE];
+const FILES = [NESTS_FILE, VISITS_FILE, TALLIES_FILE, CELLS_FILE, SETTLEMENTS_FILE, AGREEMENT_FILE, DICTIONARY_FILE];
 
 describe('column registries', () => {
   it.each([
@@ -80,7 +82,17 @@ describe('column registries', () => {
     const free = FILES.flatMap((file) =>
       file.columns.filter((column) => column.type === 'free text').map((c) => c.name),
     );
-    expect([...new Set(free)].sort()).toEqual(['name', 'nest', 'observer', 'taxon', 'team']);
+    expect([...new Set(free)].sort()).toEqual([
+      'first_observer',
+      'name',
+      'nest',
+      'observer',
+      'reason',
+      'second_observer',
+      'settled_by',
+      'taxon',
+      'team',
+    ]);
   });
 });
 
