@@ -8,7 +8,7 @@ import { callApi, problemOf } from '@/tests/support/factories/call-api';
 import { makeNest, makeVisit } from '@/tests/support/factories/make-nest';
 import { makeReading } from '@/tests/support/factories/make-reading';
 import { type TestTeam, makeTeam } from '@/tests/support/factories/make-team';
-import { n12Marks } from '@/tests/support/n12';
+import { N12, n12Marks } from '@/tests/support/n12';
 import { readZip } from '@/tests/support/zip/read-zip';
 
 const SETTLEMENT_HEADER =
@@ -26,23 +26,30 @@ async function makeN12(team: TestTeam, code = 'N12') {
   return { nest, visit, field, blind };
 }
 
+/** The four cells in which the two readings of N12 differ, as they were settled. */
+const N12_DECISIONS = N12.filter(({ field, blind }) => field !== blind).map(({ cell, q, r, final }) => ({
+  q,
+  r,
+  state: final,
+  reason: cell === 6 ? '=a pierced cap' : 'The photo shows it.',
+}));
+
 let team: TestTeam;
 
 beforeAll(async () => {
   team = await makeTeam();
   const { field } = await makeN12(team);
-  await settle(team.members.biologist, field, [
-    { q: -1, r: 0, state: 'parasitised', reason: '=a pierced cap' },
-    { q: -3, r: 2, state: 'egg' },
-  ]);
-  await lock(team.members.biologist, field);
+  await decided(await settle(team.members.biologist, field, N12_DECISIONS));
+  await decided(await lock(team.members.biologist, field));
 });
 
 describe('settlements.csv', () => {
   it('holds each decision with both states before it, the reason and the version', async () => {
     const text = await downloaded(team.members.coordinator, 'settlements.csv');
     expect(text.split('\r\n')[0]).toBe(SETTLEMENT_HEADER);
-    expect(csvObjects(text)).toMatchObject([
+    const rows = csvObjects(text);
+    expect(rows.map(({ cell }) => cell)).toEqual(['6', '13', '17', '32']);
+    expect([rows[0], rows[3]]).toMatchObject([
       {
         cell: '6',
         field_state: 'parasitised',
@@ -59,7 +66,9 @@ describe('settlements.csv', () => {
 
   it('holds what was locked while a new version is worked on', async () => {
     const own = await makeTeam();
-    const { field } = await makeN12(own);
+    const nest = await makeNest(own);
+    const visit = await makeVisit(own, nest);
+    const field = await makeReading(own, { nest, visit, marks: n12Marks('field') });
     await settle(own.members.reviewer, field, [{ q: 0, r: 0, state: 'dead' }]);
     await lock(own.members.reviewer, field);
     await amend(own.members.reviewer, field);
@@ -100,7 +109,8 @@ describe('agreement.csv', () => {
       openedAt: '2026-07-02T09:00:00.000-04:00',
     });
     await makeReading(own, { ...late, kind: 'second', by: reviewer.userId, openedAt: '2026-07-03T09:00:00.000-04:00' });
-    await lock(own.members.biologist, field);
+    await decided(await settle(own.members.biologist, field, N12_DECISIONS));
+    await decided(await lock(own.members.biologist, field));
     const rows = csvObjects(await downloaded(own.members.reviewer, 'agreement.csv'));
     expect(rows.map((row) => [row.comparison, row.first_reading, row.second_observer])).toEqual([
       ['field-field', field, 'Another technician'],

@@ -15,7 +15,7 @@ import type { LearningAnswer } from '@/lib/server/queries/settings/learning';
 import type { SettingsAnswer } from '@/lib/server/queries/settings/settings-answer';
 import type { SettingsImpact } from '@/lib/server/queries/settings/settings-impact';
 import type { MethodHandlers } from '@/lib/server/http/methods';
-import { lock } from '@/tests/support/api/decide';
+import { decided, lock, settle } from '@/tests/support/api/decide';
 import { type ApiCall, callApi, problemOf } from '@/tests/support/factories/call-api';
 import { makeNest, makeVisit } from '@/tests/support/factories/make-nest';
 import { makeReading } from '@/tests/support/factories/make-reading';
@@ -188,7 +188,8 @@ describe('what the team’s own readings say', () => {
       const field = await makeReading(own, { nest, visit, marks: [{ q: 0, r: 0, state }] });
       if (i > 0) continue;
       await makeReading(own, { nest, visit, kind: 'second', marks: [{ q: 0, r: 0, state: 'empty' }] });
-      await lock(own.members.biologist, field);
+      await decided(await settle(own.members.biologist, field, [{ q: 0, r: 0, state: 'egg' }]));
+      await decided(await lock(own.members.biologist, field));
     }
     const before = (await broodOf(nest, own)).inputDigest;
     const answer = await lead<LearningAnswer>(learningRoute, {}, own);
