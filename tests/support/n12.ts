@@ -43,6 +43,12 @@ export function n12Marks(reading: 'field' | 'blind' | 'final'): MarkInput[] {
   return N12.map((cell) => ({ q: cell.q, r: cell.r, state: cell[reading] }));
 }
 
+/** The four cells in which the two readings of N12 differ, as they were settled, in walk order. */
+export function n12Decisions(reasonFor: (cell: number) => string = () => 'The photo shows it.') {
+  const different = N12.filter(({ field, blind }) => field !== blind);
+  return different.map(({ cell, q, r, final }) => ({ q, r, state: final, reason: reasonFor(cell) }));
+}
+
 /** Counts of a reading in the order of the states, for comparing with what was counted by hand. */
 export function n12Counts(counts: Partial<Record<CellState, number>>): Record<CellState, number> {
   return Object.fromEntries(CELL_STATES.map((state) => [state, counts[state] ?? 0])) as Record<CellState, number>;

@@ -8,7 +8,7 @@ import { callApi, problemOf } from '@/tests/support/factories/call-api';
 import { makeNest, makeVisit } from '@/tests/support/factories/make-nest';
 import { makeReading } from '@/tests/support/factories/make-reading';
 import { type TestTeam, makeTeam } from '@/tests/support/factories/make-team';
-import { N12, n12Marks } from '@/tests/support/n12';
+import { n12Decisions, n12Marks } from '@/tests/support/n12';
 import { readZip } from '@/tests/support/zip/read-zip';
 
 const SETTLEMENT_HEADER =
@@ -26,13 +26,7 @@ async function makeN12(team: TestTeam, code = 'N12') {
   return { nest, visit, field, blind };
 }
 
-/** The four cells in which the two readings of N12 differ, as they were settled. */
-const N12_DECISIONS = N12.filter(({ field, blind }) => field !== blind).map(({ cell, q, r, final }) => ({
-  q,
-  r,
-  state: final,
-  reason: cell === 6 ? '=a pierced cap' : 'The photo shows it.',
-}));
+const N12_DECISIONS = n12Decisions((cell) => (cell === 6 ? '=a pierced cap' : 'The photo shows it.'));
 
 let team: TestTeam;
 

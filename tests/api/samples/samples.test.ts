@@ -26,8 +26,9 @@ const draw = (as: TestMember | null, body: unknown) => callApi(samplesRoute, 'PO
 async function lockedNest(code: string) {
   const nest = await makeNest(team, { code });
   const visit = await makeVisit(team, nest);
-  const id = await makeReading(team, { nest, visit, marks: n12Marks('field').slice(0, 3) });
-  await makeReading(team, { nest, visit, kind: 'second', openedAt: '2026-06-18T10:00:00.000-04:00' });
+  const marks = n12Marks('field').slice(0, 3);
+  const id = await makeReading(team, { nest, visit, marks });
+  await makeReading(team, { nest, visit, kind: 'second', marks, openedAt: '2026-06-18T10:00:00.000-04:00' });
   await lockReading(await contextOf(team.members.biologist), { id }, LOCKED_MS);
   return { nest, visit };
 }

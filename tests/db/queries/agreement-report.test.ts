@@ -6,7 +6,7 @@ import { agreementReport } from '@/lib/server/queries/agreement-report';
 import { makeNest, makeVisit } from '@/tests/support/factories/make-nest';
 import { makeReading } from '@/tests/support/factories/make-reading';
 import { type TestMember, type TestTeam, makeTeam } from '@/tests/support/factories/make-team';
-import { n12Marks } from '@/tests/support/n12';
+import { n12Decisions, n12Marks } from '@/tests/support/n12';
 
 const NOW_MS = Date.parse('2026-12-01T12:00:00Z');
 const DECIDED_MS = Date.parse('2026-06-22T09:15:00-04:00');
@@ -27,11 +27,7 @@ beforeAll(async () => {
   const field = await makeReading(team, { nest, visit, marks: n12Marks('field') });
   await makeReading(team, { nest, visit, kind: 'second', marks: n12Marks('blind') });
   const ctx = await memberContext(team.teamId, biologist.userId);
-  await settleReading(
-    ctx,
-    { id: field, cells: [{ q: -3, r: 2, state: 'egg', reason: 'On the upper wall.' }] },
-    DECIDED_MS,
-  );
+  await settleReading(ctx, { id: field, cells: n12Decisions() }, DECIDED_MS);
   await lockReading(ctx, { id: field }, DECIDED_MS);
   const other = await makeNest(team, { code: 'N13' });
   const july = await makeVisit(team, other, { startedAt: '2026-07-31T23:30:00.000-04:00' });
@@ -69,7 +65,7 @@ describe('the report on agreement', () => {
     const { readers, notes } = await report(team.members.technician);
     expect(readers.map(({ reader }) => reader)).toEqual(['The technician']);
     expect(notes.map(({ name, own, stood, cells }) => [name, own, stood, cells])).toEqual([
-      ['The technician', true, 32, 33],
+      ['The technician', true, 31, 33],
     ]);
     expect(notes[0]?.notes[0]?.words).toMatch(/^You read 1 of 10 eggs as empty\. Tilt the light/);
   });
