@@ -67,7 +67,10 @@ describe('the report on agreement', () => {
     expect(notes.map(({ name, own, stood, cells }) => [name, own, stood, cells])).toEqual([
       ['The technician', true, 31, 33],
     ]);
-    expect(notes[0]?.notes[0]?.words).toMatch(/^You read 1 of 10 eggs as empty\. Tilt the light/);
+    expect(notes[0]?.notes.map(({ words }) => words)).toEqual([
+      expect.stringMatching(/^You read 1 of 7 large larvae as medium larva\./),
+      expect.stringMatching(/^You read 1 of 10 eggs as empty\. Tilt the light/),
+    ]);
   });
 
   it('shows notes of others to the lead biologist and not to a reviewer', async () => {
