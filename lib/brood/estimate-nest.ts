@@ -122,6 +122,11 @@ function frontMatter(input: BroodInput, { settings, choice, readings, clock }: P
   };
 }
 
+/** The digest an estimate of this input carries, without making it; the digest function of the input shortens it. */
+export function estimateDigest(input: BroodInput): string {
+  return digestOf(input, prepared(input));
+}
+
 /**
  * Estimates when the brood of a nest was laid, is capped and comes out, from what the cells were seen to hold.
  *

@@ -1,7 +1,6 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
 import type { BroodEstimate } from '@/lib/brood/answer';
-import { estimateNest } from '@/lib/brood/estimate-nest';
 import type { BroodReading } from '@/lib/brood/input';
 import { groupBy } from '@/lib/kit/group-by';
 import type { TeamContext } from '@/lib/server/auth/team-context';
@@ -9,6 +8,7 @@ import { fromBinary } from '@/lib/server/db/uuid-binary';
 import { blindVisits, isHidden } from './blind-visits';
 import { teamBroodSettings } from './brood-settings';
 import { censusOf } from './census';
+import { estimateAtHand } from './estimate-at-hand';
 import { idKey } from './id-key';
 import { type NestRow, nestById, visitsOfNests } from './nest-rows';
 import { readingCells } from './reading-cells';
@@ -87,5 +87,5 @@ export async function nestBrood(ctx: TeamContext, id: string, asOf: number): Pro
   const nest = await nestById(scope, id);
   const { version, settings } = await teamBroodSettings(scope);
   const input = await broodInput(scope, nest, { zone: ctx.zone, asOf });
-  return { estimate: estimateNest({ ...input, settings }), settingsVersion: version };
+  return { estimate: estimateAtHand(scope, { ...input, settings }), settingsVersion: version };
 }

@@ -1,6 +1,6 @@
 import 'server-only';
 import { Op } from 'sequelize';
-import { estimateNest } from '@/lib/brood/estimate-nest';
+import { estimateAtHand } from '@/lib/server/queries/estimate-at-hand';
 import type { BroodSettings } from '@/lib/brood/settings';
 import { type DateShift, dateShifts } from '@/lib/brood/team-settings/date-shift';
 import type { Clock } from '@/lib/kit/clock';
@@ -60,7 +60,7 @@ async function nestsAfter({ team, db }: TeamScope, after: string | undefined): P
 
 async function shiftOf(nest: NestRow, { scope, before, after, zone, asOf }: Comparison): Promise<NestShift> {
   const input = await broodInput(scope, nest, { zone, asOf });
-  const estimates = [before, after].map((settings) => estimateNest({ ...input, settings }));
+  const estimates = [before, after].map((settings) => estimateAtHand(scope, { ...input, settings }));
   const [was, is] = estimates;
   if (!was || !is) throw new Error('two settings give two estimates');
   return { id: fromBinary(nest.id), code: nest.code, ...dateShifts(was, is) };
