@@ -23,14 +23,19 @@ export interface BackwardRecord {
   used: readonly Blocks[];
 }
 
-/** Values divided by the largest, and the logarithm of that. */
-function scaled(values: Float64Array): { values: Float64Array; log: number } {
-  const most = values.reduce((a, b) => Math.max(a, b), 0);
-  return most > 0 ? { values: values.map((v) => v / most), log: Math.log(most) } : { values, log: 0 };
-}
-
-function weighed(values: Float64Array, likelihood: Float64Array | null | undefined, offset: number): Float64Array {
-  return likelihood ? values.map((v, s) => v * (likelihood[s + offset] ?? 0)) : values;
+/** Values weighed by what was seen and divided by the largest of them, and the logarithm of that. */
+function weighed(value: Float64Array, likelihood: Float64Array | null | undefined, offset: number) {
+  const values = new Float64Array(value.length);
+  let most = 0;
+  for (let s = 0; s < values.length; s++) {
+    const weight = likelihood ? (likelihood[s + offset] ?? 0) : 1;
+    const v = (value[s] ?? 0) * weight;
+    values[s] = v;
+    if (v > most) most = v;
+  }
+  if (!(most > 0)) return { values, log: 0 };
+  for (let s = 0; s < values.length; s++) values[s] = (values[s] ?? 0) / most;
+  return { values, log: Math.log(most) };
 }
 
 /** One kind of backward pass. */
@@ -63,7 +68,7 @@ function pass(segments: readonly Segment[], records: readonly BackwardRecord[], 
     const chain = kind.chain(rate);
     const starts = open.map((walk) => {
       const seen = look === null ? null : walk.record.seen[look];
-      const start = scaled(weighed(walk.value, seen, kind.offset));
+      const start = weighed(walk.value, seen, kind.offset);
       walk.log += start.log;
       return start.values;
     });
