@@ -50,3 +50,13 @@ export function poissonMean(sequence: Float64Array, { first, weights }: PoissonW
   for (let i = within; i < weights.length; i++) mass += weights[i] ?? 0;
   return sum + mass * (sequence[last] ?? 0);
 }
+
+/** Averages a sequence over each of several Poisson laws. */
+export function poissonMeans(sequence: Float64Array, laws: readonly PoissonWeights[]): Float64Array {
+  const means = new Float64Array(laws.length);
+  for (let i = 0; i < means.length; i++) {
+    const law = laws[i];
+    if (law) means[i] = poissonMean(sequence, law);
+  }
+  return means;
+}

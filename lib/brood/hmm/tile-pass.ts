@@ -1,4 +1,4 @@
-import { poissonMean, poissonWeights } from '@/lib/brood/poisson';
+import { poissonMeans, poissonWeights } from '@/lib/brood/poisson';
 import type { PassRequest, PassResult } from './power-pass';
 import {
   TILE,
@@ -27,12 +27,14 @@ function follow(chain: Uniformised, play: Play, { pair, least }: { pair: TilePai
   const held = play.blocks.slice();
   heldBlocks(pair.current, held, { least, width: TILE });
   const reach = reachFrom(chain, held);
-  play.blocks.forEach((was, b) => {
-    if (was === 1 && reach[b] === 0) pair.next.fill(0, b * BLOCK * TILE, (b + 1) * BLOCK * TILE);
-  });
-  reach.forEach((is, b) => {
-    if (is === 1) play.used[b] = 1;
-  });
+  let isChanged = false;
+  for (let b = 0; b < reach.length; b++) {
+    if (reach[b] === 1) play.used[b] = 1;
+    if (reach[b] === play.blocks[b]) continue;
+    isChanged = true;
+    if (reach[b] === 0) pair.next.fill(0, b * BLOCK * TILE, (b + 1) * BLOCK * TILE);
+  }
+  if (!isChanged) return;
   play.plan = planTile(chain, reach);
   play.blocks = reach;
 }
@@ -44,10 +46,14 @@ function noteWatched(
   { n, tile }: { n: number; tile: Float64Array },
 ): void {
   for (let i = 0; i < watch.length; i++) {
+    const gate = watch[i]?.gate ?? [];
     for (let c = 0; c < TILE; c++) {
       const sequence = sequences[i * TILE + c];
       let sum = 0;
-      for (const [state, weight] of watch[i]?.gate ?? []) sum += weight * (tile[state * TILE + c] ?? 0);
+      for (let g = 0; g < gate.length; g++) {
+        const part = gate[g];
+        if (part) sum += part[1] * (tile[part[0] * TILE + c] ?? 0);
+      }
       if (sequence) sequence[n] = sum;
     }
   }
@@ -84,12 +90,10 @@ function passTile(
     tick(chain, pair, play.plan);
     [pair.current, pair.next] = [pair.next, pair.current];
   }
+  const laws = watch.map(({ at }) => Array.from(at, (time) => weightsOf(chain.clock * time)));
   return vectors.map((_, c) => ({
     end: column(end, c),
-    watched: watch.map(({ at }, i) => {
-      const sequence = sequences[i * TILE + c] ?? end;
-      return Float64Array.from(at, (time) => poissonMean(sequence, weightsOf(chain.clock * time)));
-    }),
+    watched: watch.map((_, i) => poissonMeans(sequences[i * TILE + c] ?? end, laws[i] ?? [])),
     used: play.used,
   }));
 }

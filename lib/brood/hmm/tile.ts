@@ -59,8 +59,10 @@ export interface TilePair {
 }
 
 /** One tick of four rows of masses. */
-export function tickMassTile({ stay, fromPrevious }: Uniformised, pair: TilePair, plan: TilePlan): void {
-  const { current, next, sum, weight } = pair;
+export function tickMassTile(chain: Uniformised, pair: TilePair, plan: TilePlan): void {
+  if (pair.weight > 0) addTile(pair, plan);
+  const { stay, fromPrevious } = chain;
+  const { current, next } = pair;
   for (const [first, end] of plan.runs) {
     let k = first * TILE;
     let a = first > 0 ? (current[k - 4] ?? 0) : 0;
@@ -78,17 +80,13 @@ export function tickMassTile({ stay, fromPrevious }: Uniformised, pair: TilePair
       next[k + 1] = x * here + b * from;
       next[k + 2] = y * here + c * from;
       next[k + 3] = z * here + d * from;
-      sum[k] = (sum[k] ?? 0) + weight * w;
-      sum[k + 1] = (sum[k + 1] ?? 0) + weight * x;
-      sum[k + 2] = (sum[k + 2] ?? 0) + weight * y;
-      sum[k + 3] = (sum[k + 3] ?? 0) + weight * z;
       a = w;
       b = x;
       c = y;
       d = z;
     }
   }
-  for (const { from, to, target, go } of plan.fans) gather(current, next, { from, to, target, go });
+  for (const fan of plan.fans) gather(current, next, fan);
 }
 
 function gather(current: Float64Array, next: Float64Array, { from, to, target, go }: TilePlan['fans'][number]): void {
@@ -110,8 +108,10 @@ function gather(current: Float64Array, next: Float64Array, { from, to, target, g
 }
 
 /** One tick of four columns of values. */
-export function tickValueTile({ states, stay, fromPrevious }: Uniformised, pair: TilePair, plan: TilePlan): void {
-  const { current, next, sum, weight } = pair;
+export function tickValueTile(chain: Uniformised, pair: TilePair, plan: TilePlan): void {
+  if (pair.weight > 0) addTile(pair, plan);
+  const { states, stay, fromPrevious } = chain;
+  const { current, next } = pair;
   for (const [first, end] of plan.runs) {
     let k = (end - 1) * TILE;
     const isInside = end < states;
@@ -130,10 +130,6 @@ export function tickValueTile({ states, stay, fromPrevious }: Uniformised, pair:
       next[k + 1] = x * here + b * share;
       next[k + 2] = y * here + c * share;
       next[k + 3] = z * here + d * share;
-      sum[k] = (sum[k] ?? 0) + weight * w;
-      sum[k + 1] = (sum[k + 1] ?? 0) + weight * x;
-      sum[k + 2] = (sum[k + 2] ?? 0) + weight * y;
-      sum[k + 3] = (sum[k + 3] ?? 0) + weight * z;
       a = w;
       b = x;
       c = y;
@@ -141,7 +137,7 @@ export function tickValueTile({ states, stay, fromPrevious }: Uniformised, pair:
       share = fromPrevious[s] ?? 0;
     }
   }
-  for (const { from, to, target, go } of plan.fans) spread(current, next, { from, to, target, go });
+  for (const fan of plan.fans) spread(current, next, fan);
 }
 
 function spread(current: Float64Array, next: Float64Array, { from, to, target, go }: TilePlan['fans'][number]): void {
@@ -157,9 +153,10 @@ function spread(current: Float64Array, next: Float64Array, { from, to, target, g
   }
 }
 
-/** `sum += weight · current`, in the runs of a plan: the last tile of a pass. */
+/** `sum += weight · current`, in the runs of a plan. */
 export function addTile({ sum, weight, current }: TilePair, plan: TilePlan): void {
   for (const [first, end] of plan.runs) {
-    for (let k = first * TILE; k < end * TILE; k++) sum[k] = (sum[k] ?? 0) + weight * (current[k] ?? 0);
+    const stop = end * TILE;
+    for (let k = first * TILE; k < stop; k++) sum[k] = (sum[k] ?? 0) + weight * (current[k] ?? 0);
   }
 }

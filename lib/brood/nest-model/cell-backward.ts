@@ -1,6 +1,8 @@
 import type { Gate } from '@/lib/brood/hmm/power-pass';
+import { TILE } from '@/lib/brood/hmm/tile';
 import { valuePasses } from '@/lib/brood/hmm/tile-pass';
 import { type Blocks, type Uniformised, blocksOf, joinBlocks } from '@/lib/brood/hmm/uniformised';
+import { firstSegmentValues } from './first-segment';
 import type { NestKernel } from './nest-kernel';
 import type { Segment } from './timeline';
 
@@ -23,14 +25,19 @@ export interface BackwardRecord {
   used: readonly Blocks[];
 }
 
-/** Values divided by the largest, and the logarithm of that. */
-function scaled(values: Float64Array): { values: Float64Array; log: number } {
-  const most = values.reduce((a, b) => Math.max(a, b), 0);
-  return most > 0 ? { values: values.map((v) => v / most), log: Math.log(most) } : { values, log: 0 };
-}
-
-function weighed(values: Float64Array, likelihood: Float64Array | null | undefined, offset: number): Float64Array {
-  return likelihood ? values.map((v, s) => v * (likelihood[s + offset] ?? 0)) : values;
+/** Values weighed by what was seen and divided by the largest of them, and the logarithm of that. */
+function weighed(value: Float64Array, likelihood: Float64Array | null | undefined, offset: number) {
+  const values = new Float64Array(value.length);
+  let most = 0;
+  for (let s = 0; s < values.length; s++) {
+    const weight = likelihood ? (likelihood[s + offset] ?? 0) : 1;
+    const v = (value[s] ?? 0) * weight;
+    values[s] = v;
+    if (v > most) most = v;
+  }
+  if (!(most > 0)) return { values, log: 0 };
+  for (let s = 0; s < values.length; s++) values[s] = (values[s] ?? 0) / most;
+  return { values, log: Math.log(most) };
 }
 
 /** One kind of backward pass. */
@@ -44,50 +51,63 @@ interface PassKind {
   isWhole: boolean;
 }
 
-/** The blocks that the records need in a segment, all together. */
-function neededBlocks(records: readonly BackwardRecord[], segment: number, chain: Uniformised): Blocks {
-  const blocks = blocksOf(chain, 0);
-  for (const { used } of records) joinBlocks(blocks, used[segment] ?? blocks);
-  return blocks;
+/** What a pass says of one segment of one record; of the first one only the values at its end. */
+interface Watched {
+  log: number;
+  watched: Float64Array[];
+  end: Float64Array;
 }
 
-/** What a pass says of one segment of one record. */
-type Watched = { log: number; watched: Float64Array[] };
+/** A record on its way back. */
+interface Walk {
+  record: BackwardRecord;
+  value: Float64Array;
+  log: number;
+  parts: Watched[];
+}
 
-/** Follows records through all segments, last first, side by side; each begins at its own last look. */
+/** Takes the look at the end of a segment into account. */
+function weighLook(walk: Walk, { look }: Segment, offset: number): Float64Array {
+  const start = weighed(walk.value, look === null ? null : walk.record.seen[look], offset);
+  walk.log += start.log;
+  return start.values;
+}
+
+/** One segment of some records side by side. */
+function passTile(walks: readonly Walk[], { segment, i }: { segment: Segment; i: number }, kind: PassKind): void {
+  const { days, steps, rate } = segment;
+  const chain = kind.chain(rate);
+  const starts = walks.map((walk) => weighLook(walk, segment, kind.offset));
+  const at = Float64Array.from({ length: steps }, (_, k) => days - ((k + 0.5) * days) / steps);
+  const blocks = blocksOf(chain, kind.isWhole ? 0 : 1);
+  if (kind.isWhole) for (const { record } of walks) joinBlocks(blocks, record.used[i] ?? blocks);
+  const results = valuePasses(chain, starts, {
+    days,
+    watch: kind.gates.map((gate) => ({ gate, at })),
+    weightsOf: kind.kernel.weightsOf,
+    blocks,
+  });
+  walks.forEach((walk, k) => {
+    const { end, watched } = results[k] ?? { end: walk.value, watched: [] };
+    walk.value = end;
+    walk.parts.unshift({ log: walk.log, watched, end });
+  });
+}
+
+/** Follows records back to the end of the first segment, side by side; each begins at its own last look. */
 function pass(segments: readonly Segment[], records: readonly BackwardRecord[], kind: PassKind): Watched[][] {
-  const walks = records.map((record) => ({ record, value: kind.terminal, log: 0, parts: [] as Watched[] }));
-  for (const [i, segment] of [...segments.entries()].reverse()) {
+  const walks = records.map((record): Walk => ({ record, value: kind.terminal, log: 0, parts: [] }));
+  for (let i = segments.length - 1; i > 0; i--) {
+    const segment = segments[i];
     const open = walks.filter(({ record }) => i < record.used.length);
-    const { days, steps, rate, look } = segment;
-    const chain = kind.chain(rate);
-    const starts = open.map((walk) => {
-      const seen = look === null ? null : walk.record.seen[look];
-      const start = scaled(weighed(walk.value, seen, kind.offset));
-      walk.log += start.log;
-      return start.values;
-    });
-    const at = Float64Array.from({ length: steps }, (_, k) => days - ((k + 0.5) * days) / steps);
-    const results = valuePasses(chain, starts, {
-      days,
-      watch: kind.gates.map((gate) => ({ gate, at })),
-      weightsOf: kind.kernel.weightsOf,
-      ...(kind.isWhole
-        ? {
-            blocks: neededBlocks(
-              open.map(({ record }) => record),
-              i,
-              chain,
-            ),
-          }
-        : {}),
-    });
-    open.forEach((walk, k) => {
-      walk.value = results[k]?.end ?? walk.value;
-      walk.parts.unshift({ log: walk.log, watched: results[k]?.watched ?? [] });
-    });
+    for (let from = 0; segment && from < open.length; from += TILE)
+      passTile(open.slice(from, from + TILE), { segment, i }, kind);
   }
-  return walks.map(({ parts }) => parts);
+  const [first] = segments;
+  return walks.map((walk) => {
+    const end = first ? weighLook(walk, first, kind.offset) : walk.value;
+    return [{ log: walk.log, watched: [], end }, ...walk.parts];
+  });
 }
 
 /** Follows records backward: for the cell as a whole, and for the one brood that is alive at the end. */
@@ -113,13 +133,15 @@ export function backwardCells(
     offset: model.eggState,
     isWhole: false,
   });
-  return records.map(({ used }, r) =>
-    used.map((_, i) => ({
-      firstEgg: whole[r]?.[i]?.watched[0] ?? new Float64Array(0),
-      firstLog: whole[r]?.[i]?.log ?? 0,
-      presentEgg: present[r]?.[i]?.watched[0] ?? new Float64Array(0),
-      presentCapped: present[r]?.[i]?.watched[1] ?? new Float64Array(0),
-      presentLog: present[r]?.[i]?.log ?? 0,
-    })),
-  );
+  const none = new Float64Array(0);
+  const joined = (r: number, i: number): BackwardPart => {
+    const [all, brood] = [whole[r]?.[i], present[r]?.[i]];
+    const logs = { firstLog: all?.log ?? 0, presentLog: brood?.log ?? 0 };
+    const [segment] = segments;
+    if (i === 0 && segment && all && brood)
+      return { ...firstSegmentValues(kernel, segment, { whole: all.end, present: brood.end }), ...logs };
+    const [presentEgg = none, presentCapped = none] = brood?.watched ?? [];
+    return { firstEgg: all?.watched[0] ?? none, presentEgg, presentCapped, ...logs };
+  };
+  return records.map(({ used }, r) => used.map((_, i) => joined(r, i)));
 }

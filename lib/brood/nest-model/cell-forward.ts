@@ -99,11 +99,17 @@ function moveOn(
 
 /** Takes a look into account; null when nothing can explain it. */
 function take(standing: Standing, likelihood: Float64Array, absent: number): Standing | null {
-  const mass = standing.mass.map((p, s) => p * (likelihood[s] ?? 0));
+  const mass = new Float64Array(standing.mass.length);
   const unbuilt = standing.unbuilt * (likelihood[NOT_BUILT] ?? 0);
-  const total = mass.reduce((sum, p) => sum + p, 0) + unbuilt * absent;
+  let total = unbuilt * absent;
+  for (let s = 0; s < mass.length; s++) {
+    const seen = (standing.mass[s] ?? 0) * (likelihood[s] ?? 0);
+    mass[s] = seen;
+    total += seen;
+  }
   if (!(total > 0)) return null;
-  return { mass: mass.map((p) => p / total), unbuilt: unbuilt / total, log: standing.log + Math.log(total) };
+  for (let s = 0; s < mass.length; s++) mass[s] = (mass[s] ?? 0) / total;
+  return { mass, unbuilt: unbuilt / total, log: standing.log + Math.log(total) };
 }
 
 /** A cell to follow. */

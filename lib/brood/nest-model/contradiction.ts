@@ -7,18 +7,33 @@ import type { Timeline } from './timeline';
 /** Below this share of the likelihood the plain model counts as not explaining a record. */
 const SHARE = 0.01;
 
-/** Is it only the floor under all records, a slip of the hand, that makes this record possible? */
-export function isContradictory(
+/** A record with its likelihood under the floor that all records have. */
+export interface FlooredRecord {
+  looks: CellLooks;
+  prior: BuildingPrior;
+  logLik: number;
+}
+
+/** One plain look that is not said to be a second brood contradicts nothing. */
+function canContradict({ looks }: FlooredRecord): boolean {
+  const all = looks.flat();
+  return all.length >= 2 || all.some(({ reused }) => reused);
+}
+
+/** The records that only the floor under all records, a slip of the hand, makes possible. */
+export function contradictoryRecords<R extends FlooredRecord>(
   kernel: NestKernel,
   timeline: Timeline,
-  { looks, prior }: { looks: CellLooks; prior: BuildingPrior },
-): boolean {
-  const all = looks.flat();
-  if (all.length < 2 && !all.some(({ reused }) => reused)) return false;
+  records: readonly R[],
+): Set<R> {
+  const open = records.filter(canContradict);
+  const cells = open.map(({ looks, prior }) => ({ prior, seen: likelihoods(kernel.model, looks, 0) }));
   const newcomers = sharedNewcomers(kernel, timeline);
-  const floors = [0, kernel.model.settings.values.slipFloor.value];
-  const cells = floors.map((floor) => ({ prior, seen: likelihoods(kernel.model, looks, floor) }));
-  const [plain, floored] = forwardCells(kernel, timeline, { cells, newcomers, isFlowNeeded: false });
-  if (!plain || !floored) return false;
-  return plain.isImpossible || plain.logLik - floored.logLik < Math.log(SHARE);
+  const passes = forwardCells(kernel, timeline, { cells, newcomers, isFlowNeeded: false });
+  return new Set(
+    open.filter(({ logLik }, i) => {
+      const plain = passes[i];
+      return plain !== undefined && (plain.isImpossible || plain.logLik - logLik < Math.log(SHARE));
+    }),
+  );
 }

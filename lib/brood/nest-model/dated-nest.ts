@@ -10,7 +10,7 @@ import { type MixedGroup, mixedGroup } from './mixed-group';
 import type { NestHistory } from './nest-history';
 import { type FactorPrior, type NestPosterior, nestPosterior } from './nest-posterior';
 import type { CellGroup } from './node-answer';
-import { isContradictory } from './contradiction';
+import { contradictoryRecords } from './contradiction';
 import { type RateBetween, type Timeline, timelineOf } from './timeline';
 
 /** How the nest's development clock runs. */
@@ -110,13 +110,15 @@ export function datedNest(
     cells: group.cells.length,
   }));
   const posterior = nestPosterior(model, factor, { timeline, groups, futures });
-  const dated = cells.map(({ cells: keys, looks, prior }, group): DatedGroup => {
+  const records = cells.map((group, i) => ({ ...group, logLik: posterior.logLiks[i] ?? 0 }));
+  const slips = contradictoryRecords(posterior.best, timeline, records);
+  const dated = records.map((group, i): DatedGroup => {
+    const { cells: keys, looks, prior } = group;
     const lastLook = history.days[looks.length - 1] ?? 0;
     const future =
       futures[looks.length - 1] ?? futureOf({ from: lastLook, clockEnd: clock.end, horizon }, clock.between);
-    const mixed = mixedGroup(model, { nodes: posterior.nodes, group }, { edges: timeline.edges, lastLook, future });
-    const isSlip = isContradictory(posterior.best, timeline, { looks, prior });
-    return { cells: keys, looks, prior, lastLook, future, mixed, isContradictory: isSlip };
+    const mixed = mixedGroup(model, { nodes: posterior.nodes, group: i }, { edges: timeline.edges, lastLook, future });
+    return { cells: keys, looks, prior, lastLook, future, mixed, isContradictory: slips.has(group) };
   });
   return { model, timeline, posterior, groups: dated };
 }

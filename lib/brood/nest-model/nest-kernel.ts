@@ -16,6 +16,8 @@ import type { Segment } from './timeline';
 /** Masses below this share of a whole cell are dropped, and so are Poisson tails. */
 export const LEAST = 1e-14;
 const TAIL = 1e-10;
+/** The ways in which a brood ends. */
+const ENDS = 4;
 
 /** A brood just laid, followed tick by tick: what every egg has in common. */
 export interface EggRows {
@@ -28,6 +30,13 @@ export interface EggRows {
   capping: number[];
 }
 
+/** A brood just capped, followed tick by tick on the states of one brood. */
+export interface CapRows {
+  chain: Uniformised;
+  /** State masses under the cap after 0, 1, 2, … ticks, until next to nothing is left there. */
+  rows: Float64Array[];
+}
+
 /** The chain at one value of the nest factor, with everything that its cells share. */
 export interface NestKernel {
   model: BroodModel;
@@ -37,6 +46,7 @@ export interface NestKernel {
   cappingGate(rate: number): Gate;
   weightsOf(mean: number): PoissonWeights;
   eggRows(rate: number, ticks: number): EggRows;
+  capRows(rate: number): CapRows;
   /** Flows of a brood laid 0, 1, 2, … steps ago: into the next egg, into capped brood. */
   eggFlows(segment: Segment): { relaid: Float64Array; capping: Float64Array };
 }
@@ -74,6 +84,22 @@ function extend(
   }
 }
 
+/** Follows brood from the first phase under the cap until it is out or lost. */
+function capRowsOf({ pupaPhase, broodSize }: BroodModel, chain: Uniformised): CapRows {
+  const first = new Float64Array(broodSize);
+  first[pupaPhase] = 1;
+  const rows = [first];
+  const blocks = blocksOf(chain, 1);
+  for (let left = 1; left > LEAST && chain.clock > 0;) {
+    const next = new Float64Array(broodSize);
+    tickMass(chain, { current: rows.at(-1) ?? first, next }, blocks);
+    next.fill(0, broodSize - ENDS);
+    left = next.reduce((sum, p) => sum + p, 0);
+    rows.push(next);
+  }
+  return { chain, rows };
+}
+
 /** Builds the shared work of one value of the nest factor. */
 export function nestKernel(model: BroodModel, rho: number): NestKernel {
   const full = kept((rate) => uniformise(model.moves, [rho * rate, 1, 0]));
@@ -94,6 +120,7 @@ export function nestKernel(model: BroodModel, rho: number): NestKernel {
     extend(rows, { laying: model.relayGate, capping: cappingGate(rate) }, ticks);
     return rows;
   };
+  const capRows = kept((rate) => capRowsOf(model, brood(rate)));
   const flows = new Map<string, { relaid: Float64Array; capping: Float64Array }>();
   const eggFlows = ({ days, steps, rate }: Segment) => {
     const key = `${days} ${steps} ${rate}`;
@@ -110,5 +137,5 @@ export function nestKernel(model: BroodModel, rho: number): NestKernel {
     flows.set(key, made);
     return made;
   };
-  return { model, rho, full, brood, cappingGate, weightsOf, eggRows, eggFlows };
+  return { model, rho, full, brood, cappingGate, weightsOf, eggRows, capRows, eggFlows };
 }

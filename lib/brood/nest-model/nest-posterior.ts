@@ -21,6 +21,8 @@ export interface NestPosterior {
   nodes: readonly PosteriorNode[];
   /** The chain at the most probable value of the nest factor. */
   best: NestKernel;
+  /** Log-likelihood of each group there. */
+  logLiks: readonly number[];
   /** Posterior mean and standard deviation of log ρ. */
   logRho: { mean: number; sd: number };
 }
@@ -83,6 +85,13 @@ function findPeak(f: (z: number) => number): Peak {
   return top;
 }
 
+/** Number of the node at the peak. */
+const MIDDLE = 3;
+
+function logLiksOf(groups: readonly GroupAnswer[] = []): number[] {
+  return groups.map(({ forward }) => forward.logLik);
+}
+
 /**
  * Integrates over the nest factor: 7 Gauss–Hermite nodes around the most probable value, as wide as its peak (Liu &
  * Pierce 1994), each with the likelihood of all cells together.
@@ -91,9 +100,10 @@ export function nestPosterior(model: BroodModel, prior: FactorPrior, frame: Nest
   const rhoOf = (z: number) => Math.exp(prior.mean + prior.sd * z);
   if (prior.sd === 0 || frame.groups.length === 0) return fixedFactor(model, prior, frame);
   const { at, sd } = findPeak((z) => nodeLogLik(nestKernel(model, rhoOf(z)), frame) - (z * z) / 2);
+  const best = nestKernel(model, rhoOf(at));
   const nodes = normalNodes().map(({ z, weight }) => {
     const value = at + sd * z;
-    const { logLik, groups } = nodeAnswer(nestKernel(model, rhoOf(value)), frame);
+    const { logLik, groups } = nodeAnswer(z === 0 ? best : nestKernel(model, rhoOf(value)), frame);
     return { z: value, groups, log: Math.log(weight) + (z * z) / 2 + logLik - (value * value) / 2 };
   });
   const most = Math.max(...nodes.map(({ log }) => log));
@@ -104,7 +114,8 @@ export function nestPosterior(model: BroodModel, prior: FactorPrior, frame: Nest
   const variance = nodes.reduce((sum, { z }, i) => sum + (z - mean) ** 2 * (weights[i] ?? 0), 0);
   return {
     nodes: nodes.map(({ z, groups }, i) => ({ rho: rhoOf(z), weight: weights[i] ?? 0, groups })),
-    best: nestKernel(model, rhoOf(at)),
+    best,
+    logLiks: logLiksOf(nodes[MIDDLE]?.groups),
     logRho: { mean: prior.mean + prior.sd * mean, sd: prior.sd * Math.sqrt(variance) },
   };
 }
@@ -112,5 +123,6 @@ export function nestPosterior(model: BroodModel, prior: FactorPrior, frame: Nest
 function fixedFactor(model: BroodModel, { mean, sd }: FactorPrior, frame: NestFrame): NestPosterior {
   const rho = Math.exp(mean);
   const best = nestKernel(model, rho);
-  return { nodes: [{ rho, weight: 1, groups: nodeAnswer(best, frame).groups }], best, logRho: { mean, sd } };
+  const { groups } = nodeAnswer(best, frame);
+  return { nodes: [{ rho, weight: 1, groups }], best, logLiks: logLiksOf(groups), logRho: { mean, sd } };
 }
