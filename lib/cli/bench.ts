@@ -23,7 +23,8 @@ async function preparePages(context: CommandContext): Promise<void> {
   if (!existsSync(join('.next', 'BUILD_ID'))) {
     throw new CommandError('There is no build to measure. Make one first:\n  npm run build');
   }
-  if (!findChromium()) throw new CommandError('There is no Chromium to measure with: install it, or name it in CHROMIUM.');
+  if (!findChromium())
+    throw new CommandError('There is no Chromium to measure with: install it, or name it in CHROMIUM.');
   takeTestTurn(context);
   await startDatabaseServer(context);
 }

@@ -1,10 +1,12 @@
 import { type Random, seededRandom } from '@/lib/kit/random';
-import { type Axial, ringOf } from '@/lib/comb/axial';
+import { type Axial, parseCellKey, ringOf } from '@/lib/comb/axial';
 import type { CellState } from '@/lib/comb/states';
 import { spiral } from '@/lib/comb/walk';
 import { GENUS_ROW } from '@/lib/brood/durations';
 import type { BroodMark, BroodReading } from '@/lib/brood/input';
 import { DEFAULT_CONFUSION } from '@/lib/brood/nest-model/confusion';
+import { looksText } from '@/lib/brood/nest-model/cell-evidence';
+import type { NestHistory } from '@/lib/brood/nest-model/nest-history';
 import { DEFAULT_SETTINGS } from '@/lib/brood/settings';
 import { classAt, recorded, simulateCell } from '@/tests/unit/brood/nest-model/simulate-cell';
 
@@ -65,4 +67,9 @@ export function simulatedReadings(shape: NestShape, seed: number): BroodReading[
 export function simulatedRecords(shape: NestShape, seed: number): string[][] {
   const seen = records(shape, seed).map((cell) => cell.seen);
   return [...new Map(seen.map((classes) => [classes.join(' '), classes])).values()];
+}
+
+/** How many of the cells differ in what was seen or in how far they are from the pedicel. */
+export function countGroups({ cells }: NestHistory): number {
+  return new Set([...cells].map(([key, looks]) => `${ringOf(parseCellKey(key))} ${looksText(looks)}`)).size;
 }

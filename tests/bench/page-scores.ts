@@ -63,7 +63,12 @@ async function scoresOf({ name, as, path, desk }: AuditedPage): Promise<PageScor
     if (!result || !result.lhr.finalDisplayedUrl.endsWith(path)) throw new Error(`${name} led elsewhere`);
     const score = (id: string) => Math.round((result.lhr.categories[id]?.score ?? 0) * 100);
     const [performance, accessibility, bestPractices] = CATEGORIES.map(score);
-    return { name, performance: performance ?? 0, accessibility: accessibility ?? 0, bestPractices: bestPractices ?? 0 };
+    return {
+      name,
+      performance: performance ?? 0,
+      accessibility: accessibility ?? 0,
+      bestPractices: bestPractices ?? 0,
+    };
   } finally {
     await context.close();
     rmSync(folder, { recursive: true, force: true });

@@ -136,7 +136,9 @@ export class DenseCore {
     const forward = this.forward(gaps, likelihoods);
     const backward = this.backward(gaps, likelihoods);
     const smoothed = times.map((_, i) => {
-      const product = (forward.after[i] ?? forward.last).map((p, s) => p * ((backward.values[i] as Float64Array)[s] ?? 0));
+      const product = (forward.after[i] ?? forward.last).map(
+        (p, s) => p * ((backward.values[i] as Float64Array)[s] ?? 0),
+      );
       const total = product.reduce((sum, p) => sum + p, 0);
       return product.map((p) => p / total);
     });
@@ -200,7 +202,8 @@ export class DenseCore {
         earlier = flow;
         if (k === 0 && i > 0) continue;
         const still = gap.unlaidMass.reduce(
-          (sum, at, u) => sum + dot(at[k] as Float64Array, mass) * dot(gap.unlaidValue[u]?.[left] as Float64Array, cell),
+          (sum, at, u) =>
+            sum + dot(at[k] as Float64Array, mass) * dot(gap.unlaidValue[u]?.[left] as Float64Array, cell),
           0,
         );
         first.push(1 - still / whole);

@@ -71,7 +71,9 @@ export function subMatrix({ n, values }: Dense, from: number, to: number): Dense
 }
 
 /** Coefficients of the Taylor series up to the 15th power, in four groups of four. */
-const TAYLOR = Array.from({ length: 16 }, (_, k) => Array.from({ length: k }, (_v, i) => i + 1).reduce((a, b) => a / b, 1));
+const TAYLOR = Array.from({ length: 16 }, (_, k) =>
+  Array.from({ length: k }, (_v, i) => i + 1).reduce((a, b) => a / b, 1),
+);
 
 /**
  * exp(Q · days) by scaling and squaring; the Taylor series up to the 15th power in six products (Paterson &
@@ -88,7 +90,11 @@ export function denseExp(generator: Dense, days: number): Dense {
   const a4 = multiply(a2, a2);
   const group = (from: number) => combination(powers.map((matrix, i) => [TAYLOR[from + i] ?? 0, matrix] as const));
   let sum = group(12);
-  for (const from of [8, 4, 0]) sum = combination([[1, multiply(sum, a4)], [1, group(from)]]);
+  for (const from of [8, 4, 0])
+    sum = combination([
+      [1, multiply(sum, a4)],
+      [1, group(from)],
+    ]);
   for (let i = 0; i < halvings; i++) sum = multiply(sum, sum);
   return sum;
 }
