@@ -65,7 +65,11 @@ function widest(gaps: readonly number[]): number {
   return Math.max(0, ...gaps);
 }
 
-function groupGaps({ timeline, groups, posterior }: DatedNest, g: number, world: { settings: BroodSettings; speed: number }): Gaps {
+function groupGaps(
+  { timeline, groups, posterior }: DatedNest,
+  g: number,
+  world: { settings: BroodSettings; speed: number },
+): Gaps {
   const group = groups[g];
   const answer = posterior.nodes[0]?.groups[g];
   if (!group || !answer) throw new Error(`no group ${g}`);
@@ -89,9 +93,10 @@ function groupGaps({ timeline, groups, posterior }: DatedNest, g: number, world:
       ),
     ),
     first: widest(days.map((day, i) => Math.abs((first[i] ?? NaN) - dense.firstBy(day)))),
-    present: answer.outlook && answer.outlook.alive > 1e-6
-      ? widest(days.map((day, i) => Math.abs((laid[i] ?? NaN) - dense.presentBy(day))))
-      : 0,
+    present:
+      answer.outlook && answer.outlook.alive > 1e-6
+        ? widest(days.map((day, i) => Math.abs((laid[i] ?? NaN) - dense.presentBy(day))))
+        : 0,
   };
 }
 
@@ -99,7 +104,13 @@ function groupGaps({ timeline, groups, posterior }: DatedNest, g: number, world:
 function nestGaps(seed: number): Gaps[] {
   const random = seededRandom(seed);
   const [rho, rate] = [between(random, 0.7, 1.4), between(random, 0.6, 1.2)];
-  const factor = { taxon: GENUS_ROW.taxon, logMean: Math.log(rho), logSd: 0, trust: 'assumption' as const, source: 'test' };
+  const factor = {
+    taxon: GENUS_ROW.taxon,
+    logMean: Math.log(rho),
+    logSd: 0,
+    trust: 'assumption' as const,
+    source: 'test',
+  };
   const settings = { ...SMALL, durationFactors: [factor] };
   const history = nestHistory(smallNest(random, settings, rho * rate));
   if (!history) return [];

@@ -92,7 +92,8 @@ function stepMatrix({ keys, moves }: CellChain, days: number): Dense {
 
 function times(v: Float64Array, { n, values }: Dense): Float64Array {
   const out = new Float64Array(n);
-  for (let i = 0; i < n; i++) for (let j = i; j < n; j++) out[j] = (out[j] ?? 0) + (v[i] ?? 0) * (values[i * n + j] ?? 0);
+  for (let i = 0; i < n; i++)
+    for (let j = i; j < n; j++) out[j] = (out[j] ?? 0) + (v[i] ?? 0) * (values[i * n + j] ?? 0);
   return out;
 }
 
@@ -151,7 +152,13 @@ export function denseCell(cell: DenseCell): DenseCellAnswer {
       unbuilt *= chance(cell, 'absent', seen);
     }
     const total = mass.reduce((sum, p) => sum + p, 0) + unbuilt * after;
-    atLooks.push(byKey(chain.keys, mass.map((p) => p / total), (unbuilt * after) / total));
+    atLooks.push(
+      byKey(
+        chain.keys,
+        mass.map((p) => p / total),
+        (unbuilt * after) / total,
+      ),
+    );
   }
   const total = mass.reduce((sum, p) => sum + p, 0) + unbuilt * cell.absentAt(last);
 
@@ -177,7 +184,9 @@ export function denseCell(cell: DenseCell): DenseCellAnswer {
   return {
     logLik: Math.log(total),
     atLooks,
-    firstBy: (day) => dot(forward[index(day)]?.map((p, s) => p * (laid[s] ?? 0)) ?? built, values.cell[index(day)] ?? built) / total,
-    presentBy: (day) => dot(forward[index(day)]?.map((p, s) => p * (living[s] ?? 0)) ?? built, values.brood[index(day)] ?? built) / alive,
+    firstBy: (day) =>
+      dot(forward[index(day)]?.map((p, s) => p * (laid[s] ?? 0)) ?? built, values.cell[index(day)] ?? built) / total,
+    presentBy: (day) =>
+      dot(forward[index(day)]?.map((p, s) => p * (living[s] ?? 0)) ?? built, values.brood[index(day)] ?? built) / alive,
   };
 }

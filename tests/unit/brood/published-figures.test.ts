@@ -23,11 +23,14 @@ describe('published growth of combs (P rows: biology)', () => {
   it.each([
     [40, 0.952],
     [50, 1.19],
-  ])('P C07: %d cells at 42 days are %d a day, and the default lies between the two (Enteman 1902)', (cells, perDay) => {
-    expect(Math.abs(cells / 42 - perDay)).toBeLessThan(0.005);
-    expect(Math.abs(daysBackToNothing(cells, cells / 42) - 42)).toBeLessThan(1e-6);
-    expect(Math.sign(perDay - values.cellsPerDay.value)).toBe(cells === 40 ? -1 : 1);
-  });
+  ])(
+    'P C07: %d cells at 42 days are %d a day, and the default lies between the two (Enteman 1902)',
+    (cells, perDay) => {
+      expect(Math.abs(cells / 42 - perDay)).toBeLessThan(0.005);
+      expect(Math.abs(daysBackToNothing(cells, cells / 42) - 42)).toBeLessThan(1e-6);
+      expect(Math.sign(perDay - values.cellsPerDay.value)).toBe(cells === 40 ? -1 : 1);
+    },
+  );
 
   it('P C08: Vespula queen nests grow 62.2 cells in 32.7 and 71.3 in 25.8 days (Matthews et al. 1982)', () => {
     expect(Math.abs(daysBackToNothing(62.2, 1.9) - 32.7)).toBeLessThan(0.1);
@@ -49,10 +52,13 @@ describe('published yields that the numbers of the model must leave room for (P 
     ['P. versicolor (Oliveira et al. 2010)', 171.67, 244.2, 0.703],
     ['M. consimilis (Montagna et al. 2010)', 40.7, 72.9, 0.558],
     ['Parapolybia indica (Mie, Japan, 1976–81)', 69.2, 163.7, 0.423],
-  ])('P C09: %s: %d adults from %d cells are %d a cell, within what a cell can yield here', (_, adults, cells, ratio) => {
-    expect(Math.abs(adults / cells - ratio)).toBeLessThan(0.002);
-    expect(ratio).toBeLessThan(values.generations.value * survival());
-  });
+  ])(
+    'P C09: %s: %d adults from %d cells are %d a cell, within what a cell can yield here',
+    (_, adults, cells, ratio) => {
+      expect(Math.abs(adults / cells - ratio)).toBeLessThan(0.002);
+      expect(ratio).toBeLessThan(values.generations.value * survival());
+    },
+  );
 
   it('P C09: up to six adults came out of one cell of P. versicolor, and six broods can be set (Oliveira et al. 2010)', () => {
     expect(SETTING_RULES.generations.max).toBeGreaterThanOrEqual(6);
@@ -88,7 +94,11 @@ describe('arithmetic on the default durations (M rows: coded as written, no biol
     // Ages are spread evenly when eggs are laid evenly: the mean over all ages of what an egg has become.
     for (let age = 0.5; age < 120; age++) {
       const masses = massesAt(laws, age);
-      [[0, 1], [1, 6], [6, 7]].forEach(([from = 0, to = 0], i) => {
+      [
+        [0, 1],
+        [1, 6],
+        [6, 7],
+      ].forEach(([from = 0, to = 0], i) => {
         for (const p of masses.subarray(starts[from], starts[to])) shares[i] = (shares[i] ?? 0) + p / 45;
       });
     }

@@ -60,8 +60,11 @@ describe('the temperature model with default numbers (M rows: coded as written, 
     ['egg', 13.8, 37, 5.97],
     ['larva', 8.5, 422.4, 36.73],
     ['pupa', 13.2, 272.3, 40.04],
-  ])('M C28: the %s of Osmia bicornis, %d °C and %d degree-days, takes %d days at 20 °C (a-priori values)', (_, base, sum, days) => {
-    const settings = { ...RATE, base };
-    expect(Math.abs(daysAt(20, sum / (settings.reference - base), settings) - days)).toBeLessThan(0.01);
-  });
+  ])(
+    'M C28: the %s of Osmia bicornis, %d °C and %d degree-days, takes %d days at 20 °C (a-priori values)',
+    (_, base, sum, days) => {
+      const settings = { ...RATE, base };
+      expect(Math.abs(daysAt(20, sum / (settings.reference - base), settings) - days)).toBeLessThan(0.01);
+    },
+  );
 });
