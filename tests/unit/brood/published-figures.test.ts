@@ -49,16 +49,13 @@ describe('published yields that the numbers of the model must leave room for (P 
   };
 
   it.each([
-    ['P. versicolor (Oliveira et al. 2010)', 171.67, 244.2, 0.703],
-    ['M. consimilis (Montagna et al. 2010)', 40.7, 72.9, 0.558],
-    ['Parapolybia indica (Mie, Japan, 1976–81)', 69.2, 163.7, 0.423],
-  ])(
-    'P C09: %s: %d adults from %d cells are %d a cell, within what a cell can yield here',
-    (_, adults, cells, ratio) => {
-      expect(Math.abs(adults / cells - ratio)).toBeLessThan(0.002);
-      expect(ratio).toBeLessThan(values.generations.value * survival());
-    },
-  );
+    { nests: 'P. versicolor (Oliveira et al. 2010)', adults: 171.67, cells: 244.2, ratio: 0.703 },
+    { nests: 'M. consimilis (Montagna et al. 2010)', adults: 40.7, cells: 72.9, ratio: 0.558 },
+    { nests: 'Parapolybia indica (Mie, Japan, 1976–81)', adults: 69.2, cells: 163.7, ratio: 0.423 },
+  ])('P C09: $nests: $adults adults from $cells cells are $ratio a cell, within what one can yield here', (row) => {
+    expect(Math.abs(row.adults / row.cells - row.ratio)).toBeLessThan(0.002);
+    expect(row.ratio).toBeLessThan(values.generations.value * survival());
+  });
 
   it('P C09: up to six adults came out of one cell of P. versicolor, and six broods can be set (Oliveira et al. 2010)', () => {
     expect(SETTING_RULES.generations.max).toBeGreaterThanOrEqual(6);

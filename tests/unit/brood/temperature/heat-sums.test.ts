@@ -37,11 +37,11 @@ describe('the temperature model with default numbers (M rows: coded as written, 
   });
 
   it.each([
-    ['C21', 12, 3.6265, 0.005],
-    ['C22', 20, 10, 0.001],
-    ['C23', 10, 2.5465, 0.005],
-    ['C23', 8, 1.6265, 0.005],
-  ])('M %s: a sine of %d ± 8 °C makes %d degree-days a day (analytic)', (_, mean, expected, tolerance) => {
+    { id: 'C21', mean: 12, expected: 3.6265, tolerance: 0.005 },
+    { id: 'C22', mean: 20, expected: 10, tolerance: 0.001 },
+    { id: 'C23', mean: 10, expected: 2.5465, tolerance: 0.005 },
+    { id: 'C23', mean: 8, expected: 1.6265, tolerance: 0.005 },
+  ])('M $id: a sine of $mean ± 8 °C makes $expected degree-days a day (analytic)', ({ mean, expected, tolerance }) => {
     expect(Math.abs(degreeDays(mean, 8) - expected)).toBeLessThan(tolerance);
   });
 
@@ -57,14 +57,14 @@ describe('the temperature model with default numbers (M rows: coded as written, 
   });
 
   it.each([
-    ['egg', 13.8, 37, 5.97],
-    ['larva', 8.5, 422.4, 36.73],
-    ['pupa', 13.2, 272.3, 40.04],
+    { stage: 'egg', base: 13.8, sum: 37, days: 5.97 },
+    { stage: 'larva', base: 8.5, sum: 422.4, days: 36.73 },
+    { stage: 'pupa', base: 13.2, sum: 272.3, days: 40.04 },
   ])(
-    'M C28: the %s of Osmia bicornis, %d °C and %d degree-days, takes %d days at 20 °C (a-priori values)',
-    (_, base, sum, days) => {
-      const settings = { ...RATE, base };
-      expect(Math.abs(daysAt(20, sum / (settings.reference - base), settings) - days)).toBeLessThan(0.01);
+    'M C28: the $stage of Osmia bicornis, $base °C and $sum degree-days, takes $days days at 20 °C (a-priori values of a public model)',
+    (row) => {
+      const settings = { ...RATE, base: row.base };
+      expect(Math.abs(daysAt(20, row.sum / (settings.reference - row.base), settings) - row.days)).toBeLessThan(0.01);
     },
   );
 });
