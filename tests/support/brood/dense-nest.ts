@@ -122,71 +122,100 @@ function byKey(keys: readonly string[], mass: Float64Array, absent: number): Rec
   return sums;
 }
 
-/** Works one cell out. Looks must lie on fine steps. */
-export function denseCell(cell: DenseCell): DenseCellAnswer {
-  const chain = cellChain(cell);
-  const n = chain.keys.length;
-  const last = cell.looks.at(-1)?.day ?? cell.from;
-  const steps = Math.round((last - cell.from) * FINE);
-  const lookAt = new Map(cell.looks.map(({ day, seen }) => [Math.round((day - cell.from) * FINE), seen]));
-  const [whole, half] = [stepMatrix(chain, 1 / FINE), stepMatrix(chain, 0.5 / FINE)];
-  const quiet = stepMatrix({ ...chain, moves: chain.moves.filter(({ isLaying }) => !isLaying) }, 1 / FINE);
-  const likelihood = (seen: string) => Float64Array.from(chain.classes, (name) => chance(cell, name, seen));
-  const built = new Float64Array(n);
-  built[0] = 1;
-  const fresh = times(built, half);
+/** A cell with its chain and its matrices, and its looks by fine step. */
+interface Work {
+  cell: DenseCell;
+  chain: CellChain;
+  whole: Dense;
+  half: Dense;
+  /** The same without any laying: what is in the cell is then the brood it was. */
+  quiet: Dense;
+  steps: number;
+  looks: ReadonlyMap<number, string | null>;
+}
 
-  let [mass, unbuilt]: [Float64Array, number] = [new Float64Array(n), 1];
+const stepOf = ({ from }: DenseCell, day: number) => Math.round((day - from) * FINE);
+
+function prepared(cell: DenseCell): Work {
+  const chain = cellChain(cell);
+  const withoutLaying = { ...chain, moves: chain.moves.filter(({ isLaying }) => !isLaying) };
+  return {
+    cell,
+    chain,
+    whole: stepMatrix(chain, 1 / FINE),
+    half: stepMatrix(chain, 0.5 / FINE),
+    quiet: stepMatrix(withoutLaying, 1 / FINE),
+    steps: stepOf(cell, cell.looks.at(-1)?.day ?? cell.from),
+    looks: new Map(cell.looks.map(({ day, seen }) => [stepOf(cell, day), seen])),
+  };
+}
+
+/** Multiplies by P(recorded | state). */
+function weigh({ cell, chain }: Work, vector: Float64Array, seen: string): Float64Array {
+  return vector.map((x, s) => x * chance(cell, chain.classes[s] ?? '', seen));
+}
+
+/** Joint masses just before each step's look, the states after each look, and everything at the end. */
+function followed(work: Work) {
+  const { cell, chain, whole, half, steps, looks } = work;
+  const fresh = times(
+    Float64Array.from(chain.keys, (_, s) => (s === 0 ? 1 : 0)),
+    half,
+  );
+  let [mass, unbuilt]: [Float64Array, number] = [new Float64Array(chain.keys.length), 1];
+  const masses = [mass];
   const atLooks: Record<string, number>[] = [];
-  const forward = [mass];
+  let total = 1;
   for (let i = 1; i <= steps; i++) {
-    const [before, after] = [cell.absentAt(cell.from + (i - 1) / FINE), cell.absentAt(cell.from + i / FINE)];
-    mass = times(mass, whole).map((p, s) => p + unbuilt * (before - after) * (fresh[s] ?? 0));
-    // Both sides of a look are needed: the masses after it here, the looks themselves in the values.
-    forward.push(mass);
-    const seen = lookAt.get(i);
+    const [before, after] = [i - 1, i].map((step) => cell.absentAt(cell.from + step / FINE));
+    const built = unbuilt * ((before ?? 0) - (after ?? 0));
+    mass = times(mass, whole).map((p, s) => p + built * (fresh[s] ?? 0));
+    masses.push(mass);
+    const seen = looks.get(i);
     if (seen === undefined) continue;
     if (seen !== null) {
-      const weight = likelihood(seen);
-      mass = mass.map((p, s) => p * (weight[s] ?? 0));
+      mass = weigh(work, mass, seen);
       unbuilt *= chance(cell, 'absent', seen);
     }
-    const total = mass.reduce((sum, p) => sum + p, 0) + unbuilt * after;
-    atLooks.push(
-      byKey(
-        chain.keys,
-        mass.map((p) => p / total),
-        (unbuilt * after) / total,
-      ),
-    );
+    const absent = unbuilt * (after ?? 0);
+    const all = mass.reduce((sum, p) => sum + p, 0) + absent;
+    const shares = mass.map((p) => p / all);
+    atLooks.push(byKey(chain.keys, shares, absent / all));
+    total = all;
   }
-  const total = mass.reduce((sum, p) => sum + p, 0) + unbuilt * cell.absentAt(last);
+  return { masses, atLooks, total, last: mass };
+}
 
-  const living = Float64Array.from(chain.living, Number);
-  const values = { cell: Array<Float64Array>(steps + 1), brood: Array<Float64Array>(steps + 1) };
-  let [ofCell, ofBrood]: Float64Array[] = [new Float64Array(n).fill(1), living];
-  for (let i = steps; i >= 0; i--) {
-    const seen = lookAt.get(i);
-    if (seen) {
-      const weight = likelihood(seen);
-      ofCell = (ofCell as Float64Array).map((v, s) => v * (weight[s] ?? 0));
-      ofBrood = (ofBrood as Float64Array).map((v, s) => v * (weight[s] ?? 0));
-    }
-    // Values just before the look at this step, beside masses just before it.
-    values.cell[i] = ofCell as Float64Array;
-    values.brood[i] = ofBrood as Float64Array;
-    ofCell = applied(whole, ofCell as Float64Array);
-    ofBrood = applied(quiet, ofBrood as Float64Array);
+/** Values just before each step's look, beside the masses there: P(all that is seen from there on, and `end`). */
+function valued(work: Work, end: Float64Array, step: Dense): Float64Array[] {
+  let value = end;
+  const values = Array<Float64Array>(work.steps + 1);
+  for (let i = work.steps; i >= 0; i--) {
+    const seen = work.looks.get(i);
+    if (seen) value = weigh(work, value, seen);
+    values[i] = value;
+    value = applied(step, value);
   }
-  const alive = dot(mass, living);
-  const index = (day: number) => Math.round((day - cell.from) * FINE);
-  const laid = Float64Array.from(chain.keys, (key) => (key === 'B' ? 0 : 1));
+  return values;
+}
+
+/** Works one cell out. Looks must lie on fine steps. */
+export function denseCell(cell: DenseCell): DenseCellAnswer {
+  const work = prepared(cell);
+  const { keys, living } = work.chain;
+  const { masses, atLooks, total, last } = followed(work);
+  const isLiving = Float64Array.from(living, Number);
+  const isLaidIn = Float64Array.from(keys, (key) => (key === 'B' ? 0 : 1));
+  const any = new Float64Array(keys.length).fill(1);
+  const [ofCell, ofBrood] = [valued(work, any, work.whole), valued(work, isLiving, work.quiet)];
+  const within = (day: number, states: Float64Array, values: readonly Float64Array[]) => {
+    const mass = masses[stepOf(cell, day)]?.map((p, s) => p * (states[s] ?? 0));
+    return mass ? dot(mass, values[stepOf(cell, day)] ?? any) : NaN;
+  };
   return {
     logLik: Math.log(total),
     atLooks,
-    firstBy: (day) =>
-      dot(forward[index(day)]?.map((p, s) => p * (laid[s] ?? 0)) ?? built, values.cell[index(day)] ?? built) / total,
-    presentBy: (day) =>
-      dot(forward[index(day)]?.map((p, s) => p * (living[s] ?? 0)) ?? built, values.brood[index(day)] ?? built) / alive,
+    firstBy: (day) => within(day, isLaidIn, ofCell) / total,
+    presentBy: (day) => within(day, isLiving, ofBrood) / dot(last, isLiving),
   };
 }

@@ -29,7 +29,7 @@ function layings({ cells }: BroodEstimate): number[] {
   return cells.flatMap(({ laid }) => (laid ? [median(laid)] : []));
 }
 
-describe('the temperature of a nest', () => {
+describe('the temperature of a nest', { timeout: 60_000 }, () => {
   const calendar = dated();
 
   it('M: a constant 25 °C gives every cell and the nest the dates of the reference clock', () => {
