@@ -5,22 +5,12 @@ import { requireChromium } from './chromium';
 import { CommandError, Stopped } from './command-error';
 import { type Counts, NOTHING, addCounts, formatCounts } from './counts';
 import { startDatabaseServer } from './database-server';
-import { lockHolder, lockPath, tryLock, unlock } from './pid-lock.mjs';
 import { runChecks } from './run-checks';
 import { type CommandContext, runCommand } from './run-command';
 import { applyTestEnvironment } from './test-environment.mjs';
 import { type TestPart, readTestOptions } from './test-options';
 import { runPlaywright, runVitest } from './test-parts';
-
-/** One test run per data folder: a second would share its database and ports. */
-function takeTurn({ atEnd }: CommandContext): void {
-  const lock = lockPath(dataDir(), 'test');
-  if (!tryLock(lock)) {
-    const other = 'Give this one its own: DATA_DIR=.data-test-2 DB_PORT=3337 PORT=3200 npm test';
-    throw new CommandError(`Another npm test is running here (process ${lockHolder(lock)}).\n${other}`);
-  }
-  atEnd(async () => unlock(lock));
-}
+import { takeTestTurn } from './test-turn';
 
 /** Runs a part; whatever it throws is one failure, except being told to stop. */
 async function counted(part: () => Promise<Counts>): Promise<Counts> {
@@ -65,7 +55,7 @@ applyTestEnvironment();
 /** `npm test`: everything from a fresh clone; the last line is `N passed, N failed`. */
 await runCommand(async (context) => {
   const parts = readTestOptions(process.argv.slice(2));
-  takeTurn(context);
+  takeTestTurn(context);
   context.progress.note(`results in ${join(dataDir(), 'results')}, pictures in .artifacts/screens`);
   let counts = NOTHING;
   for (const run of plan(parts, context)) counts = addCounts(counts, await counted(run));

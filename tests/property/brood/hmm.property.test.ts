@@ -6,7 +6,7 @@ import { type CellRecord, historyAnswer } from '@/lib/brood/hmm/history-answer';
 import { erlangStage } from '@/lib/brood/hmm/stage-fit';
 import { type Station, filterForward, posterior, valueBackward } from '@/lib/brood/hmm/stations';
 import { type SpeedPiece, transitions } from '@/lib/brood/hmm/transitions';
-import { denseSmooth, transitionMatrix } from '@/tests/unit/brood/hmm/dense';
+import { denseSmooth, transitionMatrix } from '@/tests/support/brood/dense';
 
 const SEEDS = Array.from({ length: 200 }, (_, seed) => seed + 1);
 
