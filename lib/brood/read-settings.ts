@@ -114,9 +114,20 @@ function readLearnt(given: Fields, field: string): Pick<BroodSettings, 'confusio
   };
 }
 
+/** The reference of every row has to have a rate to be 1 at. */
+function checkReferences({ values, durations }: Pick<BroodSettings, 'values' | 'durations'>, field: string): void {
+  const [base, plateau] = [values.heatBase.value, values.heatPlateau.value];
+  for (const { taxon, referenceC } of durations) {
+    if (referenceC > base && referenceC <= plateau) continue;
+    const words = `puts ${referenceC} °C for ${taxon} outside development, which runs from above ${base} to ${plateau} °C`;
+    throw new FieldError(field, words);
+  }
+}
+
 /**
  * Reads settings that differ from the defaults: any numbers by name, `durations` rows that go before the built-in
- * ones, what was learnt (`confusion`, `durationFactors`), and a `version` text. A name that is not a setting is refused, since a slip there would change dates unseen.
+ * ones, what was learnt (`confusion`, `durationFactors`), and a `version` text. A name that is not a setting is
+ * refused, since a slip there would change dates unseen.
  *
  * @throws FieldError naming the member.
  */
@@ -129,13 +140,15 @@ export function readSettings(value: unknown, field: string): BroodSettings {
     values[name] = readSetting(number, `${field}.${name}`, name);
   }
   const rows = given.durations === undefined ? [] : readList(given.durations, `${field}.durations`, readRow);
+  const durations = [...rows, ...DEFAULT_SETTINGS.durations];
+  checkReferences({ values, durations }, field);
   return {
     version:
       given.version === undefined
         ? `${DEFAULT_SETTINGS.version}, changed`
         : readText(given.version, `${field}.version`),
     values,
-    durations: [...rows, ...DEFAULT_SETTINGS.durations],
+    durations,
     ...readLearnt(given, field),
   };
 }

@@ -50,6 +50,7 @@ const result = answer(process.argv.slice(2));
 if (result.ok) {
   process.stdout.write(`${JSON.stringify(result.value, null, 2)}\n`);
 } else {
-  process.stderr.write(`${result.error}\n`);
+  // Names and texts of the file are repeated in the message; it stays one line.
+  process.stderr.write(`${result.error.replace(/\s+/g, ' ')}\n`);
   process.exitCode = EXIT_MALFORMED;
 }
