@@ -47,8 +47,10 @@ export function poissonMean(sequence: Float64Array, { first, weights }: PoissonW
   const within = Math.min(weights.length, Math.max(0, last - first));
   let [sum, mass] = [0, 0];
   for (let i = 0; i < within; i++) sum += (weights[i] ?? 0) * (sequence[first + i] ?? 0);
+  const held = sequence[last] ?? 0;
+  if (held === 0) return sum;
   for (let i = within; i < weights.length; i++) mass += weights[i] ?? 0;
-  return sum + mass * (sequence[last] ?? 0);
+  return sum + mass * held;
 }
 
 /** Averages a sequence over each of several Poisson laws. */

@@ -8,7 +8,7 @@ import type { Timeline } from './timeline';
 const SHARE = 0.01;
 
 /** A record with its likelihood under the floor that all records have. */
-export interface FlooredRecord {
+interface FlooredRecord {
   looks: CellLooks;
   prior: BuildingPrior;
   logLik: number;

@@ -4,17 +4,20 @@ import type { NestKernel } from './nest-kernel';
 import type { Segment } from './timeline';
 
 /** Values at the end of the first segment: of the whole cell, and of the brood that is alive at the last look. */
-export interface EndValues {
+interface EndValues {
   whole: Float64Array;
   present: Float64Array;
 }
 
 /** The same values as seen from each step of the segment. */
-export interface StepValues {
+interface StepValues {
   firstEgg: Float64Array;
   presentEgg: Float64Array;
   presentCapped: Float64Array;
 }
+
+/** Values below this share of the largest count as none. */
+const NOTHING = 1e-16;
 
 /** Σ row · value over the states from `from` on; `value` begins at `from − offset`. */
 function dot(
@@ -48,6 +51,14 @@ function eggValues(kernel: NestKernel, { rate, ticks }: { rate: number; ticks: n
   return { whole, present };
 }
 
+/** A sequence up to where it falls to nothing for good. */
+function upToNothing(sequence: Float64Array): Float64Array {
+  let [end, most] = [sequence.length, 0];
+  for (let n = 0; n < end; n++) most = Math.max(most, sequence[n] ?? 0);
+  while (end > 0 && (sequence[end - 1] ?? 0) <= most * NOTHING) end--;
+  return end === sequence.length ? sequence : Float64Array.from([...sequence.subarray(0, end), 0]);
+}
+
 /**
  * Carries values back through the first segment, where nothing was seen and only the flows into eggs and caps count:
  * every egg has the same rows of masses, so they are weighed with the values instead of following each record.
@@ -67,7 +78,7 @@ export function firstSegmentValues(kernel: NestKernel, { days, steps, rate }: Se
   const laws = at(clock);
   return {
     firstEgg: poissonMeans(whole, laws),
-    presentEgg: poissonMeans(present, laws),
-    presentCapped: poissonMeans(capped, cap.chain.clock === clock ? laws : at(cap.chain.clock)),
+    presentEgg: poissonMeans(upToNothing(present), laws),
+    presentCapped: poissonMeans(upToNothing(capped), cap.chain.clock === clock ? laws : at(cap.chain.clock)),
   };
 }

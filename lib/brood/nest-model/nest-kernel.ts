@@ -31,7 +31,7 @@ export interface EggRows {
 }
 
 /** A brood just capped, followed tick by tick on the states of one brood. */
-export interface CapRows {
+interface CapRows {
   chain: Uniformised;
   /** State masses under the cap after 0, 1, 2, … ticks, until next to nothing is left there. */
   rows: Float64Array[];
