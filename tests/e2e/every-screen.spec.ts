@@ -1,9 +1,7 @@
 import AxeBuilder from '@axe-core/playwright';
 import { type Page, expect, test } from '@playwright/test';
-import { signInByForm } from '@/tests/support/pages/sign-in';
+import { signedInPerson, useSignIn } from '@/tests/support/pages/sign-in';
 import { screenshotPath } from '@/tests/support/pages/screenshots';
-import { WireClient } from '@/tests/support/wire/wire-client';
-import { origin } from '@/tests/support/running-server';
 
 /** A screen to look at: who looks, where, and a name for its picture. */
 interface Screen {
@@ -77,8 +75,7 @@ interface NestAnswer {
 }
 
 async function bandstandRoof(): Promise<KnownIds> {
-  const reviewer = new WireClient(origin());
-  await reviewer.signIn(REVIEWER);
+  const reviewer = await signedInPerson(REVIEWER);
   const { nests } = await reviewer.get<{ nests: { id: string; code: string }[] }>('/api/nests?q=N12');
   const nest = nests.find(({ code }) => code === 'N12')?.id ?? '';
   const { visits } = await reviewer.get<NestAnswer>(`/api/nests/${nest}`);
@@ -96,7 +93,7 @@ async function settled(page: Page): Promise<void> {
 for (const screen of SCREENS) {
   test(`${screen.name}: nothing for axe to find, no sideways scroll, pictures at both sizes`, async ({ page }) => {
     const known = await bandstandRoof();
-    if (screen.as) await signInByForm(page, screen.as);
+    if (screen.as) await useSignIn(page, screen.as);
     if (screen.name.startsWith('field-') && screen.as) {
       await page.goto('/field');
       await expect(page.getByText('N12').first()).toBeVisible({ timeout: 20_000 });

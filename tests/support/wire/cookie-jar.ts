@@ -13,6 +13,11 @@ export class CookieJar {
     }
   }
 
+  /** Every cookie with its name. */
+  all(): { name: string; value: string }[] {
+    return [...this.cookies].map(([name, value]) => ({ name, value }));
+  }
+
   /** The `Cookie` header for the next request. */
   header(): string {
     return [...this.cookies].map(([name, value]) => `${name}=${value}`).join('; ');
